@@ -1,0 +1,61 @@
+package arrest
+
+import "arrestcheck/arrest/quantity"
+
+// Evidence says where an estimate comes from. Estimates of different evidence
+// stand side by side; they are never averaged.
+type Evidence string
+
+const (
+	Given    Evidence = "given"    // the stop and fall as entered
+	Shape    Evidence = "shape"    // a pulse shape the user assumes: conditional, decides no limit
+	Rated    Evidence = "rated"    // what a device's document promises while its conditions hold
+	Modelled Evidence = "modelled" // the connector path, worked out in time
+	Measured Evidence = "measured" // a load-cell record
+)
+
+// Bound says what an estimate promises, and so which way it can err.
+type Bound string
+
+const (
+	AtLeast Bound = "at least" // a floor: the true figure is not below Low
+	AtMost  Bound = "at most"  // a ceiling: the true figure is not above High
+	Between Bound = "between"  // the true figure lies from Low to High
+)
+
+// Entered stands in the place of a method where a figure is as entered, or a
+// plain sum of such.
+const Entered = "entered"
+
+// An Estimate is one figure for one quantity from one kind of evidence, SI.
+// NaN stands for what is absent: High of a floor, Low of a ceiling, Value
+// where an input was written as a range and so has no middle.
+type Estimate struct {
+	Quantity         Quantity
+	Evidence         Evidence
+	Method           string // id of the method, "M-06"
+	Bound            Bound
+	Low, Value, High float64
+
+	// Reach is the upper end of a floor over everything the entries allow,
+	// +Inf where that is open. NaN for estimates that are no floors.
+	Reach float64
+
+	// Typed is the unit the figure was typed in when it is printed and
+	// compared as typed; the zero Unit when it was calculated.
+	Typed quantity.Unit
+
+	// From names the document of a rating or the assumed shape.
+	From string
+
+	// Uses lists the inputs the figure rests on, as indexes into Result.Inputs.
+	Uses []int
+
+	// Outside is true for a rating some of whose conditions do not hold over
+	// the whole of the entries: then the figure is no number (all NaN).
+	Outside bool
+}
+
+// Conditional reports whether the estimate holds only under an assumption of
+// the user's and so decides no limit either way.
+func (e *Estimate) Conditional() bool { return e.Evidence == Shape }

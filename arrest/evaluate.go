@@ -1,0 +1,231 @@
+package arrest
+
+import (
+	"math"
+	"slices"
+
+	"arrestcheck/arrest/quantity"
+)
+
+// An evaluation gathers a Result.
+type evaluation struct {
+	job     *Job
+	lo, hi  Case // every input at its low and at its high end
+	res     Result
+	spans   spans
+	written Point     // at the figures as written, where they have middles
+	uses    [5][]int  // inputs by place
+	resting [32][]int // inputs by set of places, made when first asked for
+}
+
+// Evaluate works a job out over its bands: every estimate with its ends, the
+// contradictions between them, and the warnings. The working is left to
+// ShowWorking. The job must be one that Impossible does not refuse. Equal jobs
+// give equal results, to the last bit, on every machine.
+func Evaluate(j *Job) Result {
+	ev, partImpossible := begin(j)
+	ev.res.Estimates = make([]Estimate, 0, len(outputs)+4*(1+len(j.Ratings)))
+	ev.closedForms()
+	ev.entered()
+	for i := range j.Ratings {
+		ev.rating(i)
+	}
+	ev.contradictions()
+	ev.warn(partImpossible)
+	return ev.res
+}
+
+// ShowWorking adds to r, the result of j, the working line by line.
+func ShowWorking(j *Job, r *Result) {
+	ev, _ := begin(j)
+	ev.working()
+	r.Working = ev.res.Working
+}
+
+// begin does what results and working share: the spans of all outputs.
+func begin(j *Job) (ev *evaluation, partImpossible bool) {
+	ev = &evaluation{job: j, res: Result{Inputs: j.Inputs, Persons: j.Persons, Example: j.Example}}
+	ev.lo, ev.hi = ends(j)
+	ev.sortInputs()
+	At(&j.Point, &ev.written)
+	ev.spans, partImpossible = overCorners(j)
+	ev.assumedShape()
+	return ev, partImpossible
+}
+
+// sortInputs notes which inputs each bit of rests stands for.
+func (ev *evaluation) sortInputs() {
+	for i := range ev.job.Inputs {
+		in := &ev.job.Inputs[i]
+		if in.Set == nil || in.Role == OfPlace {
+			continue
+		}
+		ev.uses[in.place()] = append(ev.uses[in.place()], i)
+	}
+}
+
+// place returns the number of the bit of rests that the input stands behind.
+func (in *Input) place() int {
+	switch in.Role {
+	case OfWorker:
+		return 0
+	case OfFall:
+		return 1
+	}
+	switch in.Key {
+	case "stop.distance":
+		return 2
+	case "stop.time":
+		return 3
+	}
+	return 4
+}
+
+// restsOn lists the inputs behind a set of bits.
+func (ev *evaluation) restsOn(r rests) []int {
+	if ev.resting[r] == nil {
+		list := make([]int, 0, len(ev.job.Inputs))
+		for bit := range ev.uses {
+			if r>>bit&1 == 1 {
+				list = append(list, ev.uses[bit]...)
+			}
+		}
+		ev.resting[r] = slices.Clip(list)
+	}
+	return ev.resting[r]
+}
+
+// allWritten reports whether every one of the inputs has a middle figure.
+func (ev *evaluation) allWritten(uses []int) bool {
+	for _, i := range uses {
+		if !ev.job.Inputs[i].HasValue() {
+			return false
+		}
+	}
+	return true
+}
+
+// closedForms turns the spans into estimates.
+func (ev *evaluation) closedForms() {
+	for i := range outputs {
+		o, s := &outputs[i], &ev.spans[i]
+		if !s.known() {
+			continue
+		}
+		e := Estimate{
+			Quantity: o.quantity, Evidence: o.evidence, Method: o.method, Bound: o.bound,
+			Low: s.low.value, Value: nan, High: s.high.value, Reach: nan,
+			Uses: ev.restsOn(o.rests),
+		}
+		stopped := o.rests&(onDistance|onTime) != 0
+		if ev.allWritten(e.Uses) && !(stopped && ev.written.Impossible) {
+			e.Value = o.of(&ev.written)
+		}
+		if o.evidence == Shape {
+			e.From = ev.job.Point.Pulse.String()
+		}
+		if o.bound == AtLeast {
+			e.Reach, e.High = e.High, nan
+		}
+		ev.asTyped(&e)
+		ev.res.Estimates = append(ev.res.Estimates, e)
+	}
+}
+
+// asTyped restores the digits as written of what is entered and not
+// calculated: the sum of the masses, and a free fall from rest.
+func (ev *evaluation) asTyped(e *Estimate) {
+	var b quantity.Band
+	switch {
+	case e.Evidence != Given:
+		return
+	case e.Quantity == TotalMass:
+		b = ev.job.TotalMass()
+	case e.Quantity == FreeFall && len(e.Uses) == 1 && ev.job.Inputs[e.Uses[0]].Key == "fall.free_fall":
+		b = ev.job.Inputs[e.Uses[0]].Band
+		e.Method = Entered
+	default:
+		return
+	}
+	e.Low, e.Value, e.High, e.Typed = b.Low, b.Value, b.High, b.Unit
+}
+
+// TotalMass returns the sum of the masses as written, exact and rounded once.
+func (j *Job) TotalMass() quantity.Band {
+	var sum quantity.Band
+	first := true
+	for i := range j.Inputs {
+		in := &j.Inputs[i]
+		if in.Role != OfWorker {
+			continue
+		}
+		if first {
+			sum, first = in.Band, false
+			continue
+		}
+		sum = quantity.Sum(sum, in.Band)
+	}
+	return sum
+}
+
+// entered adds the estimates that are figures of [stop] as they stand. The
+// deceleration distance, which leaves out the stretch of a lifeline, is at
+// most the stopping distance.
+func (ev *evaluation) entered() {
+	for _, i := range ev.uses[2] {
+		b := &ev.job.Inputs[i].Band
+		ev.add(StoppingDistance, Between, b, i)
+		ev.add(DecelerationDistance, AtMost, b, i)
+	}
+	for _, i := range ev.uses[3] {
+		ev.add(StoppingTime, Between, &ev.job.Inputs[i].Band, i)
+	}
+}
+
+func (ev *evaluation) add(q Quantity, bound Bound, b *quantity.Band, input int) {
+	e := Estimate{
+		Quantity: q, Evidence: Given, Method: Entered, Bound: bound,
+		Low: b.Low, Value: b.Value, High: b.High, Reach: nan,
+		Typed: b.Unit, Uses: []int{input},
+	}
+	if bound == AtMost {
+		e.Low, e.Value = nan, nan
+	}
+	ev.res.Estimates = append(ev.res.Estimates, e)
+}
+
+// estimate returns the index of the first estimate of a quantity by an
+// evidence, or -1.
+func (r *Result) estimate(q Quantity, e Evidence) int {
+	for i := range r.Estimates {
+		if r.Estimates[i].Quantity == q && r.Estimates[i].Evidence == e {
+			return i
+		}
+	}
+	return -1
+}
+
+// contradictions compares all pairs of unconditional estimates of a quantity.
+func (ev *evaluation) contradictions() {
+	es := ev.res.Estimates
+	for a := range es {
+		for b := a + 1; b < len(es); b++ {
+			if es[a].Quantity != es[b].Quantity || es[a].silent() || es[b].silent() {
+				continue
+			}
+			whole := es[a].above(es[a].Low, &es[b]) || es[b].above(es[b].Low, &es[a])
+			part := es[a].above(es[a].Reach, &es[b]) || es[b].above(es[b].Reach, &es[a])
+			if whole || part {
+				ev.res.Contradictions = append(ev.res.Contradictions, Contradiction{a, b, !whole})
+			}
+		}
+	}
+}
+
+// silent reports whether the estimate has no say in a contradiction.
+func (e *Estimate) silent() bool { return e.Conditional() || e.Outside }
+
+// above reports whether x, an end of e, lies above all that o allows.
+func (e *Estimate) above(x float64, o *Estimate) bool {
+	return o.Bound != AtLeast && !math.IsNaN(x) && x > o.High
+}

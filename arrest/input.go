@@ -1,0 +1,120 @@
+package arrest
+
+import (
+	"math"
+
+	"arrestcheck/arrest/quantity"
+)
+
+// Source says how the user came by a figure.
+type Source string
+
+const (
+	NoSource     Source = "" // nothing said: the input stays open
+	FromMeasured Source = "measured"
+	FromDrawing  Source = "drawing"
+	FromPlan     Source = "plan"
+	FromLabel    Source = "label"
+	FromStandard Source = "standard"
+	FromAssumed  Source = "assumed"
+)
+
+// Sources returns the words a job file may use, in print order.
+func Sources() []Source {
+	return []Source{FromMeasured, FromDrawing, FromPlan, FromLabel, FromStandard, FromAssumed}
+}
+
+// Role says what an input describes; it fixes which sources settle it.
+type Role uint8
+
+const (
+	OfWorker   Role = iota + 1 // masses: measured, drawing or plan settle
+	OfFall                     // free fall, speed: measured, drawing or plan settle
+	OfStop                     // distance, time, shape: only measured settles (nobody plans a stopping distance)
+	OfDocument                 // figures of a rating: the document is the source
+	OfPlace                    // gravity, a stated constant
+)
+
+// An Input is one figure of the job. The inputs form the one list from which
+// corners, sweeps, solves, samples and the table of inputs are made.
+type Input struct {
+	Key    string // "worker.mass", "rated[1].peak_force_at_most"
+	Role   Role
+	Band   quantity.Band
+	Source Source
+	Note   string
+
+	// Set writes an SI figure into a Case; nil where At does not use the input.
+	Set func(*Case, float64)
+}
+
+// OpenReason says why an input is open; the empty reason means settled.
+type OpenReason string
+
+const (
+	Settled         OpenReason = ""
+	OpenNoSource    OpenReason = "no source"
+	OpenSource      OpenReason = "source does not settle it"
+	OpenNoTolerance OpenReason = "no tolerance"
+)
+
+// Open says whether and why the input is open. An input is settled by a
+// source that can settle its role and a tolerance that is written (a range, or
+// a ± that may be 0). An exact zero with a source needs no tolerance.
+func (in *Input) Open() OpenReason {
+	switch {
+	case in.Role == OfDocument || in.Role == OfPlace:
+		return Settled
+	case in.Source == NoSource:
+		return OpenNoSource
+	case !in.settles():
+		return OpenSource
+	case in.Band.Tolerance == quantity.Untold && !in.exactZero():
+		return OpenNoTolerance
+	}
+	return Settled
+}
+
+func (in *Input) settles() bool {
+	switch in.Source {
+	case FromMeasured:
+		return true
+	case FromDrawing, FromPlan:
+		return in.Role == OfWorker || in.Role == OfFall
+	}
+	return false
+}
+
+func (in *Input) exactZero() bool { return in.Band.Low == 0 && in.Band.High == 0 }
+
+// HasValue reports whether a middle figure was written.
+func (in *Input) HasValue() bool { return !math.IsNaN(in.Band.Value) }
+
+// A Rating is what the document of a device promises, and the conditions
+// under which it does.
+type Rating struct {
+	Document   string // required: the source of every figure here
+	Conditions string // words of the document that cannot be checked; printed
+	Note       string
+
+	TotalMass      quantity.Band // required, a range
+	FreeFallAtMost quantity.Band // required
+
+	PeakForceAtMost *quantity.Band // nil where the document is silent
+	MeanForceAtMost *quantity.Band
+	TravelAtMost    *quantity.Band
+
+	// TravelIsDeceleration is true when the document says that its travel is
+	// the whole deceleration distance; else it is the travel of the absorber.
+	TravelIsDeceleration bool
+}
+
+// A Job is everything the mechanics need to know of one fall and its stop.
+type Job struct {
+	Point   Case    // the figures as written (lower ends where a range has no middle)
+	Inputs  []Input // the one list
+	Ratings []Rating
+	Persons int       // on one system, at least 1
+	Example bool      // the file says that its values are examples
+	Notes   []Warning // what the reader of the file has to add: figures outside the usual
+}

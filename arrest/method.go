@@ -1,0 +1,133 @@
+package arrest
+
+import (
+	"slices"
+
+	"arrestcheck/arrest/quantity"
+)
+
+// A Symbol is one letter of a formula.
+type Symbol struct {
+	Name      string // as in the formula text
+	Meaning   string
+	Dimension quantity.Dimension
+}
+
+// A Method is the record of one way to a result: what the methods listing,
+// the working and the list of references print.
+type Method struct {
+	ID       string // "M-02"
+	Title    string
+	Formulas []string // explicit formulas as text, "F_d = W + m*v^2/(2*d)"
+	Symbols  []Symbol
+	Valid    string // when it holds
+	Errs     string // which way it errs
+	Source   string // published source, or derivation, or "common practice"
+}
+
+const derived = "derived here from Newton's laws; "
+
+// methods holds all but the formulas and symbols, which are those of passages.
+var methods = [...]Method{
+	{
+		ID: "M-01", Title: "speed, energy and momentum at the start of the arrest",
+		Valid:  "the body falls freely, in the direction of gravity, without the drag of the air",
+		Errs:   "overstates the speed, by about 0.3 % to 3 % at a free fall of 6 m, depending on the body",
+		Source: derived + "standard gravity from NIST SP 811",
+	},
+	{
+		ID: "M-02", Title: "mean force over the stopping distance, from work and energy",
+		Valid:  "the distance is the whole vertical travel of the body from the first pull to rest, every stretch included",
+		Errs:   "a mean: the peak is above it. A distance that is too long understates. Without W the sum is too low by the body weight",
+		Source: derived + "the same relation as a worked example: OpenStax, College Physics 2e, Work, Energy, and Power in Humans (reaction of a landing, the weight included)",
+	},
+	{
+		ID: "M-03", Title: "mean force over the stopping time, from impulse and momentum",
+		Valid:  "the time runs from the first pull to the first rest, no hanging and no bounce in it",
+		Errs:   "a mean: the peak is above it. A time that is too long understates. Without W the sum is too low by the body weight",
+		Source: derived + "worked examples of the net force: OpenStax, University Physics Vol. 1, Impulse and Collisions",
+	},
+	{
+		ID: "M-04", Title: "do distance and time fit each other",
+		Valid:  "distance and time describe one and the same stop",
+		Errs:   "a ratio of 1 confirms neither figure: both routes share the mass, the speed and Newton. Below 1 the force comes late, above 1 early, or the time holds hanging or bounce",
+		Source: derived + "(F_d - W)/(F_t - W) = r holds exactly",
+	},
+	{
+		ID: "M-05", Title: "what is possible",
+		Valid:  "the connector pulls and never pushes, and the body does not rise before rest",
+		Errs:   "not at all: beyond d_limit no stop is possible",
+		Source: derived + "the body covers less than it would falling on freely",
+	},
+	{
+		ID: "M-06", Title: "floor of the peak: not less than",
+		Valid:  "any stop of this body over this distance and in this time, whatever the force does in between",
+		Errs:   "always low: the true peak is not below the floor and can be far above it. It hangs on the last digits of the time where it lies far above both means",
+		Source: derived + "the least peak is that of falling on freely for tau and braking evenly after it; for a longer stop the even braking over d",
+	},
+	{
+		ID: "M-07", Title: "if the stop had an assumed shape",
+		Valid:  "only if the force really has the assumed shape from the first pull to rest; the shape is the user's assumption",
+		Errs:   "either way: it decides no limit",
+		Source: derived + "shapes as the classical shock pulses (half sine, terminal-peak sawtooth, trapezoid) of IEC 60068-2-27, their names from memory",
+	},
+	{
+		ID: "M-08", Title: "severity: force over weight, net deceleration, onset",
+		Valid:  "as its force: force over weight and net deceleration in g differ by 1",
+		Errs:   "as its force. Says nothing about injury",
+		Source: derived + "onset is the peak over the time of the rise",
+	},
+	{
+		ID: "M-09", Title: "what a device's document promises",
+		Valid:  "while every condition of the document holds over the whole of the entries: total mass, free fall, and its words about anchor, edge, wet and cold",
+		Errs:   "a ceiling: the true figure may be far below. Outside any condition it is no number",
+		Source: "the document named with it, as entered by the user",
+	},
+	{
+		ID: "M-50", Title: "bands: corners and turning points",
+		Valid:  "every figure lies somewhere in its band, in any combination",
+		Errs:   "wide: the ends are those of the least and most favourable combination. A range has no middle figure unless one was written",
+		Source: derived + "each output but the floor is monotone in every input; the floor's least is at m = m1, t = t2, v = clamp(2*d1/t2, v1, v2), d = clamp(v*t2/2, d1, d2)",
+	},
+}
+
+// Methods returns the records of all methods, in order of their ids.
+func Methods() []Method {
+	list := slices.Clone(methods[:])
+	for i := range list {
+		m := &list[i]
+		for j := range passages {
+			for _, l := range passages[j].lines {
+				if l.method == m.ID && !slices.Contains(m.Formulas, l.text) {
+					m.Formulas = append(m.Formulas, l.text)
+				}
+			}
+		}
+		m.Symbols = symbolsOf(m.Formulas)
+	}
+	return list
+}
+
+// MethodByID returns the record of one method and whether there is one.
+func MethodByID(id string) (Method, bool) {
+	for _, m := range Methods() {
+		if m.ID == id {
+			return m, true
+		}
+	}
+	return Method{}, false
+}
+
+// symbolsOf lists the letters of some formulas, each once, in order.
+func symbolsOf(formulas []string) []Symbol {
+	var list []Symbol
+	for _, f := range formulas {
+		for _, name := range identifiers(f) {
+			s := findSymbol(name).Symbol
+			if !slices.Contains(list, s) {
+				list = append(list, s)
+			}
+		}
+	}
+	return list
+}

@@ -1,0 +1,64 @@
+package arrest
+
+import (
+	"math"
+
+	"arrestcheck/arrest/quantity"
+)
+
+// shapeSlack is how far, relative, a distance may lie off the line of an
+// assumed shape before the entries contradict it: entries are read to about
+// that. The same figure decides when two routes agree closely (M-04).
+const shapeSlack = 0.005
+
+// assumedShape puts the spans of the assumed shape right where both distance
+// and time are given: they are worked out from each of the two and the wider
+// span is kept, unless the entries contradict the shape: then there is none.
+func (ev *evaluation) assumedShape() {
+	c := &ev.job.Point
+	if c.Pulse == NoPulse || c.Distance <= 0 || c.Time <= 0 {
+		return
+	}
+	clear := func() {
+		for i := range outputs {
+			if outputs[i].evidence == Shape {
+				ev.spans[i] = span{extreme{value: nan}, extreme{value: nan}}
+			}
+		}
+	}
+	clear()
+	least, greatest := ev.shapeDistances()
+	if greatest*(1+shapeSlack) < ev.lo.Distance || least*(1-shapeSlack) > ev.hi.Distance {
+		ev.tell(ShapeContradicted, Text(c.Pulse.String()), length(least), length(greatest), length(ev.lo.Distance), length(ev.hi.Distance))
+		return
+	}
+	var p Point
+	corners(ev.job, func(c *Case) {
+		for _, c := range [...]Case{withoutTime(*c), withoutDistance(*c)} {
+			At(&c, &p)
+			for i := range outputs {
+				if outputs[i].evidence == Shape {
+					ev.spans[i].take(outputs[i].of(&p), &c)
+				}
+			}
+		}
+	})
+	ev.written.Assumed = Assumed{nan, nan, nan, nan, nan, nan}
+}
+
+func withoutTime(c Case) Case     { c.Time = 0; return c }
+func withoutDistance(c Case) Case { c.Distance = 0; return c }
+
+// shapeDistances returns the least and greatest stopping distance the assumed
+// shape asks for over the bands of all else. It grows with every input.
+func (ev *evaluation) shapeDistances() (least, greatest float64) {
+	least, greatest = math.Inf(1), math.Inf(-1)
+	var p Point
+	corners(ev.job, func(c *Case) {
+		At(c, &p)
+		least, greatest = min(least, p.Assumed.Distance), max(greatest, p.Assumed.Distance)
+	})
+	return least, greatest
+}
+
+func length(x float64) Arg { return Figure(quantity.Length, x, quantity.Nearest) }
