@@ -8,6 +8,10 @@ var nan = math.NaN()
 // cannot happen is told by Point.Impossible. c must hold a positive total mass
 // and gravity, and no negative figure; the readers of files see to that.
 func At(c *Case, p *Point) {
+	if c.Load.Mass > 0 {
+		loadAt(c, p)
+		return
+	}
 	m := c.Mass + c.Tools
 	g := c.Gravity
 	v2 := float64(c.InitialSpeed*c.InitialSpeed) + float64(2*g*c.FreeFall)

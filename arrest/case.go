@@ -17,6 +17,8 @@ type Case struct {
 	Time         float64 // stopping time, s
 	Pulse        Pulse   // assumed shape of the force, NoPulse where none
 	Rise         float64 // rise fraction of RisePlateau, 0..1
+
+	Load Load // a moving load in place of a fall; only Gravity is read beside it
 }
 
 // A Point is everything the closed forms say about one Case, SI. NaN stands
@@ -38,6 +40,7 @@ type Point struct {
 	FloorDeceleration float64 // net, m/s2
 
 	Assumed Assumed
+	Load    LoadPoint // filled for a moving load only
 
 	// Impossible is true when no force that only pulls can bring the body to
 	// rest over this distance in so short a time (M-05).

@@ -12,7 +12,7 @@ type evaluation struct {
 	job     *Job
 	lo, hi  Case // every input at its low and at its high end
 	res     Result
-	spans   spans
+	spans   *spans
 	written Point     // at the figures as written, where they have middles
 	uses    [5][]int  // inputs by place
 	resting [32][]int // inputs by set of places, made when first asked for
@@ -73,9 +73,9 @@ func (in *Input) place() int {
 		return 1
 	}
 	switch in.Key {
-	case "stop.distance":
+	case "stop.distance", "moving_load.distance":
 		return 2
-	case "stop.time":
+	case "stop.time", "moving_load.time":
 		return 3
 	}
 	return 4
@@ -83,6 +83,7 @@ func (in *Input) place() int {
 
 // restsOn lists the inputs behind a set of bits.
 func (ev *evaluation) restsOn(r rests) []int {
+	r &= onInputs
 	if ev.resting[r] == nil {
 		list := make([]int, 0, len(ev.job.Inputs))
 		for bit := range ev.uses {
@@ -107,8 +108,8 @@ func (ev *evaluation) allWritten(uses []int) bool {
 
 // closedForms turns the spans into estimates.
 func (ev *evaluation) closedForms() {
-	for i := range outputs {
-		o, s := &outputs[i], &ev.spans[i]
+	for _, i := range ev.spans.live {
+		o, s := &outputs[i], &ev.spans.of[i]
 		if !s.known() {
 			continue
 		}
@@ -117,7 +118,7 @@ func (ev *evaluation) closedForms() {
 			Low: s.low.value, Value: nan, High: s.high.value, Reach: nan,
 			Uses: ev.restsOn(o.rests),
 		}
-		stopped := o.rests&(onDistance|onTime) != 0
+		stopped := o.rests&onStop != 0
 		if ev.allWritten(e.Uses) && !(stopped && ev.written.Impossible) {
 			e.Value = o.of(&ev.written)
 		}
@@ -175,7 +176,9 @@ func (ev *evaluation) entered() {
 	for _, i := range ev.uses[2] {
 		b := &ev.job.Inputs[i].Band
 		ev.add(StoppingDistance, Between, b, i)
-		ev.add(DecelerationDistance, AtMost, b, i)
+		if !ev.job.Moving() {
+			ev.add(DecelerationDistance, AtMost, b, i)
+		}
 	}
 	for _, i := range ev.uses[3] {
 		ev.add(StoppingTime, Between, &ev.job.Inputs[i].Band, i)
@@ -210,7 +213,7 @@ func (ev *evaluation) contradictions() {
 	es := ev.res.Estimates
 	for a := range es {
 		for b := a + 1; b < len(es); b++ {
-			if es[a].Quantity != es[b].Quantity || es[a].silent() || es[b].silent() {
+			if es[a].Quantity != es[b].Quantity || es[a].Evidence == es[b].Evidence && es[a].Evidence == Given || es[a].silent() || es[b].silent() {
 				continue
 			}
 			whole := es[a].above(es[a].Low, &es[b]) || es[b].above(es[b].Low, &es[a])

@@ -75,7 +75,7 @@ func TestFloorOverRandomBoxes(t *testing.T) {
 			continue
 		}
 		s, _ := overCorners(j)
-		floor := s[indexOf(PeakForce, Given)]
+		floor := s.of[indexOf(PeakForce, Given)]
 		boxes++
 		least := math.Inf(1)
 		var p Point
@@ -197,10 +197,10 @@ func TestSpansHoldRandomPoints(t *testing.T) {
 			if p.Impossible {
 				continue
 			}
-			for i := range outputs {
+			for _, i := range s.live {
 				x := outputs[i].of(&p)
-				if x < s[i].low.value*(1-1e-12) || x > s[i].high.value*(1+1e-12) {
-					t.Fatalf("%s = %.15g outside %.15g .. %.15g at %+v", outputs[i].quantity, x, s[i].low.value, s[i].high.value, c)
+				if x < s.of[i].low.value*(1-1e-12) || x > s.of[i].high.value*(1+1e-12) {
+					t.Fatalf("%s = %.15g outside %.15g .. %.15g at %+v", outputs[i].quantity, x, s.of[i].low.value, s.of[i].high.value, c)
 				}
 			}
 		}

@@ -13,8 +13,11 @@ import (
 // the code gave.
 func TestFormulaTexts(t *testing.T) {
 	used := map[string]int{}
+	jobs := loadJobs(t)
 	for name, f := range workingJobs() {
-		j := f.job(t)
+		jobs[name] = f.job(t)
+	}
+	for name, j := range jobs {
 		res := Evaluate(j)
 		ShowWorking(j, &res)
 		if len(res.Working) == 0 {
@@ -43,7 +46,7 @@ func evaluateText(t *testing.T, w WorkingLine) float64 {
 	if !ok {
 		t.Fatalf("%q has no result", w.Formula)
 	}
-	env := map[string]any{"pi": math.Pi, "sqrt": math.Sqrt}
+	env := map[string]any{"pi": math.Pi, "sqrt": math.Sqrt, "atan2": math.Atan2, "abs": math.Abs}
 	for _, term := range w.Terms {
 		env[term.Symbol] = term.SI
 	}

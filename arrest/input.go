@@ -33,6 +33,7 @@ const (
 	OfStop                     // distance, time, shape: only measured settles (nobody plans a stopping distance)
 	OfDocument                 // figures of a rating: the document is the source
 	OfPlace                    // gravity, a stated constant
+	OfDrive                    // what goes on driving a moving load: measured, drawing or plan settle
 )
 
 // An Input is one figure of the job. The inputs form the one list from which
@@ -80,7 +81,7 @@ func (in *Input) settles() bool {
 	case FromMeasured:
 		return true
 	case FromDrawing, FromPlan:
-		return in.Role == OfWorker || in.Role == OfFall
+		return in.Role == OfWorker || in.Role == OfFall || in.Role == OfDrive
 	}
 	return false
 }
@@ -109,12 +110,15 @@ type Rating struct {
 	TravelIsDeceleration bool
 }
 
+// Moving reports whether the job is one of a moving load and not of a fall.
+func (j *Job) Moving() bool { return j.Point.Load.Mass > 0 }
+
 // A Job is everything the mechanics need to know of one fall and its stop.
 type Job struct {
 	Point   Case    // the figures as written (lower ends where a range has no middle)
 	Inputs  []Input // the one list
 	Ratings []Rating
-	Persons int       // on one system, at least 1
+	Persons int       // on one system; 0 where no person is part of the job
 	Example bool      // the file says that its values are examples
 	Notes   []Warning // what the reader of the file has to add: figures outside the usual
 }

@@ -89,6 +89,12 @@ var methods = [...]Method{
 		Errs:   "wide: the ends are those of the least and most favourable combination. A range has no middle figure unless one was written",
 		Source: derived + "each output but the floor is monotone in every input; the floor's least is at m = m1, t = t2, v = clamp(2*d1/t2, v1, v2), d = clamp(v*t2/2, d1, d2)",
 	},
+	{
+		ID: "M-60", Title: "a moving load stopped or slowed: impulse, mean force, work",
+		Valid:  "the mass is one body; a distance is that of a straight path along the velocity before; the driving force goes on along that velocity; gravity acts as the entries say",
+		Errs:   "means: the peak is above them. A time or a distance that is too long understates",
+		Source: derived + "worked examples in the plane: OpenStax, University Physics Vol. 1, Impulse and Collisions",
+	},
 }
 
 // Methods returns the records of all methods, in order of their ids.

@@ -8,8 +8,22 @@ const (
 	onFall
 	onDistance
 	onTime
-	onRise
+	onRise // also what else drives the motion
+
+	ofFall // the output is one of a fall
+	ofLoad // the output is one of a moving load
+
+	onInputs = onMass | onFall | onDistance | onTime | onRise
+	onStop   = onDistance | onTime
 )
+
+// applies reports whether the output is one of the kind of c.
+func (o *output) applies(c *Case) bool {
+	if c.Load.Mass > 0 {
+		return o.rests&ofLoad != 0 && o.axes <= c.Load.Axes
+	}
+	return o.rests&ofFall != 0 && (o.evidence != Shape || c.Pulse != NoPulse)
+}
 
 // An output ties a field of Point to the estimate made of it.
 type output struct {
@@ -19,31 +33,49 @@ type output struct {
 	bound    Bound
 	rests    rests
 	of       func(*Point) float64
+	axes     int // how many components the motion needs for it
 }
 
 // outputs is the one table of what At gives, in print order: peaks before
 // means, what is given before what is assumed.
 var outputs = [...]output{
-	{PeakForce, Given, "M-06", AtLeast, onMass | onFall | onDistance | onTime, func(p *Point) float64 { return p.Floor }},
-	{ForceOverWeight, Given, "M-08", AtLeast, onFall | onDistance | onTime, func(p *Point) float64 { return p.FloorOverWeight }},
-	{PeakDeceleration, Given, "M-08", AtLeast, onFall | onDistance | onTime, func(p *Point) float64 { return p.FloorDeceleration }},
-	{MeanForceOverDistance, Given, "M-02", Between, onMass | onFall | onDistance, func(p *Point) float64 { return p.MeanOverDistance }},
-	{MeanForceOverTime, Given, "M-03", Between, onMass | onFall | onTime, func(p *Point) float64 { return p.MeanOverTime }},
-	{ShapeRatio, Given, "M-04", Between, onFall | onDistance | onTime, func(p *Point) float64 { return p.ShapeRatio }},
-	{TotalMass, Given, Entered, Between, onMass, func(p *Point) float64 { return p.TotalMass }},
-	{FreeFall, Given, "M-01", Between, onFall, func(p *Point) float64 { return p.FreeFall }},
-	{FallSpeed, Given, "M-01", Between, onFall, func(p *Point) float64 { return p.Speed }},
-	{FallEnergy, Given, "M-01", Between, onMass | onFall, func(p *Point) float64 { return p.Energy }},
-	{Momentum, Given, "M-01", Between, onMass | onFall, func(p *Point) float64 { return p.Momentum }},
-	{PeakForce, Shape, "M-07", Between, onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.Peak }},
-	{ForceOverWeight, Shape, "M-08", Between, onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.OverWeight }},
-	{PeakDeceleration, Shape, "M-08", Between, onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.Deceleration }},
-	{OnsetRate, Shape, "M-08", Between, onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.Onset }},
-	{StoppingDistance, Shape, "M-07", Between, onFall | onTime | onRise, func(p *Point) float64 { return p.Assumed.Distance }},
-	{StoppingTime, Shape, "M-07", Between, onFall | onDistance | onRise, func(p *Point) float64 { return p.Assumed.Time }},
+	{PeakForce, Given, "M-06", AtLeast, ofFall | onMass | onFall | onDistance | onTime, func(p *Point) float64 { return p.Floor }, 0},
+	{ForceOverWeight, Given, "M-08", AtLeast, ofFall | onFall | onDistance | onTime, func(p *Point) float64 { return p.FloorOverWeight }, 0},
+	{PeakDeceleration, Given, "M-08", AtLeast, ofFall | onFall | onDistance | onTime, func(p *Point) float64 { return p.FloorDeceleration }, 0},
+	{MeanForceOverDistance, Given, "M-02", Between, ofFall | onMass | onFall | onDistance, func(p *Point) float64 { return p.MeanOverDistance }, 0},
+	{MeanForceOverTime, Given, "M-03", Between, ofFall | onMass | onFall | onTime, func(p *Point) float64 { return p.MeanOverTime }, 0},
+	{ShapeRatio, Given, "M-04", Between, ofFall | onFall | onDistance | onTime, func(p *Point) float64 { return p.ShapeRatio }, 0},
+	{TotalMass, Given, Entered, Between, ofFall | ofLoad | onMass, func(p *Point) float64 { return p.TotalMass }, 0},
+	{FreeFall, Given, "M-01", Between, ofFall | onFall, func(p *Point) float64 { return p.FreeFall }, 0},
+	{FallSpeed, Given, "M-01", Between, ofFall | onFall, func(p *Point) float64 { return p.Speed }, 0},
+	{FallEnergy, Given, "M-01", Between, ofFall | onMass | onFall, func(p *Point) float64 { return p.Energy }, 0},
+	{Momentum, Given, "M-01", Between, ofFall | onMass | onFall, func(p *Point) float64 { return p.Momentum }, 0},
+	{PeakForce, Shape, "M-07", Between, ofFall | onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.Peak }, 0},
+	{ForceOverWeight, Shape, "M-08", Between, ofFall | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.OverWeight }, 0},
+	{PeakDeceleration, Shape, "M-08", Between, ofFall | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.Deceleration }, 0},
+	{OnsetRate, Shape, "M-08", Between, ofFall | onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.Onset }, 0},
+	{StoppingDistance, Shape, "M-07", Between, ofFall | onFall | onTime | onRise, func(p *Point) float64 { return p.Assumed.Distance }, 0},
+	{StoppingTime, Shape, "M-07", Between, ofFall | onFall | onDistance | onRise, func(p *Point) float64 { return p.Assumed.Time }, 0},
+
+	{PeakForce, Given, "M-60", AtLeast, ofLoad | onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Floor }, 0},
+	{PeakDeceleration, Given, "M-60", AtLeast, ofLoad | onFall | onDistance | onTime, func(p *Point) float64 { return p.Load.Deceleration }, 0},
+	{StoppingForce, Given, "M-60", Between, ofLoad | onMass | onFall | onTime | onRise, func(p *Point) float64 { return p.Load.OverTime }, 0},
+	{StoppingForce, Given, "M-60", Between, ofLoad | onMass | onFall | onDistance | onRise, func(p *Point) float64 { return p.Load.OverDistance }, 0},
+	{MeanDeceleration, Given, "M-60", Between, ofLoad | onFall | onDistance | onTime, func(p *Point) float64 { return p.Load.Deceleration }, 0},
+	{ShapeRatio, Given, "M-60", Between, ofLoad | onFall | onDistance | onTime, func(p *Point) float64 { return p.Load.Ratio }, 0},
+	{Impulse, Given, "M-60", Between, ofLoad | onMass | onFall, func(p *Point) float64 { return p.Load.Impulse }, 0},
+	{EnergyTaken, Given, "M-60", Between, ofLoad | onMass | onFall, func(p *Point) float64 { return p.Load.Energy }, 0},
+	{ImpulseX, Given, "M-60", Between, ofLoad | onMass | onFall, func(p *Point) float64 { return p.Load.Change[0] }, 2},
+	{ImpulseY, Given, "M-60", Between, ofLoad | onMass | onFall, func(p *Point) float64 { return p.Load.Change[1] }, 2},
+	{ImpulseZ, Given, "M-60", Between, ofLoad | onMass | onFall, func(p *Point) float64 { return p.Load.Change[2] }, 3},
+	{ImpulseDirection, Given, "M-60", Between, ofLoad | onMass | onFall, func(p *Point) float64 { return bearing(p.Load.Change) }, 2},
+	{StoppingForceX, Given, "M-60", Between, ofLoad | onMass | onFall | onTime | onRise, func(p *Point) float64 { return p.Load.Force[0] }, 2},
+	{StoppingForceY, Given, "M-60", Between, ofLoad | onMass | onFall | onTime | onRise, func(p *Point) float64 { return p.Load.Force[1] }, 2},
+	{StoppingForceZ, Given, "M-60", Between, ofLoad | onMass | onFall | onTime | onRise, func(p *Point) float64 { return p.Load.Force[2] }, 3},
+	{StoppingForceDirection, Given, "M-60", Between, ofLoad | onMass | onFall | onTime | onRise, func(p *Point) float64 { return bearing(p.Load.Force) }, 2},
 }
 
-// indexOf returns the place of a quantity and evidence in outputs.
+// indexOf returns the place of the first output of a quantity and evidence.
 func indexOf(q Quantity, e Evidence) int {
 	for i := range outputs {
 		if outputs[i].quantity == q && outputs[i].evidence == e {

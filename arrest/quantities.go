@@ -44,6 +44,16 @@ const (
 	Impulse                 Quantity = "impulse"
 	ImpliedFreeFall         Quantity = "implied_free_fall"
 	StoppingForce           Quantity = "stopping_force"
+	MeanDeceleration        Quantity = "mean_deceleration"
+	EnergyTaken             Quantity = "energy_taken"
+	ImpulseX                Quantity = "impulse_x"
+	ImpulseY                Quantity = "impulse_y"
+	ImpulseZ                Quantity = "impulse_z"
+	ImpulseDirection        Quantity = "impulse_direction"
+	StoppingForceX          Quantity = "stopping_force_x"
+	StoppingForceY          Quantity = "stopping_force_y"
+	StoppingForceZ          Quantity = "stopping_force_z"
+	StoppingForceDirection  Quantity = "stopping_force_direction"
 )
 
 // QuantityRecord describes one Quantity for every reader of the list: limit
@@ -92,6 +102,16 @@ var quantityRecords = [...]QuantityRecord{
 	{Impulse, "impulse", quantity.Impulse},
 	{ImpliedFreeFall, "free fall implied by a record", quantity.Length},
 	{StoppingForce, "mean stopping force", quantity.Force},
+	{MeanDeceleration, "mean net deceleration", quantity.Acceleration},
+	{EnergyTaken, "energy taken out of the motion", quantity.Energy},
+	{ImpulseX, "impulse along x", quantity.Impulse},
+	{ImpulseY, "impulse along y", quantity.Impulse},
+	{ImpulseZ, "impulse along z", quantity.Impulse},
+	{ImpulseDirection, "direction of the impulse from +x towards +y", quantity.Angle},
+	{StoppingForceX, "mean stopping force along x", quantity.Force},
+	{StoppingForceY, "mean stopping force along y", quantity.Force},
+	{StoppingForceZ, "mean stopping force along z", quantity.Force},
+	{StoppingForceDirection, "direction of the mean stopping force from +x towards +y", quantity.Angle},
 }
 
 // Quantities returns the records of all quantities, in print order.

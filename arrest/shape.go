@@ -19,30 +19,26 @@ func (ev *evaluation) assumedShape() {
 	if c.Pulse == NoPulse || c.Distance <= 0 || c.Time <= 0 {
 		return
 	}
-	clear := func() {
-		for i := range outputs {
-			if outputs[i].evidence == Shape {
-				ev.spans[i] = span{extreme{value: nan}, extreme{value: nan}}
-			}
+	var shapes []int
+	for _, i := range ev.spans.live {
+		if outputs[i].evidence == Shape {
+			shapes = append(shapes, i)
+			ev.spans.of[i].forget()
 		}
 	}
-	clear()
 	least, greatest := ev.shapeDistances()
 	if greatest*(1+shapeSlack) < ev.lo.Distance || least*(1-shapeSlack) > ev.hi.Distance {
 		ev.tell(ShapeContradicted, Text(c.Pulse.String()), length(least), length(greatest), length(ev.lo.Distance), length(ev.hi.Distance))
 		return
 	}
 	var p Point
-	corners(ev.job, func(c *Case) {
-		for _, c := range [...]Case{withoutTime(*c), withoutDistance(*c)} {
+	for n := range ev.spans.corners() {
+		at := ev.spans.corner(n)
+		for _, c := range [...]Case{withoutTime(at), withoutDistance(at)} {
 			At(&c, &p)
-			for i := range outputs {
-				if outputs[i].evidence == Shape {
-					ev.spans[i].take(outputs[i].of(&p), &c)
-				}
-			}
+			ev.spans.take(&p, ev.spans.add(c), shapes)
 		}
-	})
+	}
 	ev.written.Assumed = Assumed{nan, nan, nan, nan, nan, nan}
 }
 
@@ -54,10 +50,11 @@ func withoutDistance(c Case) Case { c.Distance = 0; return c }
 func (ev *evaluation) shapeDistances() (least, greatest float64) {
 	least, greatest = math.Inf(1), math.Inf(-1)
 	var p Point
-	corners(ev.job, func(c *Case) {
-		At(c, &p)
+	for n := range ev.spans.corners() {
+		c := ev.spans.corner(n)
+		At(&c, &p)
 		least, greatest = min(least, p.Assumed.Distance), max(greatest, p.Assumed.Distance)
-	})
+	}
 	return least, greatest
 }
 

@@ -2,11 +2,11 @@ package arrest
 
 import "math"
 
-// An extreme is the least or greatest value of one output, and the case that
-// gives it.
+// An extreme is the least or greatest value of one output, and where it lies:
+// the number of a corner, or, below 0, of a point beside the corners.
 type extreme struct {
 	value float64
-	at    Case
+	where int
 }
 
 // A span is what one output comes to over everything the entries allow.
@@ -15,81 +15,110 @@ type span struct{ low, high extreme }
 
 func (s *span) known() bool { return !math.IsNaN(s.low.value) }
 
+func (s *span) forget() { s.low.value, s.high.value = nan, nan }
+
 // take widens the span by one point's value; NaN widens nothing.
-func (s *span) take(x float64, c *Case) {
+func (s *span) take(x float64, where int) {
 	if math.IsNaN(x) {
 		return
 	}
-	if !s.known() || x < s.low.value {
-		s.low = extreme{x, *c}
+	if !(x >= s.low.value) {
+		s.low = extreme{x, where}
 	}
 	if !(x <= s.high.value) {
-		s.high = extreme{x, *c}
+		s.high = extreme{x, where}
 	}
 }
 
 // spans holds the span of every output, in the order of the table outputs.
-type spans []span
-
-func newSpans() spans {
-	s := make(spans, len(outputs))
-	for i := range s {
-		s[i].low.value, s[i].high.value = nan, nan
-	}
-	return s
+type spans struct {
+	of     []span
+	live   []int // the outputs that apply to the job
+	job    *Job
+	free   []*Input // the inputs with two ends, in the order of the corners' bits
+	base   Case     // every input at its low end
+	beside []Case   // points beside the corners
 }
 
-// take widens all spans by one point. What hangs on distance or time is left
-// out where the two cannot go together (M-05).
-func (s spans) take(c *Case, p *Point) {
-	for i := range outputs {
-		if p.Impossible && outputs[i].rests&(onDistance|onTime) != 0 {
-			continue
+func newSpans(j *Job) *spans {
+	s := &spans{job: j, of: make([]span, len(outputs)), live: make([]int, 0, len(outputs)), base: j.Point}
+	for i := range s.of {
+		s.of[i].forget()
+		if outputs[i].applies(&j.Point) {
+			s.live = append(s.live, i)
 		}
-		s[i].take(outputs[i].of(p), c)
 	}
-}
-
-// corners calls visit with every corner of the bands (M-50). visit must not
-// keep the pointer.
-func corners(j *Job, visit func(*Case)) {
-	free := make([]*Input, 0, len(j.Inputs))
-	base := j.Point
 	for i := range j.Inputs {
 		in := &j.Inputs[i]
 		if in.Set == nil {
 			continue
 		}
-		in.Set(&base, in.Band.Low)
+		in.Set(&s.base, in.Band.Low)
 		if in.Band.High > in.Band.Low {
-			free = append(free, in)
+			s.free = append(s.free, in)
 		}
 	}
-	for mask := range 1 << len(free) {
-		c := base
-		for i, in := range free {
-			if mask>>i&1 == 1 {
-				in.Set(&c, in.Band.High)
-			}
+	return s
+}
+
+// corner returns the case of one corner of the bands (M-50): where bit i of
+// its number is set, the ith free input is at its high end.
+func (s *spans) corner(number int) Case {
+	c := s.base
+	for i, in := range s.free {
+		if number>>i&1 == 1 {
+			in.Set(&c, in.Band.High)
 		}
-		visit(&c)
+	}
+	return c
+}
+
+// corners is how many there are.
+func (s *spans) corners() int { return 1 << len(s.free) }
+
+// caseAt returns the case that an extreme was found at.
+func (s *spans) caseAt(e extreme) Case {
+	if e.where < 0 {
+		return s.beside[-1-e.where]
+	}
+	return s.corner(e.where)
+}
+
+// add notes a point beside the corners and returns where it lies.
+func (s *spans) add(c Case) int {
+	s.beside = append(s.beside, c)
+	return -len(s.beside)
+}
+
+// take widens the spans of the given outputs by one point. What hangs on
+// distance or time is left out where the two cannot go together (M-05).
+func (s *spans) take(p *Point, where int, list []int) {
+	for _, i := range list {
+		if p.Impossible && outputs[i].rests&onStop != 0 {
+			continue
+		}
+		s.of[i].take(outputs[i].of(p), where)
 	}
 }
 
 // overCorners fills the spans from all corners and, where some of them cannot
 // happen, from the edge of what can.
-func overCorners(j *Job) (s spans, partImpossible bool) {
-	s = newSpans()
+func overCorners(j *Job) (s *spans, partImpossible bool) {
+	s = newSpans(j)
 	var p Point
-	corners(j, func(c *Case) {
-		At(c, &p)
-		s.take(c, &p)
+	for n := range s.corners() {
+		c := s.corner(n)
+		At(&c, &p)
+		s.take(&p, n, s.live)
 		partImpossible = partImpossible || p.Impossible
-	})
+	}
 	if partImpossible {
 		overEdge(j, s)
 	}
-	if i := indexOf(PeakForce, Given); s[i].known() {
+	if j.Moving() {
+		throughZero(j, s)
+		widenMagnitudes(s)
+	} else if s.of[indexOf(PeakForce, Given)].known() {
 		lowerFloor(j, s)
 	}
 	return s, partImpossible
@@ -99,7 +128,7 @@ func overCorners(j *Job) (s spans, partImpossible bool) {
 // distance and time meets the surface d = v*t + g*t^2/2, beyond which nothing
 // can happen. Every extreme of the means and their ratio over the possible
 // part lies at a corner or at such a point; the floor has no upper end there.
-func overEdge(j *Job, s spans) {
+func overEdge(j *Job, s *spans) {
 	lo, hi := ends(j)
 	g := lo.Gravity
 	var a, b Point
@@ -128,7 +157,7 @@ func inside(ends [2]float64, x float64) bool { return ends[0] < x && x < ends[1]
 
 // edgePoint widens the spans that hang on the stop by one point of the edge,
 // for the lightest and the heaviest mass. The floor has no upper end there.
-func edgePoint(s spans, base *Case, masses [2]float64, v, d, t float64, within bool) {
+func edgePoint(s *spans, base *Case, masses [2]float64, v, d, t float64, within bool) {
 	if !within {
 		return
 	}
@@ -139,9 +168,10 @@ func edgePoint(s spans, base *Case, masses [2]float64, v, d, t float64, within b
 		At(&c, &p)
 		p.Impossible = false
 		p.Floor, p.FloorOverWeight, p.FloorDeceleration = math.Inf(1), math.Inf(1), math.Inf(1)
-		for i := range outputs {
-			if outputs[i].rests&(onDistance|onTime) != 0 {
-				s[i].take(outputs[i].of(&p), &c)
+		where := s.add(c)
+		for _, i := range s.live {
+			if outputs[i].rests&onStop != 0 {
+				s.of[i].take(outputs[i].of(&p), where)
 			}
 		}
 	}
@@ -173,7 +203,7 @@ func ends(j *Job) (lo, hi Case) {
 //	m = m1, t = t2, v = clamp(2*d1/t2, v1, v2), d = clamp(v*t2/2, d1, d2)
 //
 // M-06. Only needed where both distance and time are given: else corners do.
-func lowerFloor(j *Job, s spans) {
+func lowerFloor(j *Job, s *spans) {
 	lo, hi := ends(j)
 	if lo.Distance <= 0 || lo.Time <= 0 {
 		return
@@ -190,8 +220,9 @@ func lowerFloor(j *Job, s spans) {
 	if p.Impossible {
 		return
 	}
+	where := s.add(c)
 	for _, q := range [...]Quantity{PeakForce, ForceOverWeight, PeakDeceleration} {
 		i := indexOf(q, Given)
-		s[i].take(outputs[i].of(&p), &c)
+		s.of[i].take(outputs[i].of(&p), where)
 	}
 }

@@ -32,11 +32,10 @@ func (ev *evaluation) warn(partImpossible bool) {
 		ev.tell(ExampleValues)
 	}
 	c := &ev.job.Point
-	if c.Distance <= 0 && c.Time <= 0 && len(ev.job.Ratings) == 0 {
-		ev.tell(NothingAboutStop)
-	}
-	if c.Distance > 0 || c.Time > 0 {
+	if len(ev.uses[2])+len(ev.uses[3]) > 0 {
 		ev.tell(MeansAreNotPeaks)
+	} else if len(ev.job.Ratings) == 0 {
+		ev.tell(NothingAboutStop)
 	}
 	if partImpossible {
 		var slow Point
@@ -49,7 +48,9 @@ func (ev *evaluation) warn(partImpossible bool) {
 	ev.warnRatio()
 	ev.warnFloor()
 	ev.warnContradictions()
-	ev.warnFall()
+	if !ev.job.Moving() {
+		ev.warnFall()
+	}
 	ev.warnPlace()
 	ev.res.Warnings = append(ev.res.Warnings, ev.job.Notes...)
 }
@@ -85,11 +86,12 @@ func (ev *evaluation) warnRatio() {
 // warnFloor says where the floor of the peak hangs on the last digits.
 func (ev *evaluation) warnFloor() {
 	i := indexOf(PeakForce, Given)
-	if ev.job.Point.Distance <= 0 || ev.job.Point.Time <= 0 || !ev.spans[i].known() {
+	if ev.job.Point.Distance <= 0 || ev.job.Point.Time <= 0 || !ev.spans.of[i].known() {
 		return
 	}
+	c := ev.spans.caseAt(ev.spans.of[i].low)
 	var p Point
-	At(&ev.spans[i].low.at, &p)
+	At(&c, &p)
 	if greater := math.Max(p.MeanOverDistance, p.MeanOverTime); p.Floor > steepFloor*greater {
 		ev.tell(FloorIllConditioned, Figure(quantity.Force, p.Floor, quantity.Down), Figure(quantity.Force, greater, quantity.Nearest))
 	}

@@ -43,6 +43,37 @@ var symbols = [...]symbol{
 	{Symbol{"t_rise", "time of the rise", quantity.Time}, func(c *Case, p *Point) float64 { return c.Pulse.riseTime(shapeTime(c, p), c.Rise) }},
 	{Symbol{"R_shape", "mean rate of the rise if the stop had the assumed shape", quantity.ForceRate}, func(c *Case, p *Point) float64 { return p.Assumed.Onset }},
 	{Symbol{"n_shape", "peak force over weight if the stop had the assumed shape", quantity.Ratio}, func(c *Case, p *Point) float64 { return p.Assumed.OverWeight }},
+	{Symbol{"J_x", "impulse of all forces along x", quantity.Impulse}, func(c *Case, p *Point) float64 { return p.Load.Change[0] }},
+	{Symbol{"J_y", "impulse of all forces along y", quantity.Impulse}, func(c *Case, p *Point) float64 { return p.Load.Change[1] }},
+	{Symbol{"J_z", "impulse of all forces along z", quantity.Impulse}, func(c *Case, p *Point) float64 { return p.Load.Change[2] }},
+	{Symbol{"J", "impulse of all forces", quantity.Impulse}, func(c *Case, p *Point) float64 { return p.Load.Impulse }},
+	{Symbol{"J_angle", "direction of the impulse from +x towards +y", quantity.Angle}, func(c *Case, p *Point) float64 { return bearing(p.Load.Change) }},
+	{Symbol{"v1_x", "velocity before, along x", quantity.Speed}, func(c *Case, p *Point) float64 { return c.Load.Before[0] }},
+	{Symbol{"v1_y", "velocity before, along y", quantity.Speed}, func(c *Case, p *Point) float64 { return c.Load.Before[1] }},
+	{Symbol{"v1_z", "velocity before, along z", quantity.Speed}, func(c *Case, p *Point) float64 { return c.Load.Before[2] }},
+	{Symbol{"v2_x", "velocity after, along x", quantity.Speed}, func(c *Case, p *Point) float64 { return c.Load.After[0] }},
+	{Symbol{"v2_y", "velocity after, along y", quantity.Speed}, func(c *Case, p *Point) float64 { return c.Load.After[1] }},
+	{Symbol{"v2_z", "velocity after, along z", quantity.Speed}, func(c *Case, p *Point) float64 { return c.Load.After[2] }},
+	{Symbol{"v1", "speed before", quantity.Speed}, func(c *Case, p *Point) float64 { return norm(c.Load.Before) }},
+	{Symbol{"v2", "speed after, along the velocity before", quantity.Speed}, func(c *Case, p *Point) float64 { return dot(c.Load.After, direction(c.Load.Before)) }},
+	{Symbol{"v2_any", "speed after", quantity.Speed}, func(c *Case, p *Point) float64 { return norm(c.Load.After) }},
+	{Symbol{"E_taken", "energy taken out of the motion", quantity.Energy}, func(c *Case, p *Point) float64 { return p.Load.Energy }},
+	{Symbol{"D", "driving force along the velocity before", quantity.Force}, func(c *Case, p *Point) float64 { return c.Load.Driving }},
+	{Symbol{"D_x", "driving force along x", quantity.Force}, func(c *Case, p *Point) float64 { return c.Load.Driving * direction(c.Load.Before)[0] }},
+	{Symbol{"W_x", "weight, along x", quantity.Force}, func(c *Case, p *Point) float64 { return -p.Weight * c.Load.Up[0] }},
+	{Symbol{"W_y", "weight, along y", quantity.Force}, func(c *Case, p *Point) float64 { return -p.Weight * c.Load.Up[1] }},
+	{Symbol{"W_z", "weight, along z", quantity.Force}, func(c *Case, p *Point) float64 { return -p.Weight * c.Load.Up[2] }},
+	{Symbol{"W_path", "weight along the velocity before", quantity.Force}, func(c *Case, p *Point) float64 { return -p.Weight * dot(c.Load.Up, direction(c.Load.Before)) }},
+	{Symbol{"d_load", "distance along the path", quantity.Length}, func(c *Case, p *Point) float64 { return c.Load.Distance }},
+	{Symbol{"t_load", "time of the stop", quantity.Time}, func(c *Case, p *Point) float64 { return c.Load.Time }},
+	{Symbol{"F_x", "mean stopping force along x", quantity.Force}, func(c *Case, p *Point) float64 { return p.Load.Force[0] }},
+	{Symbol{"F_y", "mean stopping force along y", quantity.Force}, func(c *Case, p *Point) float64 { return p.Load.Force[1] }},
+	{Symbol{"F_z", "mean stopping force along z", quantity.Force}, func(c *Case, p *Point) float64 { return p.Load.Force[2] }},
+	{Symbol{"F_stop_t", "mean stopping force over the time", quantity.Force}, func(c *Case, p *Point) float64 { return p.Load.OverTime }},
+	{Symbol{"F_stop_d", "mean stopping force over the distance", quantity.Force}, func(c *Case, p *Point) float64 { return p.Load.OverDistance }},
+	{Symbol{"F_angle", "direction of the mean stopping force from +x towards +y", quantity.Angle}, func(c *Case, p *Point) float64 { return bearing(p.Load.Force) }},
+	{Symbol{"a_mean", "mean net deceleration", quantity.Acceleration}, func(c *Case, p *Point) float64 { return p.Load.Deceleration }},
+	{Symbol{"r_load", "ratio of the two routes", quantity.Ratio}, func(c *Case, p *Point) float64 { return p.Load.Ratio }},
 	{Symbol{"t_shape", "stopping time of the assumed shape", quantity.Time}, func(c *Case, p *Point) float64 { return shapeTime(c, p) }},
 	{Symbol{"d_shape", "stopping distance of the assumed shape", quantity.Length}, func(c *Case, p *Point) float64 { return p.Assumed.Distance }},
 	{Symbol{"F_shape", "peak if the stop had the assumed shape", quantity.Force}, func(c *Case, p *Point) float64 { return p.Assumed.Peak }},
@@ -66,6 +97,12 @@ type passage struct {
 	quantity Quantity
 	evidence Evidence
 	lines    []line
+	part     rests // only for the output that rests on this
+}
+
+// of reports whether the output is the one, or one of those, it leads to.
+func (ps *passage) of(o *output) bool {
+	return o.quantity == ps.quantity && o.evidence == ps.evidence && o.rests&ps.part == ps.part
 }
 
 // A line is one formula; when says for which cases it is the one used, nil
@@ -85,8 +122,21 @@ func early(c *Case, p *Point) bool        { return c.Pulse == EarlyPeak }
 func withSpeed(c *Case, p *Point) bool    { return c.InitialSpeed > 0 }
 func overDistance(c *Case, p *Point) bool { return onlyDistance(c, p) || longStop(c, p) }
 
+func falling(c *Case, p *Point) bool           { return c.Load.Mass <= 0 }
+func moving(c *Case, p *Point) bool            { return c.Load.Mass > 0 }
+func straight(c *Case, p *Point) bool          { return c.Load.Axes == 1 }
+func plane(c *Case, p *Point) bool             { return c.Load.Axes == 2 }
+func space(c *Case, p *Point) bool             { return c.Load.Axes == 3 }
+func loadTime(c *Case, p *Point) bool          { return c.Load.Time > 0 }
+func loadDistance(c *Case, p *Point) bool      { return c.Load.Distance > 0 }
+func loadDistanceAlone(c *Case, p *Point) bool { return c.Load.Distance > 0 && c.Load.Time <= 0 }
+
 func shaped(as Pulse) func(*Case, *Point) bool {
 	return func(c *Case, p *Point) bool { return c.Pulse == as }
+}
+
+func not(a func(*Case, *Point) bool) func(*Case, *Point) bool {
+	return func(c *Case, p *Point) bool { return !a(c, p) }
 }
 
 func and(a, b func(*Case, *Point) bool) func(*Case, *Point) bool {
@@ -96,31 +146,31 @@ func and(a, b func(*Case, *Point) bool) func(*Case, *Point) bool {
 // passages is the working, in the order in which a person would do it.
 var passages = [...]passage{
 	{TotalMass, Given, []line{
-		{"M-01", "m = m_worker + m_tools", nil},
+		{"M-01", "m = m_worker + m_tools", falling},
 		{"M-01", "W = m*g", nil},
-	}},
-	{FreeFall, Given, []line{{"M-01", "h_equal = h + u^2/(2*g)", withSpeed}}},
-	{FallSpeed, Given, []line{{"M-01", "v = sqrt(u^2 + 2*g*h)", nil}}},
-	{FallEnergy, Given, []line{{"M-01", "E = m*v^2/2", nil}}},
-	{Momentum, Given, []line{{"M-01", "p = m*v", nil}}},
+	}, 0},
+	{FreeFall, Given, []line{{"M-01", "h_equal = h + u^2/(2*g)", withSpeed}}, 0},
+	{FallSpeed, Given, []line{{"M-01", "v = sqrt(u^2 + 2*g*h)", nil}}, 0},
+	{FallEnergy, Given, []line{{"M-01", "E = m*v^2/2", nil}}, 0},
+	{Momentum, Given, []line{{"M-01", "p = m*v", falling}}, 0},
 	{MeanForceOverDistance, Given, []line{
 		{"M-02", "F_d = W + m*v^2/(2*d)", nil},
 		{"M-02", "F_d_wrong = m*v^2/(2*d)", nil},
-	}},
+	}, 0},
 	{MeanForceOverTime, Given, []line{
 		{"M-03", "F_t = W + m*v/t", nil},
 		{"M-03", "F_t_wrong = m*v/t", nil},
-	}},
-	{ShapeRatio, Given, []line{{"M-04", "r = v*t/(2*d)", nil}}},
+	}, 0},
+	{ShapeRatio, Given, []line{{"M-04", "r = v*t/(2*d)", both}}, 0},
 	{PeakForce, Given, []line{
 		{"M-05", "d_limit = v*t + g*t^2/2", both},
 		{"M-06", "tau = (2*d - v*t)/(v + g*t)", shortStop},
 		{"M-06", "a = (v + g*tau)/(t - tau)", shortStop},
 		{"M-06", "a = v^2/(2*d)", overDistance},
 		{"M-06", "a = v/t", onlyTime},
-		{"M-06", "F_floor = m*(g + a)", nil},
-	}},
-	{ForceOverWeight, Given, []line{{"M-08", "n = F_floor/W", nil}}},
+		{"M-06", "F_floor = m*(g + a)", falling},
+	}, 0},
+	{ForceOverWeight, Given, []line{{"M-08", "n = F_floor/W", nil}}, 0},
 	{PeakForce, Shape, []line{
 		{"M-07", "k = 1", shaped(Constant)},
 		{"M-07", "c = 1/2", shaped(Constant)},
@@ -136,33 +186,67 @@ var passages = [...]passage{
 		{"M-07", "t_shape = 3*d/v", and(onlyDistance, early)},
 		{"M-07", "F_shape = k*(W + m*v/t_shape)", spring},
 		{"M-07", "F_shape = W + 2*m*v/t_shape", early},
-	}},
-	{ForceOverWeight, Shape, []line{{"M-08", "n_shape = F_shape/W", nil}}},
-	{OnsetRate, Shape, []line{{"M-08", "R_shape = F_shape/t_rise", nil}}},
+	}, 0},
+	{ForceOverWeight, Shape, []line{{"M-08", "n_shape = F_shape/W", nil}}, 0},
+	{OnsetRate, Shape, []line{{"M-08", "R_shape = F_shape/t_rise", nil}}, 0},
+
+	{ImpulseX, Given, []line{{"M-60", "J_x = m*(v2_x - v1_x)", nil}}, 0},
+	{ImpulseY, Given, []line{{"M-60", "J_y = m*(v2_y - v1_y)", nil}}, 0},
+	{ImpulseZ, Given, []line{{"M-60", "J_z = m*(v2_z - v1_z)", nil}}, 0},
+	{Impulse, Given, []line{
+		{"M-60", "J = m*abs(v2_x - v1_x)", straight},
+		{"M-60", "J = sqrt(J_x^2 + J_y^2)", plane},
+		{"M-60", "J = sqrt(J_x^2 + J_y^2 + J_z^2)", space},
+	}, 0},
+	{ImpulseDirection, Given, []line{{"M-60", "J_angle = atan2(J_y, J_x)", nil}}, 0},
+	{EnergyTaken, Given, []line{{"M-60", "E_taken = m*(v1^2 - v2_any^2)/2", nil}}, 0},
+	{StoppingForceX, Given, []line{{"M-60", "F_x = J_x/t_load - W_x", nil}}, 0},
+	{StoppingForceY, Given, []line{{"M-60", "F_y = J_y/t_load - W_y", nil}}, 0},
+	{StoppingForceZ, Given, []line{{"M-60", "F_z = J_z/t_load - W_z", nil}}, 0},
+	{StoppingForceDirection, Given, []line{{"M-60", "F_angle = atan2(F_y, F_x)", nil}}, 0},
+	{StoppingForce, Given, []line{
+		{"M-60", "F_stop_t = abs(m*(v2_x - v1_x)/t_load - W_x - D_x)", and(straight, loadTime)},
+		{"M-60", "F_stop_t = sqrt(F_x^2 + F_y^2)", and(plane, loadTime)},
+		{"M-60", "F_stop_t = sqrt(F_x^2 + F_y^2 + F_z^2)", and(space, loadTime)},
+	}, onTime},
+	{StoppingForce, Given, []line{{"M-60", "F_stop_d = W_path + D + m*(v1^2 - v2^2)/(2*d_load)", loadDistance}}, onDistance},
+	{PeakForce, Given, []line{
+		{"M-60", "F_floor = F_stop_t", and(loadTime, not(loadDistance))},
+		{"M-60", "F_floor = F_stop_d", loadDistanceAlone},
+		{"M-60", "F_floor = max(F_stop_d, F_stop_t)", and(loadTime, loadDistance)},
+	}, ofLoad},
+	{MeanDeceleration, Given, []line{
+		{"M-60", "a_mean = J/(m*t_load)", loadTime},
+		{"M-60", "a_mean = (v1^2 - v2^2)/(2*d_load)", loadDistanceAlone},
+	}, 0},
+	{ShapeRatio, Given, []line{{"M-60", "r_load = (v1 + v2)*t_load/(2*d_load)", moving}}, 0},
 }
 
 // working writes the working at the figures as written, where they have
 // middles, and at both ends of each span.
 func (ev *evaluation) working() {
 	for i := range passages {
-		ps := &passages[i]
-		k := indexOf(ps.quantity, ps.evidence)
-		s := &ev.spans[k]
-		if !s.known() {
-			continue
+		for _, k := range ev.spans.live {
+			if passages[i].of(&outputs[k]) && ev.spans.of[k].known() {
+				ev.passage(&passages[i], &outputs[k], &ev.spans.of[k])
+			}
 		}
-		o := &outputs[k]
-		written := ev.allWritten(ev.restsOn(o.rests)) && !ev.written.Impossible && !math.IsNaN(o.of(&ev.written))
-		if written {
-			ev.lines(ps, o, AtWritten, ev.job.Point)
-		}
-		if written && s.low.value == s.high.value {
-			continue
-		}
-		ev.lines(ps, o, AtLow, s.low.at)
-		if !math.IsInf(s.high.value, 1) {
-			ev.lines(ps, o, AtHigh, s.high.at)
-		}
+	}
+}
+
+// passage writes one passage. An end that lies between the corners, where a
+// component goes through zero, has no lines of its own.
+func (ev *evaluation) passage(ps *passage, o *output, s *span) {
+	written := ev.allWritten(ev.restsOn(o.rests)) && !ev.written.Impossible && !math.IsNaN(o.of(&ev.written))
+	if written {
+		ev.lines(ps, o, AtWritten, ev.job.Point)
+	}
+	if written && s.low.value == s.high.value {
+		return
+	}
+	ev.lines(ps, o, AtLow, ev.spans.caseAt(s.low))
+	if !math.IsInf(s.high.value, 1) {
+		ev.lines(ps, o, AtHigh, ev.spans.caseAt(s.high))
 	}
 }
 
@@ -198,7 +282,7 @@ func (l *line) fill(o *output, corner Corner, c *Case, p *Point) WorkingLine {
 }
 
 // identifiers lists the letters of a formula, each once, in order: the first
-// is the result. sqrt and pi are no letters of a job.
+// is the result. Functions and pi are no letters of a job.
 func identifiers(formula string) []string {
 	var names []string
 	seen := func(n string) bool {
@@ -207,7 +291,7 @@ func identifiers(formula string) []string {
 				return true
 			}
 		}
-		return n == "sqrt" || n == "pi"
+		return n == "sqrt" || n == "abs" || n == "atan2" || n == "max" || n == "pi"
 	}
 	for i := 0; i < len(formula); {
 		j := i
