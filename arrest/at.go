@@ -4,8 +4,9 @@ import "math"
 
 var nan = math.NaN()
 
-// At works out one exact point. It allocates nothing and never fails: what
-// cannot happen is told by Point.Impossible. c must hold a positive total mass
+// At works out one exact point. It allocates nothing (a connector path
+// makes room in p once) and never fails: what cannot happen is told by
+// Point.Impossible. c must hold a positive total mass
 // and gravity, and no negative figure; the readers of files see to that.
 func At(c *Case, p *Point) {
 	if c.Load.Mass > 0 {
@@ -26,6 +27,9 @@ func At(c *Case, p *Point) {
 	p.Energy = m * v2 / 2
 	p.Momentum = m * v
 	stopAt(p, v2, g, c.Distance, c.Time)
+	if c.Path != nil {
+		modelAt(c, p)
+	}
 	if c.Pulse == NoPulse {
 		p.Assumed = Assumed{nan, nan, nan, nan, nan, nan}
 		return

@@ -18,6 +18,11 @@ type Case struct {
 	Pulse        Pulse   // assumed shape of the force, NoPulse where none
 	Rise         float64 // rise fraction of RisePlateau, 0..1
 
+	// Path makes parts of Figures, the connector path from anchor to body; nil
+	// where none was entered.
+	Path    *PathPlan
+	Figures [MaxPathFigures]float64
+
 	Load Load // a moving load in place of a fall; only Gravity is read beside it
 }
 
@@ -41,6 +46,7 @@ type Point struct {
 
 	Assumed Assumed
 	Load    LoadPoint // filled for a moving load only
+	Model   *PathRun  // filled where the Case has a path; kept and filled again by the next At
 
 	// Impossible is true when no force that only pulls can bring the body to
 	// rest over this distance in so short a time (M-05).

@@ -1,6 +1,10 @@
 package arrest
 
-import "arrestcheck/arrest/quantity"
+import (
+	"math"
+
+	"arrestcheck/arrest/quantity"
+)
 
 // Evidence says where an estimate comes from. Estimates of different evidence
 // stand side by side; they are never averaged.
@@ -51,9 +55,27 @@ type Estimate struct {
 	// Uses lists the inputs the figure rests on, as indexes into Result.Inputs.
 	Uses []int
 
+	// Allowance is the user's own allowance for the error of the model, as a
+	// share: NaN where none was entered and for all other evidence.
+	Allowance float64
+
+	// Exhausted is true for a modelled figure when, somewhere in the entries, a
+	// travel is used up; Beyond when a loading curve is left, or a run ends in
+	// nothing or in a rigid stop.
+	Exhausted, Beyond bool
+
 	// Outside is true for a rating some of whose conditions do not hold over
 	// the whole of the entries: then the figure is no number (all NaN).
 	Outside bool
+}
+
+// Ends returns the figures that a limit is compared with: Low and High, for a
+// modelled estimate widened by the allowance where there is one.
+func (e *Estimate) Ends() (low, high float64) {
+	if e.Evidence != Modelled || math.IsNaN(e.Allowance) {
+		return e.Low, e.High
+	}
+	return e.Low - float64(e.Allowance*e.Low), e.High + float64(e.Allowance*e.High)
 }
 
 // Conditional reports whether the estimate holds only under an assumption of

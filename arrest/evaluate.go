@@ -13,9 +13,9 @@ type evaluation struct {
 	lo, hi  Case // every input at its low and at its high end
 	res     Result
 	spans   *spans
-	written Point     // at the figures as written, where they have middles
-	uses    [5][]int  // inputs by place
-	resting [32][]int // inputs by set of places, made when first asked for
+	written Point              // at the figures as written, where they have middles
+	uses    [places][]int      // inputs by place
+	resting [1 << places][]int // inputs by set of places, made when first asked for
 }
 
 // Evaluate works a job out over its bands: every estimate with its ends, the
@@ -31,6 +31,8 @@ func Evaluate(j *Job) Result {
 		ev.rating(i)
 	}
 	ev.contradictions()
+	ev.runs()
+	ev.runs()
 	ev.warn(partImpossible)
 	return ev.res
 }
@@ -71,6 +73,8 @@ func (in *Input) place() int {
 		return 0
 	case OfFall:
 		return 1
+	case OfPart:
+		return 5
 	}
 	switch in.Key {
 	case "stop.distance", "moving_load.distance":
@@ -121,6 +125,10 @@ func (ev *evaluation) closedForms() {
 		stopped := o.rests&onStop != 0
 		if ev.allWritten(e.Uses) && !(stopped && ev.written.Impossible) {
 			e.Value = o.of(&ev.written)
+		}
+		e.Allowance = nan
+		if o.evidence == Modelled {
+			ev.modelled(&e)
 		}
 		if o.evidence == Shape {
 			e.From = ev.job.Point.Pulse.String()
@@ -188,7 +196,7 @@ func (ev *evaluation) entered() {
 func (ev *evaluation) add(q Quantity, bound Bound, b *quantity.Band, input int) {
 	e := Estimate{
 		Quantity: q, Evidence: Given, Method: Entered, Bound: bound,
-		Low: b.Low, Value: b.Value, High: b.High, Reach: nan,
+		Low: b.Low, Value: b.Value, High: b.High, Reach: nan, Allowance: nan,
 		Typed: b.Unit, Uses: []int{input},
 	}
 	if bound == AtMost {
@@ -216,8 +224,8 @@ func (ev *evaluation) contradictions() {
 			if es[a].Quantity != es[b].Quantity || es[a].Evidence == es[b].Evidence && es[a].Evidence == Given || es[a].silent() || es[b].silent() {
 				continue
 			}
-			whole := es[a].above(es[a].Low, &es[b]) || es[b].above(es[b].Low, &es[a])
-			part := es[a].above(es[a].Reach, &es[b]) || es[b].above(es[b].Reach, &es[a])
+			whole := apart(&es[a], &es[b])
+			part := es[a].Reach > ceiling(&es[b]) || es[b].Reach > ceiling(&es[a])
 			if whole || part {
 				ev.res.Contradictions = append(ev.res.Contradictions, Contradiction{a, b, !whole})
 			}
@@ -228,7 +236,18 @@ func (ev *evaluation) contradictions() {
 // silent reports whether the estimate has no say in a contradiction.
 func (e *Estimate) silent() bool { return e.Conditional() || e.Outside }
 
-// above reports whether x, an end of e, lies above all that o allows.
-func (e *Estimate) above(x float64, o *Estimate) bool {
-	return o.Bound != AtLeast && !math.IsNaN(x) && x > o.High
+// apart reports whether nothing lies in both estimates, a modelled one widened
+// by its allowance. NaN ends are open.
+func apart(a, b *Estimate) bool {
+	lowA, _ := a.Ends()
+	lowB, _ := b.Ends()
+	return lowA > ceiling(b) || lowB > ceiling(a)
+}
+
+// ceiling is the upper end of an estimate, +Inf for a floor.
+func ceiling(e *Estimate) float64 {
+	if _, high := e.Ends(); !math.IsNaN(high) {
+		return high
+	}
+	return math.Inf(1)
 }

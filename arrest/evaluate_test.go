@@ -6,6 +6,7 @@ import (
 	"strings"
 	"testing"
 
+	"arrestcheck/arrest/connector"
 	"arrestcheck/arrest/quantity"
 )
 
@@ -244,6 +245,7 @@ func TestEveryWarningIsReached(t *testing.T) {
 		take(figures{mass: "100 kg", fall: "1.8 m", distance: "1.07 m", time: tm}, nil)
 	}
 	take(figures{mass: "100 kg", fall: "1.8 m", distance: "1.07 m", time: "0.30 s", pulse: RisingRamp}, nil)
+	take(figures{mass: "100 kg", fall: "1.8 m", distance: "1.07 m", pulse: RisingRamp}, nil)
 	for _, d := range []string{"0.2 m", "0.2 m .. 1.5 m"} {
 		take(figures{mass: "152 kg", fall: "2 m", distance: d, ratings: []Rating{label(t)}}, nil)
 		take(figures{mass: "100 kg", fall: "1.8 m", distance: d, ratings: []Rating{label(t)}}, nil)
@@ -252,6 +254,22 @@ func TestEveryWarningIsReached(t *testing.T) {
 	travel := parse(t, quantity.Length, "0.1 m")
 	short.TravelAtMost = &travel
 	take(figures{mass: "100 kg", fall: "1.8 m", ratings: []Rating{short}}, nil)
+	heavy := testPart{kind: connector.WireRope, basis: ByStiffness, give: "500 kN/m"}
+	curve := testPart{kind: connector.Curve, basis: ByPoints}
+	for _, parts := range [][]testPart{
+		{ropePart, absorber("4 kN", "0.2 m"), absorber("5 kN", "0.1 m")},
+		{absorber("4 kN", "0.2 m")}, {absorber("500 N", "0.2 m")}, {heavy}, {curve},
+		{{kind: connector.Rope, basis: ByStaticStretch, length: "10 m", give: "8 %"}},
+		{absorber("4 kN", "1 m"), {kind: connector.Retractable, force: "4 kN", travel: "1 m"}},
+		{{kind: connector.Absorber, force: "500 N", travel: "1000 m"}},
+	} {
+		take(figures{mass: "100 kg", fall: "1.8 m", ratings: []Rating{label(t)}}, func(j *Job) {
+			onPath(t, j, FromLabel, parts...)
+			if parts[0].basis == ByPoints {
+				j.Point.Path.Parts[0].Points = []connector.Point{{}, {Extension: 0.1, Force: 1000}}
+			}
+		})
+	}
 	take(base, func(j *Job) { j.Notes = []Warning{{ID: Unusual}} })
 	for _, id := range WarningIDs() {
 		if !reached[id] {

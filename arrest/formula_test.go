@@ -17,6 +17,9 @@ func TestFormulaTexts(t *testing.T) {
 	for name, f := range workingJobs() {
 		jobs[name] = f.job(t)
 	}
+	for name, j := range pathJobs(t) {
+		jobs[name] = j
+	}
 	for name, j := range jobs {
 		res := Evaluate(j)
 		ShowWorking(j, &res)

@@ -34,6 +34,8 @@ const (
 	OfDocument                 // figures of a rating: the document is the source
 	OfPlace                    // gravity, a stated constant
 	OfDrive                    // what goes on driving a moving load: measured, drawing or plan settle
+	OfPart                     // data of a connector part: measured, label or standard settle
+	OfModel                    // the allowance for the error of the model: any source but an assumption settles
 )
 
 // An Input is one figure of the job. The inputs form the one list from which
@@ -68,6 +70,8 @@ func (in *Input) Open() OpenReason {
 		return Settled
 	case in.Source == NoSource:
 		return OpenNoSource
+	case in.Role == OfModel && in.Source != FromAssumed:
+		return Settled
 	case !in.settles():
 		return OpenSource
 	case in.Band.Tolerance == quantity.Untold && !in.exactZero():
@@ -80,6 +84,8 @@ func (in *Input) settles() bool {
 	switch in.Source {
 	case FromMeasured:
 		return true
+	case FromLabel, FromStandard:
+		return in.Role == OfPart
 	case FromDrawing, FromPlan:
 		return in.Role == OfWorker || in.Role == OfFall || in.Role == OfDrive
 	}
@@ -104,6 +110,10 @@ type Rating struct {
 	PeakForceAtMost *quantity.Band // nil where the document is silent
 	MeanForceAtMost *quantity.Band
 	TravelAtMost    *quantity.Band
+
+	// Part is the number of the connector part the document belongs to, from 1;
+	// 0 where it belongs to none.
+	Part int
 
 	// TravelIsDeceleration is true when the document says that its travel is
 	// the whole deceleration distance; else it is the travel of the absorber.

@@ -84,6 +84,36 @@ var methods = [...]Method{
 		Source: "the document named with it, as entered by the user",
 	},
 	{
+		ID: "M-10", Title: "linear elastic part, and the fall factor",
+		Valid:  "one part that stretches in proportion to the force and nothing else that gives way",
+		Errs:   "published drops lie up to 30 % above it at high mass and fall factor (A. Weber 2002, abstract)",
+		Source: "A. Wexler, The Theory of Belaying, American Alpine Journal 7 (1950)",
+	},
+	{
+		ID: "M-11", Title: "modulus from a rated rope",
+		Valid:  "the rated impact force of a single dynamic rope in the test of EN 892: 80 kg, fall factor about 1.77",
+		Errs:   "the modulus is that of the test: peaks of smaller falls err high, those of harder falls low",
+		Source: "M-10 turned round for the test of EN 892",
+	},
+	{
+		ID: "M-12", Title: "travel of an absorber alone",
+		Valid:  "nothing else stretches, and the deployment force is above the weight",
+		Errs:   "high: every other stretch takes energy too; whether the absorber is exhausted only the whole path can say",
+		Source: derived + "work and energy at a constant force",
+	},
+	{
+		ID: "M-15", Title: "the arrest worked out in time: parts in series, one massless path",
+		Valid:  "a fall straight down with no side offset; the parts are as entered; m*x'' = W - F(x, history) with equal force in all parts",
+		Errs:   "either way: the residuals of momentum and energy measure the arithmetic and say nothing about the model; only the user's own allowance does",
+		Source: derived + "piecewise exact between events; checked against step-by-step integration",
+	},
+	{
+		ID: "M-16", Title: "allowance for the error of the model",
+		Valid:  "the user's own figure with its source; there is none built in",
+		Errs:   "as the user's figure",
+		Source: "the user; our comparison with published drops is printed beside the request",
+	},
+	{
 		ID: "M-50", Title: "bands: corners and turning points",
 		Valid:  "every figure lies somewhere in its band, in any combination",
 		Errs:   "wide: the ends are those of the least and most favourable combination. A range has no middle figure unless one was written",

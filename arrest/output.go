@@ -1,19 +1,23 @@
 package arrest
 
-// rests says which inputs an output hangs on.
-type rests uint8
+// rests says which inputs an output hangs on, and to which kind of job it
+// belongs.
+type rests uint16
 
 const (
 	onMass rests = 1 << iota
 	onFall
 	onDistance
 	onTime
-	onRise // also what else drives the motion
+	onRise  // also what else drives the motion
+	onParts // the figures of the connector path
 
 	ofFall // the output is one of a fall
 	ofLoad // the output is one of a moving load
+	ofPath // the output is one of a connector path
 
-	onInputs = onMass | onFall | onDistance | onTime | onRise
+	places   = 6 // how many of the bits stand for inputs
+	onInputs = ofFall - 1
 	onStop   = onDistance | onTime
 )
 
@@ -21,6 +25,9 @@ const (
 func (o *output) applies(c *Case) bool {
 	if c.Load.Mass > 0 {
 		return o.rests&ofLoad != 0 && o.axes <= c.Load.Axes
+	}
+	if o.rests&ofPath != 0 {
+		return c.Path != nil
 	}
 	return o.rests&ofFall != 0 && (o.evidence != Shape || c.Pulse != NoPulse)
 }
@@ -56,6 +63,20 @@ var outputs = [...]output{
 	{OnsetRate, Shape, "M-08", Between, ofFall | onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Assumed.Onset }, 0},
 	{StoppingDistance, Shape, "M-07", Between, ofFall | onFall | onTime | onRise, func(p *Point) float64 { return p.Assumed.Distance }, 0},
 	{StoppingTime, Shape, "M-07", Between, ofFall | onFall | onDistance | onRise, func(p *Point) float64 { return p.Assumed.Time }, 0},
+
+	{PeakForce, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Peak) }, 0},
+	{ForceOverWeight, Modelled, "M-08", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Peak) / p.Weight }, 0},
+	{PeakDeceleration, Modelled, "M-08", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Peak)/p.TotalMass - p.Weight/p.TotalMass }, 0},
+	{AnchorForce, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.AnchorForce) }, 0},
+	{OnsetRate, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Onset) }, 0},
+	{StoppingDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.StoppingDistance) }, 0},
+	{DecelerationDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.DecelerationDistance) }, 0},
+	{AbsorberTravel, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.AbsorberTravel) }, 0},
+	{StoppingTime, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.StoppingTime) }, 0},
+	{MeanForceOverDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.MeanOverDistance) }, 0},
+	{MeanForceOverTime, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.MeanOverTime) }, 0},
+	{ShapeRatio, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.ratio(p) }, 0},
+	{FallFactor, Given, "M-10", Between, ofPath | onFall | onParts, func(p *Point) float64 { return p.Model.FallFactor }, 0},
 
 	{PeakForce, Given, "M-60", AtLeast, ofLoad | onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Floor }, 0},
 	{PeakDeceleration, Given, "M-60", AtLeast, ofLoad | onFall | onDistance | onTime, func(p *Point) float64 { return p.Load.Deceleration }, 0},

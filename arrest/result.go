@@ -70,6 +70,7 @@ type Result struct {
 	Warnings       []Warning
 	Working        []WorkingLine // empty until ShowWorking fills it
 	Contradictions []Contradiction
+	Runs           []ModelRun // of the connector path: as written, and at the greatest peak
 	Persons        int
 	Example        bool
 }

@@ -38,6 +38,7 @@ type spans struct {
 	free   []*Input // the inputs with two ends, in the order of the corners' bits
 	base   Case     // every input at its low end
 	beside []Case   // points beside the corners
+	path   pathNotes
 }
 
 func newSpans(j *Job) *spans {
@@ -101,6 +102,24 @@ func (s *spans) take(p *Point, where int, list []int) {
 	}
 }
 
+// takeBeside widens the spans of all outputs by a point beside the corners and
+// keeps it only where it widens one.
+func (s *spans) takeBeside(p *Point, c *Case) {
+	s.notePath(p)
+	for _, i := range s.live {
+		if x := outputs[i].of(p); x < s.of[i].low.value || x > s.of[i].high.value {
+			s.take(p, s.add(*c), s.live)
+			return
+		}
+	}
+}
+
+func (s *spans) notePath(p *Point) {
+	if s.base.Path != nil {
+		s.path.note(p.Model)
+	}
+}
+
 // overCorners fills the spans from all corners and, where some of them cannot
 // happen, from the edge of what can.
 func overCorners(j *Job) (s *spans, partImpossible bool) {
@@ -110,10 +129,14 @@ func overCorners(j *Job) (s *spans, partImpossible bool) {
 		c := s.corner(n)
 		At(&c, &p)
 		s.take(&p, n, s.live)
+		s.notePath(&p)
 		partImpossible = partImpossible || p.Impossible
 	}
 	if partImpossible {
 		overEdge(j, s)
+	}
+	if j.Point.Path != nil {
+		searchPath(s)
 	}
 	if j.Moving() {
 		throughZero(j, s)

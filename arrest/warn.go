@@ -2,6 +2,7 @@ package arrest
 
 import (
 	"math"
+	"slices"
 	"strconv"
 	"strings"
 
@@ -26,6 +27,10 @@ func (ev *evaluation) tell(id WarningID, args ...Arg) {
 	ev.res.Warnings = append(ev.res.Warnings, Warning{id, args})
 }
 
+func (ev *evaluation) told(id WarningID) bool {
+	return slices.ContainsFunc(ev.res.Warnings, func(w Warning) bool { return w.ID == id })
+}
+
 // warn adds the warnings about the job as a whole.
 func (ev *evaluation) warn(partImpossible bool) {
 	if ev.job.Example {
@@ -34,7 +39,7 @@ func (ev *evaluation) warn(partImpossible bool) {
 	c := &ev.job.Point
 	if len(ev.uses[2])+len(ev.uses[3]) > 0 {
 		ev.tell(MeansAreNotPeaks)
-	} else if len(ev.job.Ratings) == 0 {
+	} else if len(ev.job.Ratings) == 0 && c.Path == nil {
 		ev.tell(NothingAboutStop)
 	}
 	if partImpossible {
@@ -42,9 +47,10 @@ func (ev *evaluation) warn(partImpossible bool) {
 		At(&ev.lo, &slow)
 		ev.tell(PartImpossible, length(reachable(slow.Speed, ev.lo.Gravity, ev.lo.Time)), length(ev.hi.Distance))
 	}
-	if c.Pulse != NoPulse {
+	if c.Pulse != NoPulse && !ev.told(ShapeContradicted) {
 		ev.tell(ShapeAssumed, Text(c.Pulse.String()))
 	}
+	ev.warnPath()
 	ev.warnRatio()
 	ev.warnFloor()
 	ev.warnContradictions()

@@ -3,6 +3,7 @@ package arrest
 import (
 	"math"
 
+	"arrestcheck/arrest/connector"
 	"arrestcheck/arrest/quantity"
 )
 
@@ -74,6 +75,20 @@ var symbols = [...]symbol{
 	{Symbol{"F_angle", "direction of the mean stopping force from +x towards +y", quantity.Angle}, func(c *Case, p *Point) float64 { return bearing(p.Load.Force) }},
 	{Symbol{"a_mean", "mean net deceleration", quantity.Acceleration}, func(c *Case, p *Point) float64 { return p.Load.Deceleration }},
 	{Symbol{"r_load", "ratio of the two routes", quantity.Ratio}, func(c *Case, p *Point) float64 { return p.Load.Ratio }},
+	{Symbol{"L", "length of all parts that state one", quantity.Length}, func(c *Case, p *Point) float64 { return c.Path.length(c) }},
+	{Symbol{"f", "fall factor", quantity.Ratio}, func(c *Case, p *Point) float64 { return p.Model.FallFactor }},
+	{Symbol{"k_path", "stiffness of the part", quantity.Stiffness}, func(c *Case, p *Point) float64 { return p.Model.parts[0].Stiffness }},
+	{Symbol{"F_elastic", "peak by the closed form of one elastic part", quantity.Force}, func(c *Case, p *Point) float64 {
+		return connector.ElasticPeak(p.TotalMass, p.Speed, p.Model.parts[0].Stiffness, c.Gravity)
+	}},
+	{Symbol{"F_a", "deployment force of the absorber", quantity.Force}, func(c *Case, p *Point) float64 { return p.Model.parts[0].Plateau.Force }},
+	{Symbol{"x_a", "travel of the absorber alone by the closed form", quantity.Length}, func(c *Case, p *Point) float64 {
+		return connector.AbsorberTravel(p.TotalMass, p.Speed, p.Model.parts[0].Plateau.Force, c.Gravity)
+	}},
+	{Symbol{"U", "rated impact force of the rope", quantity.Force}, func(c *Case, p *Point) float64 { return ratedRope(c) }},
+	{Symbol{"W_0", "weight of the test mass", quantity.Force}, func(c *Case, p *Point) float64 { r := connector.SingleRope(1); return r.Mass * r.Gravity }},
+	{Symbol{"f_0", "fall factor of the test", quantity.Ratio}, func(c *Case, p *Point) float64 { return connector.SingleRope(1).FallFactor }},
+	{Symbol{"M_rope", "modulus of the rope", quantity.Force}, func(c *Case, p *Point) float64 { return connector.Modulus(connector.SingleRope(ratedRope(c))) }},
 	{Symbol{"t_shape", "stopping time of the assumed shape", quantity.Time}, func(c *Case, p *Point) float64 { return shapeTime(c, p) }},
 	{Symbol{"d_shape", "stopping distance of the assumed shape", quantity.Length}, func(c *Case, p *Point) float64 { return p.Assumed.Distance }},
 	{Symbol{"F_shape", "peak if the stop had the assumed shape", quantity.Force}, func(c *Case, p *Point) float64 { return p.Assumed.Peak }},
@@ -135,6 +150,27 @@ func shaped(as Pulse) func(*Case, *Point) bool {
 	return func(c *Case, p *Point) bool { return c.Pulse == as }
 }
 
+func withRatedRope(c *Case, p *Point) bool { return ratedRope(c) > 0 }
+
+// ratedRope is the impact force of the first rope that is known by it; 0 where
+// none is.
+func ratedRope(c *Case) float64 {
+	for i := range c.Path.Parts {
+		if pp := &c.Path.Parts[i]; pp.Basis == ByImpactForce {
+			return c.Figures[pp.Give]
+		}
+	}
+	return 0
+}
+
+func oneElastic(c *Case, p *Point) bool {
+	return len(p.Model.parts) == 1 && p.Model.parts[0].Stiffness > 0 && p.Model.parts[0].Plateau.Force == 0
+}
+
+func oneAbsorber(c *Case, p *Point) bool {
+	return len(p.Model.parts) == 1 && p.Model.parts[0].Stiffness == 0 && p.Model.parts[0].Plateau.Force > p.Weight
+}
+
 func not(a func(*Case, *Point) bool) func(*Case, *Point) bool {
 	return func(c *Case, p *Point) bool { return !a(c, p) }
 }
@@ -189,6 +225,13 @@ var passages = [...]passage{
 	}, 0},
 	{ForceOverWeight, Shape, []line{{"M-08", "n_shape = F_shape/W", nil}}, 0},
 	{OnsetRate, Shape, []line{{"M-08", "R_shape = F_shape/t_rise", nil}}, 0},
+
+	{FallFactor, Given, []line{{"M-10", "f = h_equal/L", nil}}, 0},
+	{PeakForce, Modelled, []line{
+		{"M-11", "M_rope = U*(U - 2*W_0)/(2*W_0*f_0)", withRatedRope},
+		{"M-10", "F_elastic = W + sqrt(W^2 + k_path*m*v^2)", oneElastic},
+		{"M-12", "x_a = m*v^2/2/(F_a - W)", oneAbsorber},
+	}, 0},
 
 	{ImpulseX, Given, []line{{"M-60", "J_x = m*(v2_x - v1_x)", nil}}, 0},
 	{ImpulseY, Given, []line{{"M-60", "J_y = m*(v2_y - v1_y)", nil}}, 0},
@@ -275,7 +318,7 @@ func (l *line) fill(o *output, corner Corner, c *Case, p *Point) WorkingLine {
 		}
 		w.Terms = append(w.Terms, t)
 	}
-	if o.bound == AtLeast {
+	if o.bound == AtLeast && w.Result.Symbol != "tau" && w.Result.Symbol != "d_limit" {
 		w.Rounding = quantity.Down
 	}
 	return w

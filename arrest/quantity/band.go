@@ -24,10 +24,3 @@ type Band struct {
 	// unknown for a Range.
 	low, value, high exact
 }
-
-// newBand rounds the exact figures, already in SI units.
-func newBand(low, value, high exact) Band {
-	b := Band{low: low, value: value, high: high}
-	b.Low, b.Value, b.High = low.rounded(), value.rounded(), high.rounded()
-	return b
-}

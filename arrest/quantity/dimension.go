@@ -22,21 +22,21 @@ const (
 	Ratio
 )
 
-// dimensions holds what is said about each Dimension: its name, a figure
-// written right, and the symbol of its SI unit.
-var dimensions = [Ratio + 1]struct{ name, example, si string }{
-	Mass:         {"mass", "100 kg", "kg"},
-	Length:       {"length", "1.8 m", "m"},
-	Time:         {"time", "0.35 s", "s"},
-	Force:        {"force", "6 kN", "N"},
-	Speed:        {"speed", "5 m/s", "m/s"},
-	Acceleration: {"acceleration", "9.8 m/s2", "m/s2"},
-	Angle:        {"angle", "30 deg", "rad"},
-	Energy:       {"energy", "1.5 kJ", "J"},
-	Impulse:      {"impulse", "500 N*s", "N*s"},
-	Stiffness:    {"stiffness", "20 kN/m", "N/m"},
-	ForceRate:    {"force rate", "100 kN/s", "N/s"},
-	Ratio:        {"ratio", "25 %", "1"},
+// dimensions holds what is said about each Dimension: its name, a figure and a
+// range written right, and the symbol of its SI unit.
+var dimensions = [Ratio + 1]struct{ name, example, span, si string }{
+	Mass:         {"mass", "100 kg", "86 kg .. 104 kg", "kg"},
+	Length:       {"length", "1.8 m", "1.6 m .. 1.8 m", "m"},
+	Time:         {"time", "0.35 s", "0.30 s .. 0.38 s", "s"},
+	Force:        {"force", "6 kN", "4 kN .. 6 kN", "N"},
+	Speed:        {"speed", "5 m/s", "5 m/s .. 6 m/s", "m/s"},
+	Acceleration: {"acceleration", "9.8 m/s2", "9.78 m/s2 .. 9.83 m/s2", "m/s2"},
+	Angle:        {"angle", "30 deg", "20 deg .. 30 deg", "rad"},
+	Energy:       {"energy", "1.5 kJ", "1.2 kJ .. 1.5 kJ", "J"},
+	Impulse:      {"impulse", "500 N*s", "480 N*s .. 520 N*s", "N*s"},
+	Stiffness:    {"stiffness", "20 kN/m", "18 kN/m .. 22 kN/m", "N/m"},
+	ForceRate:    {"force rate", "100 kN/s", "80 kN/s .. 120 kN/s", "N/s"},
+	Ratio:        {"ratio", "25 %", "20 % .. 25 %", "1"},
 }
 
 // known reports whether d is one of the dimensions above.
@@ -70,4 +70,33 @@ func (d Dimension) SI() Unit {
 		panic("quantity: SI of " + d.String())
 	}
 	return find(d, dimensions[d].si).unit
+}
+
+// indefinite returns the name of d with its article, "a mass".
+func (d Dimension) indefinite() string {
+	switch name := d.String(); name[0] {
+	case 'a', 'e', 'i':
+		return "an " + name
+	default:
+		return "a " + name
+	}
+}
+
+// written says how a figure of d is written, "a mass is written in kg, g, t or
+// lb".
+func (d Dimension) written() string {
+	text := d.indefinite() + " is written in "
+	for i := range table[d] {
+		r := &table[d][i]
+		switch {
+		case !r.typed():
+			continue
+		case i > 0 && i == len(table[d])-1:
+			text += " or "
+		case i > 0:
+			text += ", "
+		}
+		text += r.unit.Symbol
+	}
+	return text
 }

@@ -4,7 +4,6 @@ import (
 	"math"
 	"math/big"
 	"math/bits"
-	"strings"
 )
 
 // exact is a rational number. It is num/den with den > 0, not always in lowest
@@ -178,6 +177,14 @@ func quotient(num, den uint64) float64 {
 	return math.Ldexp(float64(q), down-up-63)
 }
 
+// rounded returns x as float does, or NaN if it is unknown.
+func (x exact) rounded() float64 {
+	if !x.known() {
+		return math.NaN()
+	}
+	return x.float()
+}
+
 // String returns x as a decimal if it ends, else as a fraction in lowest terms.
 func (x exact) String() string {
 	r := x.rat()
@@ -185,5 +192,5 @@ func (x exact) String() string {
 	if !ends {
 		return r.String()
 	}
-	return strings.TrimSuffix(r.FloatString(digits), ".")
+	return r.FloatString(digits)
 }

@@ -31,8 +31,8 @@ func shortest(x float64, shift int) string {
 	if x == 0 {
 		return "0"
 	}
-	var d decimal
-	d.set(x, -1)
+	var room [decimalRoom]byte
+	d := decimalOf(room[:0], x, -1)
 	d.point += shift
 	return string(d.append(nil))
 }

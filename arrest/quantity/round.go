@@ -1,6 +1,7 @@
 package quantity
 
 import (
+	"bytes"
 	"math"
 	"strconv"
 )
@@ -54,7 +55,7 @@ func Snap(x float64) float64 {
 	if !isFinite(x) {
 		return x
 	}
-	var room [32]byte
+	var room [decimalRoom]byte
 	text := strconv.AppendFloat(room[:0], x, 'e', snapDigits-1, 64)
 	snapped, _ := strconv.ParseFloat(string(text), 64)
 	return snapped + 0
@@ -75,8 +76,8 @@ func appendNumber(to []byte, x float64, digits int, r Rounding) []byte {
 	case x == 0:
 		return append(to, '0')
 	}
-	var d decimal
-	d.set(x, snapDigits-1)
+	var room [decimalRoom]byte
+	d := decimalOf(room[:0], x, snapDigits-1)
 	d.round(min(max(digits, 1), snapDigits), r)
 	return d.append(to)
 }
@@ -87,23 +88,34 @@ type decimal struct {
 	negative bool
 	digits   []byte
 	point    int
-	room     [32]byte
 }
 
-// set makes d the number x, to the given number of digits after the first; -1
-// takes the fewest that name x.
-func (d *decimal) set(x float64, after int) {
-	text := strconv.AppendFloat(d.room[:0], math.Abs(x), 'e', after, 64)
-	e := len(text) - 1
-	for text[e] != 'e' {
-		e--
-	}
-	exponent, _ := strconv.Atoi(string(text[e+1:]))
+// decimalRoom is enough for the digits of any float64 with their exponent.
+const decimalRoom = 32
+
+// decimalOf returns x to the given number of digits after the first, correctly
+// rounded; -1 takes the fewest digits that name x. The digits are in room.
+func decimalOf(room []byte, x float64, after int) decimal {
+	text := strconv.AppendFloat(room, math.Abs(x), 'e', after, 64)
+	e := bytes.IndexByte(text, 'e')
+	point := exponentIn(text[e+1:]) + 1
 	if e > 1 { // "1.25e+01": close the gap of the decimal point
 		copy(text[1:], text[2:e])
 		e--
 	}
-	d.negative, d.digits, d.point = x < 0, text[:e], exponent+1
+	return decimal{negative: x < 0, digits: text[:e], point: point}
+}
+
+// exponentIn reads a sign and digits.
+func exponentIn(text []byte) int {
+	n := 0
+	for _, c := range text[1:] {
+		n = n*10 + int(c-'0')
+	}
+	if text[0] == '-' {
+		return -n
+	}
+	return n
 }
 
 // round shortens d to its first keep digits.

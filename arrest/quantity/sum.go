@@ -1,8 +1,8 @@
 package quantity
 
 import (
-	"math"
 	"math/big"
+	"strings"
 )
 
 // Sum returns a + b, low to low, value to value, high to high. The figures
@@ -21,37 +21,28 @@ func Sum(a, b Band) Band {
 	if d, e := a.Unit.Dimension, b.Unit.Dimension; d != e && d != 0 && e != 0 {
 		panic("quantity: Sum of a " + d.String() + " and a " + e.String())
 	}
-	sum := newBand(
-		add(a.low, a.Low, b.low, b.Low),
-		add(a.value, a.Value, b.value, b.Value),
-		add(a.high, a.High, b.high, b.High))
-	sum.Low = orPlain(sum.Low, a.Low, b.Low)
-	sum.High = orPlain(sum.High, a.High, b.High)
-	sum.Value = orPlain(sum.Value, a.Value, b.Value)
-	sum.Tolerance = max(a.Tolerance, b.Tolerance)
+	sum := Band{Tolerance: max(a.Tolerance, b.Tolerance), Text: term(a) + plusSign + term(b)}
+	sum.low, sum.Low = add(a.low, a.Low, b.low, b.Low)
+	sum.value, sum.Value = add(a.value, a.Value, b.value, b.Value)
+	sum.high, sum.High = add(a.high, a.High, b.high, b.High)
 	if a.Unit == b.Unit {
 		sum.Unit = a.Unit
 	}
-	sum.Text = term(a) + " + " + term(b)
 	return sum
 }
 
-// add returns the exact sum of two figures, unknown if one of them is not
-// finite.
-func add(x exact, xf float64, y exact, yf float64) exact {
-	x, y = x.standingFor(xf), y.standingFor(yf)
-	if !x.known() || !y.known() {
-		return exact{}
-	}
-	return x.plus(y)
-}
+// plusSign stands between the terms of a sum.
+const plusSign = " + "
 
-// orPlain returns exactly, or a + b where no exact sum exists.
-func orPlain(exactly, a, b float64) float64 {
-	if math.IsNaN(exactly) {
-		return a + b
+// add returns the sum of two figures, exactly and rounded. If one of them is
+// not finite there is no exact sum.
+func add(x exact, xFloat float64, y exact, yFloat float64) (exact, float64) {
+	x, y = x.standingFor(xFloat), y.standingFor(yFloat)
+	if !x.known() || !y.known() {
+		return exact{}, xFloat + yFloat
 	}
-	return exactly
+	sum := x.plus(y)
+	return sum, sum.float()
 }
 
 // standingFor returns x if it is what f was rounded from, else f itself;
@@ -66,17 +57,9 @@ func (x exact) standingFor(f float64) exact {
 	return exact{}
 }
 
-// rounded returns x as a float64, NaN if it is unknown.
-func (x exact) rounded() float64 {
-	if !x.known() {
-		return math.NaN()
-	}
-	return x.float()
-}
-
 // term returns the text of b as it stands in a sum.
 func term(b Band) string {
-	if b.Tolerance == Untold {
+	if b.Tolerance == Untold || strings.Contains(b.Text, plusSign) {
 		return b.Text
 	}
 	return "(" + b.Text + ")"

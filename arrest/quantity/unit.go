@@ -30,10 +30,11 @@ type row struct {
 }
 
 // The exact factors behind the table, as integers over integers.
-// Source: NIST Special Publication 811 (2008), Appendix B.8: pound 0.453 592 37
-// kg, inch 0.0254 m, foot 0.3048 m, mile 1609.344 m, standard acceleration of
-// free fall 9.806 65 m/s2, each exact. The pound-force is the pound times the
-// standard acceleration, 4.448 221 615 260 5 N, exact; the kip is 1000 lbf.
+// Source: NIST Special Publication 811, Appendix B.8 (pound 0.453 592 37 kg,
+// inch 0.0254 m, foot 0.3048 m, mile 1609.344 m, standard acceleration of free
+// fall 9.806 65 m/s2, each exact; the rows are in testdata/reference/units.toml).
+// The pound-force is the pound times the standard acceleration, 4.448 221 615
+// 260 5 N, exact as well; the kip is 1000 lbf.
 const (
 	poundTop, poundUnder           = 45359237, 1e8
 	gravityTop, gravityUnder       = 980665, 1e5
@@ -118,10 +119,10 @@ func rows(d Dimension, entries ...entry) []row {
 	return made
 }
 
-// pi to 80 decimals (NIST Digital Library of Mathematical Functions, 3.12.1,
-// gives the first 30 of them; the test of this file recomputes all). Its error, below 1e-80, is the only
-// inexact factor of the package: it moves the rounding of no figure of fewer
-// than about 60 digits.
+// pi is cut after 80 decimals, which the test of this file works out anew. It
+// is the one inexact factor of the package; the error, below 1e-80, can matter
+// to the rounding only where a figure lies within 1e-60 of half way between
+// two float64.
 const pi = "3.14159265358979323846264338327950288419716939937510582097494459230781640628620899"
 
 // angleRows makes the rows of Angle, the one dimension with an irrational

@@ -1,0 +1,190 @@
+package arrest
+
+import (
+	"math"
+	"math/bits"
+
+	"arrestcheck/arrest/connector"
+)
+
+// A PathRun is what the connector path does at one point, SI (M-15). NaN where
+// the run did not come to it, +Inf where nothing stops the body.
+type PathRun struct {
+	Run        connector.Result
+	FallFactor float64 // free fall over the length of the parts that state one; NaN where none does
+	Failed     error   // a run that does not close: an internal error
+
+	path  connector.Path
+	parts []connector.Part
+}
+
+// modelAt runs the path of c. The first call on a Point makes room; later ones
+// allocate nothing.
+func modelAt(c *Case, p *Point) {
+	if p.Model == nil {
+		p.Model = new(PathRun)
+	}
+	m := p.Model
+	m.parts = c.Path.fill(c, m.parts)
+	m.FallFactor = p.FreeFall / c.Path.length(c)
+	if math.IsInf(m.FallFactor, 0) {
+		m.FallFactor = nan
+	}
+	if m.Failed = m.path.Set(m.parts...); m.Failed != nil {
+		return
+	}
+	fall := connector.Fall{Mass: p.TotalMass, FreeFall: c.FreeFall, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
+	m.Failed = connector.Run(&m.path, &fall, &m.Run)
+}
+
+// stopped returns x, or +Inf where the path never stops the body.
+func (m *PathRun) stopped(x float64) float64 {
+	if m.Failed != nil {
+		return nan
+	}
+	if m.Run.Status == connector.Endless {
+		return math.Inf(1)
+	}
+	return x
+}
+
+// ratio is r of M-04 for the modelled stop.
+func (m *PathRun) ratio(p *Point) float64 {
+	return p.Speed * m.Run.StoppingTime / (2 * m.Run.StoppingDistance)
+}
+
+// Series returns the modelled arrest at one point as moments so close that
+// straight lines between them stay within 0.1 % of the peak.
+func Series(c *Case) ([]connector.State, error) {
+	var p Point
+	At(c, &p)
+	if p.Model.Failed != nil {
+		return nil, p.Model.Failed
+	}
+	fall := connector.Fall{Mass: p.TotalMass, FreeFall: c.FreeFall, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
+	return connector.Trace(&p.Model.path, &fall, &p.Model.Run, nil)
+}
+
+// pathNotes are what the runs over the bands came to that no estimate tells.
+type pathNotes struct {
+	exhausted bool
+	part      int     // the part that is exhausted with the most energy left
+	left      float64 // that energy, J
+	peak      float64 // the peak then, N
+	rigid     bool    // a blow on something rigid, or nothing that stops the body
+	beyond    uint64  // parts that went beyond their last loading point
+	failed    error
+}
+
+// note takes one run into the notes.
+func (n *pathNotes) note(m *PathRun) {
+	if m.Failed != nil {
+		n.failed = m.Failed
+		return
+	}
+	r := &m.Run
+	n.rigid = n.rigid || r.Status == connector.Rigid || r.Status == connector.Endless
+	n.beyond |= r.BeyondPoints
+	if r.FirstExhausted >= 0 && (!n.exhausted || r.EnergyLeft > n.left) {
+		n.exhausted, n.part, n.left, n.peak = true, r.FirstExhausted, r.EnergyLeft, r.Peak
+	}
+}
+
+// searched are the modelled outputs whose ends are looked for between the
+// corners; every point tried widens all the others too.
+var searched = [...]Quantity{PeakForce, AbsorberTravel, StoppingDistance, StoppingTime, OnsetRate}
+
+const (
+	coarse = 8  // points tried along one input before the best is closed in on
+	fine   = 24 // golden sections after that
+	passes = 2  // over all inputs
+)
+
+// searchPath widens the spans of the modelled outputs by turning points inside
+// the bands: the peak is not monotone in an absorber's force, nor always in a
+// stiffness (M-50). From the best corner it goes along one input after the
+// other.
+func searchPath(s *spans) {
+	for _, q := range searched {
+		i := indexOf(q, Modelled)
+		for _, sign := range [...]float64{1, -1} {
+			x := s.of[i].low
+			if sign < 0 {
+				x = s.of[i].high
+			}
+			if !s.of[i].known() || math.IsInf(x.value, 0) {
+				continue
+			}
+			w := walkPath{s: s, at: s.caseAt(x), of: func(p *Point) float64 { return sign * outputs[i].of(p) }}
+			for range passes {
+				for _, in := range s.free {
+					w.along(in)
+				}
+			}
+		}
+	}
+}
+
+// A walkPath looks for the least of a function along one input after another.
+type walkPath struct {
+	s  *spans
+	at Case
+	of func(*Point) float64
+	p  Point
+}
+
+// try works out one point, widens all spans by it and returns the function.
+func (w *walkPath) try(in *Input, x float64) float64 {
+	c := w.at
+	in.Set(&c, x)
+	At(&c, &w.p)
+	w.s.takeBeside(&w.p, &c)
+	y := w.of(&w.p)
+	if math.IsNaN(y) {
+		return math.Inf(1)
+	}
+	return y
+}
+
+// along sets one input to where the function is least.
+func (w *walkPath) along(in *Input) {
+	lo, hi := in.Band.Low, in.Band.High
+	best, least := 0, math.Inf(1)
+	for k := 0; k <= coarse; k++ {
+		if y := w.try(in, lo+(hi-lo)*float64(k)/coarse); y < least {
+			best, least = k, y
+		}
+	}
+	step := (hi - lo) / coarse
+	a, b := max(lo, lo+float64(best-1)*step), min(hi, lo+float64(best+1)*step)
+	const ratio = 0.6180339887498949 // of the golden section
+	for range fine {
+		x, y := b-ratio*(b-a), a+ratio*(b-a)
+		if w.try(in, x) < w.try(in, y) {
+			b = y
+		} else {
+			a = x
+		}
+	}
+	at := lo + (hi-lo)*float64(best)/coarse
+	if w.try(in, (a+b)/2) < least {
+		at = (a + b) / 2
+	}
+	in.Set(&w.at, at)
+}
+
+// beyondNames lists the parts whose bits are set.
+func (pl *PathPlan) beyondNames(set uint64) []string {
+	var names []string
+	for ; set != 0; set &= set - 1 {
+		names = append(names, pl.Parts[bits.TrailingZeros64(set)].Name)
+	}
+	return names
+}
+
+// A ModelRun is the modelled arrest at one point, for the report.
+type ModelRun struct {
+	Corner Corner // AtWritten, or AtHigh for the point of the greatest peak
+	Case   Case
+	Run    connector.Result
+}

@@ -1,0 +1,96 @@
+package arrest
+
+import "arrestcheck/arrest/connector"
+
+// MaxPathFigures is the greatest number of figures of one connector path.
+const MaxPathFigures = 24
+
+// NoFigure stands in a PlannedPart where it has no such figure.
+const NoFigure = -1
+
+// A Basis says what the stiffness of a part is worked out from.
+type Basis uint8
+
+const (
+	Rigid           Basis = iota // the part does not stretch
+	ByStiffness                  // N/m
+	ByModulus                    // length and modulus, N
+	ByImpactForce                // length and rated impact force of the EN 892 test, N (M-11)
+	ByStaticStretch              // length and stretch under 80 kg alone (ratio)
+	ByPoints                     // loading points
+)
+
+// A PlannedPart says which figures of a Case make one part of the path. The
+// figures are indexes into Case.Figures, or NoFigure.
+type PlannedPart struct {
+	Name     string // as the user calls it, or its kind
+	Kind     connector.Kind
+	Basis    Basis
+	Length   int // m
+	Give     int // stiffness N/m, modulus N, impact force N or static stretch, by Basis
+	Force    int // deployment, braking or slip force, N
+	Travel   int // at most, m
+	Activate int // activation force, N
+	Rise     int // travel over which the force rises from activation to deployment, m
+	Locking  int // travel before locking, m; part of the free fall as entered
+
+	Points    []connector.Point // of ByPoints, exact
+	Unloading float64           // stiffness of the way back of ByPoints, N/m; 0: along the loading curve
+	Lifeline  bool
+}
+
+// A PathPlan makes a connector path of the figures of a Case. It is never
+// changed once a job holds it.
+type PathPlan struct{ Parts []PlannedPart }
+
+// fill makes the parts at one point. The travel before a retractable locks is
+// part of the free fall as entered, so that it is no slack here.
+func (pl *PathPlan) fill(c *Case, parts []connector.Part) []connector.Part {
+	parts = parts[:0]
+	for i := range pl.Parts {
+		parts = append(parts, pl.Parts[i].at(c))
+	}
+	return parts
+}
+
+func (pp *PlannedPart) at(c *Case) connector.Part {
+	figure := func(i int) float64 {
+		if i == NoFigure {
+			return 0
+		}
+		return c.Figures[i]
+	}
+	p := connector.Part{Kind: pp.Kind}
+	switch length, give := figure(pp.Length), figure(pp.Give); pp.Basis {
+	case ByStiffness:
+		p = connector.Elastic(pp.Kind, give)
+	case ByModulus:
+		p = connector.FromModulus(pp.Kind, give, length)
+	case ByImpactForce:
+		p = connector.RopeFromRating(connector.SingleRope(give), length)
+	case ByStaticStretch:
+		p = connector.RopeFromStaticStretch(staticStretchMass*StandardGravity, give, length)
+	case ByPoints:
+		p = connector.FromPoints(pp.Points, pp.Unloading)
+	}
+	p.Kind, p.Lifeline = pp.Kind, pp.Lifeline
+	if pp.Force != NoFigure {
+		p.Plateau = connector.Plateau{Force: figure(pp.Force), Travel: figure(pp.Travel), Activation: figure(pp.Activate), Rise: figure(pp.Rise)}
+	}
+	return p
+}
+
+// staticStretchMass is the mass, kg, under which EN 892 states the static
+// stretch of a rope (from memory).
+const staticStretchMass = 80
+
+// length returns the length of all parts that state one, m.
+func (pl *PathPlan) length(c *Case) float64 {
+	sum := 0.0
+	for i := range pl.Parts {
+		if n := pl.Parts[i].Length; n != NoFigure {
+			sum += c.Figures[n]
+		}
+	}
+	return sum
+}
