@@ -59,7 +59,7 @@ func begin(j *Job) (ev *evaluation, partImpossible bool) {
 func (ev *evaluation) sortInputs() {
 	for i := range ev.job.Inputs {
 		in := &ev.job.Inputs[i]
-		if in.Set == nil || in.Role == OfPlace {
+		if in.Set == nil && in.Role != OfWorker || in.Role == OfPlace {
 			continue
 		}
 		ev.uses[in.place()] = append(ev.uses[in.place()], i)
@@ -159,7 +159,8 @@ func (ev *evaluation) asTyped(e *Estimate) {
 	e.Low, e.Value, e.High, e.Typed = b.Low, b.Value, b.High, b.Unit
 }
 
-// TotalMass returns the sum of the masses as written, exact and rounded once.
+// TotalMass returns the sum of the masses as written, exact and rounded once;
+// of several workers the lightest to the heaviest.
 func (j *Job) TotalMass() quantity.Band {
 	var sum quantity.Band
 	first := true
@@ -167,6 +168,9 @@ func (j *Job) TotalMass() quantity.Band {
 		in := &j.Inputs[i]
 		if in.Role != OfWorker {
 			continue
+		}
+		if in.Derived {
+			return in.Band
 		}
 		if first {
 			sum, first = in.Band, false

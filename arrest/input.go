@@ -47,6 +47,10 @@ type Input struct {
 	Source Source
 	Note   string
 
+	// Derived marks an input that was made of others, which stand beside it with
+	// Set nil: the lightest to the heaviest of several workers.
+	Derived bool
+
 	// Set writes an SI figure into a Case; nil where At does not use the input.
 	Set func(*Case, float64)
 }

@@ -38,6 +38,7 @@ type Scan struct {
 	tasks []task
 
 	both      bool // distance and time are both given
+	exact     bool // one point says it all
 	wantFloor bool
 	wantMass  bool
 
@@ -47,13 +48,21 @@ type Scan struct {
 
 // A task is one thing sought.
 type task struct {
-	of      func(*Case, *Point) float64
+	output  func(*Point) float64
+	measure func(*Case, *Point) float64 // in the place of output where not nil
 	bound   Bound
 	stopped bool // hangs on distance or time
 	floor   bool // has a turning point of its own (M-06)
 	mass    bool // the sum of the masses as written
 	middle  bool // every input it rests on has a middle figure
-	output  int  // index into outputs, or -1
+	number  int  // index into outputs, or -1
+}
+
+func (t *task) of(c *Case, p *Point) float64 {
+	if t.measure != nil {
+		return t.measure(c, p)
+	}
+	return t.output(p)
 }
 
 // NewScan prepares a Scan of j in which the inputs with the indexes moved are
@@ -84,13 +93,14 @@ func NewScan(j *Job, moved []int, sought []Sought) (*Scan, bool) {
 			s.free = append(s.free, in)
 		}
 	}
+	s.exact = !s.both && s.Exact()
 	return s, true
 }
 
 // task looks one sought thing up.
 func (s *Scan) task(want Sought) (task, bool) {
 	if want.Of != nil {
-		return task{of: want.Of, bound: Between, middle: s.middles(onInputs), output: -1}, true
+		return task{measure: want.Of, bound: Between, middle: s.middles(onInputs), number: -1}, true
 	}
 	for i := range outputs {
 		o := &outputs[i]
@@ -100,15 +110,14 @@ func (s *Scan) task(want Sought) (task, bool) {
 		if o.evidence == Shape && s.both {
 			return task{}, false
 		}
-		of := o.of
 		return task{
-			of:      func(_ *Case, p *Point) float64 { return of(p) },
+			output:  o.of,
 			bound:   o.bound,
 			stopped: o.rests&onStop != 0,
 			floor:   o.bound == AtLeast && s.both,
 			mass:    o.quantity == TotalMass,
 			middle:  s.middles(o.rests),
-			output:  i,
+			number:  i,
 		}, true
 	}
 	return task{}, false
@@ -148,6 +157,10 @@ func (s *Scan) At(x []float64, to []Ends) bool {
 			set(&s.hi, x[i])
 		}
 	}
+	if s.exact {
+		s.atOne(x, to)
+		return true
+	}
 	for i := range s.tasks {
 		to[i] = Ends{nan, nan, nan, nan}
 	}
@@ -171,6 +184,23 @@ func (s *Scan) At(x []float64, to []Ends) bool {
 	}
 	s.finish(x, to)
 	return true
+}
+
+// atOne is At for a job of single figures of which distance and time are not
+// both given: one point says it all.
+func (s *Scan) atOne(x []float64, to []Ends) {
+	At(&s.written, &s.middle)
+	for i := range s.tasks {
+		t, e := &s.tasks[i], &to[i]
+		y := t.of(&s.written, &s.middle)
+		*e = Ends{y, y, y, nan}
+		if t.bound == AtLeast {
+			e.High, e.Reach = nan, y
+		}
+	}
+	if s.wantMass {
+		s.sumMasses(x, to)
+	}
 }
 
 // impossible is Impossible for the scanned job.
@@ -235,7 +265,7 @@ func (s *Scan) overAll(x []float64, to []Ends) {
 	}
 	all, _ := overCorners(&s.job)
 	for i := range s.tasks {
-		if o := s.tasks[i].output; o >= 0 {
+		if o := s.tasks[i].number; o >= 0 {
 			to[i].Low, to[i].High = all.of[o].low.value, all.of[o].high.value
 		}
 	}

@@ -1,0 +1,96 @@
+package jobfile
+
+import (
+	"fmt"
+
+	"arrestcheck/arrest"
+	"arrestcheck/arrest/quantity"
+	"arrestcheck/limits"
+)
+
+// job reads everything of a job file but its limits.
+func (t *table) job(f *File) {
+	j := &f.Job
+	j.Example = t.boolean("example")
+	if s := t.section("document"); s != nil {
+		f.Document = s.document()
+	}
+	e := t.entries(j)
+	e.gravity(t)
+	for i, s := range t.sections("rated") {
+		e.rated(j, s, i)
+	}
+	for _, s := range t.sections("elsewhere") {
+		f.Elsewhere = append(f.Elsewhere, limits.Elsewhere{
+			Quantity: arrest.Quantity(s.choice("quantity")), Where: s.text("where")})
+	}
+	j.Inputs, j.Notes = e.inputs, e.notes
+	if !e.refused {
+		t.impossible(j)
+	}
+}
+
+func (t *table) document() Document {
+	return Document{
+		Title: t.text("title"), Site: t.text("site"), Reference: t.text("reference"),
+		Revision: t.text("revision"), Date: t.text("date"), Purpose: t.text("purpose"),
+		System: t.text("system"), Rescue: t.text("rescue"),
+		PreparedBy: t.text("prepared_by"), CheckedBy: t.text("checked_by"),
+	}
+}
+
+// entries reads who falls, how, and how it stops.
+func (t *table) entries(j *arrest.Job) *inputs {
+	j.Persons = 1
+	in := &inputs{point: &j.Point, inputs: make([]arrest.Input, 0, 8)}
+	if s := t.section("worker"); s != nil {
+		if n := s.integer("persons"); n > 0 {
+			j.Persons = n
+		}
+		in.persons = float64(j.Persons)
+		in.add("worker.mass", arrest.OfWorker, s.quantity("mass"), setMass)
+		in.add("worker.tools", arrest.OfWorker, s.quantity("tools"), setTools)
+	}
+	if s := t.section("fall"); s != nil {
+		in.add("fall.free_fall", arrest.OfFall, s.quantity("free_fall"), setFreeFall)
+		in.add("fall.initial_speed", arrest.OfFall, s.quantity("initial_speed"), setInitialSpeed)
+		in.refused = in.refused || !s.has("free_fall") && !s.has("initial_speed")
+	} else {
+		in.refused = true
+	}
+	if s := t.section("stop"); s != nil {
+		in.add("stop.distance", arrest.OfStop, s.quantity("distance"), setDistance)
+		in.add("stop.time", arrest.OfStop, s.quantity("time"), setTime)
+		j.Point.Pulse = pulseOf(s.choice("shape"))
+		in.add("stop.rise_fraction", arrest.OfStop, s.quantity("rise_fraction"), setRise)
+		s.beside()
+	}
+	return in
+}
+
+func pulseOf(word string) arrest.Pulse {
+	for _, p := range arrest.Pulses() {
+		if p.Name == word {
+			return p.Pulse
+		}
+	}
+	return arrest.NoPulse
+}
+
+// impossible refuses a distance and a time that no stop can have together.
+func (t *table) impossible(j *arrest.Job) {
+	reach, impossible := arrest.Impossible(j)
+	if !impossible {
+		return
+	}
+	unit := quantity.Length.SI()
+	for i := range j.Inputs {
+		if in := &j.Inputs[i]; in.Key == "stop.distance" {
+			unit = in.Band.Unit
+		}
+	}
+	most := quantity.Format(reach, unit, 5, quantity.Nearest)
+	t.page.fault("stop.distance", "stop.distance and stop.time", "", fmt.Sprintf(
+		"impossible together: in so short a time the body covers less than the distance, even without any pull; d < v t + g t^2/2 = %s", most),
+		"measure: both again; one of the two figures, or the free fall, is not of this stop")
+}

@@ -1,0 +1,97 @@
+package jobfile
+
+import (
+	"errors"
+	"fmt"
+	"slices"
+	"strings"
+
+	"github.com/BurntSushi/toml"
+)
+
+const (
+	exampleLine = `mass = { value = "92 kg ± 1 kg", source = "measured" }`
+	tomlHint    = `write: text and figures in double quotes, one key a line, as in ` + exampleLine
+)
+
+// syntax records what the decoder could not read. It stops at the first fault.
+func (pg *page) syntax(err error) {
+	var pe toml.ParseError
+	if !errors.As(err, &pe) {
+		pg.whole(0, "", "not read as TOML: "+firstLine(err.Error()), tomlHint)
+		return
+	}
+	line, text := pg.lineAt(pe.Position.Start)
+	reason, hint := pg.syntaxWords(pe.Message, text)
+	pg.whole(line, text, reason, hint)
+}
+
+// lineAt returns the line that holds a byte of the file, and what is written
+// on it. The decoder's own line is one too far where a heading is not closed.
+func (pg *page) lineAt(start int) (line int, text string) {
+	data := strings.TrimPrefix(string(pg.data), byteOrderMark)
+	start = min(max(start, 0), len(data))
+	line = 1 + strings.Count(data[:start], "\n")
+	text = data[1+strings.LastIndexByte(data[:start], '\n'):]
+	return line, strings.TrimSpace(firstLine(text))
+}
+
+// syntaxWords turns the decoder's message about a line into a reason and a
+// next action.
+func (pg *page) syntaxWords(message, line string) (reason, hint string) {
+	name, right, isPair := strings.Cut(line, "=")
+	name, right = strings.TrimSpace(name), strings.TrimSpace(right)
+	says := func(part string) bool { return strings.Contains(message, part) }
+	switch {
+	case says("already"):
+		return "this is written twice", "write: each key and each [section] once; " + pg.groups.repeated() + " may stand several times"
+	case says("control characters"), says("NULL"):
+		return "the line holds a control character, which does not show", "take out: the character, or type the line anew"
+	case says("invalid escape"):
+		return `in double quotes a \ begins an escape`, `write: \\ for one \, or the text in single quotes`
+	case says("cannot contain newlines"):
+		return "a quote is opened and not closed on the line", `write: ` + name + ` = "..." with both quotes`
+	case isPair && right == "":
+		return "nothing stands after the =", pg.example(name, "...") + ", or take the line out"
+	case isPair && !strings.ContainsAny(right[:1], `"'[{`):
+		right, _, _ = strings.Cut(right, " #")
+		return "text, and figures with their unit, stand in double quotes", pg.example(name, strings.Trim(right, `"' `))
+	case strings.HasPrefix(line, "["):
+		return "the heading of a section is not read: " + firstLine(message), "write: one of " + pg.groups.headings()
+	case !isPair:
+		return "a key is followed by = and its value: " + firstLine(message), tomlHint
+	}
+	return "not read as TOML: " + firstLine(message), tomlHint
+}
+
+// example returns a line put right: with the example of the key where that
+// stands without quotes, else with the text in quotes.
+func (pg *page) example(name, text string) string {
+	if in := pg.groups.find(name); len(in) > 0 {
+		if k := pg.groups[in[0]].named[name]; k.Kind == Integer || k.Kind == Boolean || k.Kind == Files || text == "..." {
+			return k.hint()
+		}
+	}
+	return fmt.Sprintf(`write: %s = "%s"`, name, text)
+}
+
+// headings lists the sections of a file.
+func (all groups) headings() string { return all.sections(Section, Sections) }
+
+// repeated lists the sections that may stand several times.
+func (all groups) repeated() string { return all.sections(Sections) }
+
+func (all groups) sections(kinds ...Kind) string {
+	var list []string
+	for _, k := range all[""].keys {
+		if slices.Contains(kinds, k.Kind) {
+			list = append(list, k.line())
+		}
+	}
+	return strings.Join(list, ", ")
+}
+
+func firstLine(s string) string {
+	s, _, _ = strings.Cut(s, "\n")
+	return s
+}

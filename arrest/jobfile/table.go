@@ -1,0 +1,363 @@
+package jobfile
+
+import (
+	"fmt"
+	"slices"
+	"strconv"
+	"strings"
+	"time"
+)
+
+// A table is one section, or one inline table, as decoded. Its methods take
+// the keys out and record what is wrong with them.
+type table struct {
+	page  *page
+	path  string // dotted key, "rated[2]"; "" at the top
+	group *group
+	keys  map[string]any
+
+	meant []string // keys that a misspelt one probably stands for: not missing too
+}
+
+// open begins with a section and records the keys that do not belong in it.
+func (pg *page) open(section, path string, keys map[string]any) *table {
+	t := &table{page: pg, path: path, group: pg.groups[section], keys: keys}
+	var strange []string
+	for name := range keys {
+		if _, known := t.group.named[name]; !known {
+			strange = append(strange, name)
+		}
+	}
+	slices.Sort(strange)
+	for _, name := range strange {
+		t.unknown(name)
+	}
+	return t
+}
+
+// key returns the dotted key of a name in the table.
+func (t *table) key(name string) string { return join(t.path, name) }
+
+// fault records a fault of a key that is written in the table.
+func (t *table) fault(name, text, reason, hint string) {
+	t.page.fault(t.key(name), t.key(name), text, reason, hint)
+}
+
+// has reports whether a key is written.
+func (t *table) has(name string) bool {
+	_, ok := t.keys[name]
+	return ok
+}
+
+// take returns the value of a key and its record; ok is false where the key is
+// not written, which is a fault where it is required.
+func (t *table) take(name string) (v any, k *Key, ok bool) {
+	k = t.group.named[name]
+	v, ok = t.keys[name]
+	if !ok && k.Required {
+		t.missing(k)
+	}
+	return v, k, ok
+}
+
+func (t *table) missing(k *Key) {
+	if slices.Contains(t.meant, k.Name) {
+		return
+	}
+	if k.Kind == Section {
+		t.page.fault("", "["+k.Name+"]", "", "the section is missing", t.page.groups.sectionHint(k))
+		return
+	}
+	t.page.fault(t.path, t.key(k.Name), "", "the key is missing: "+k.Help, k.hint())
+}
+
+// text returns words, empty where none are written.
+func (t *table) text(name string) string {
+	v, k, ok := t.take(name)
+	if !ok {
+		return ""
+	}
+	s, isText := v.(string)
+	if !isText {
+		t.wrongKind(k, v)
+	} else if k.Required && strings.TrimSpace(s) == "" {
+		t.fault(name, "", "nothing is written in it: "+k.Help, k.hint())
+	}
+	return s
+}
+
+// choice returns one word of the closed set, empty where none is written or it
+// is refused.
+func (t *table) choice(name string) string {
+	v, k, ok := t.take(name)
+	if !ok {
+		return ""
+	}
+	s, isText := v.(string)
+	switch {
+	case !isText:
+		t.wrongKind(k, v)
+	case slices.Contains(k.Choices, s):
+		return s
+	default:
+		t.unknownWord(k, s)
+	}
+	return ""
+}
+
+// unknownWord records a word that is not in the closed set of its key.
+func (t *table) unknownWord(k *Key, word string) {
+	hint := "write: one of " + listed(k.Choices)
+	if near, ok := nearest(word, k.Choices); ok {
+		hint = "write: " + k.Name + " = " + strconv.Quote(near)
+	} else if len(k.Choices) == 1 {
+		hint = k.hint()
+	}
+	t.fault(k.Name, word, "no such word here", hint)
+}
+
+// listed joins the words of a closed set, with line breaks where they are many.
+func listed(words []string) string {
+	var b strings.Builder
+	width := 0
+	for i, w := range words {
+		switch {
+		case i > 0 && width > 70:
+			b.WriteString(",\n       ")
+			width = 0
+		case i > 0:
+			b.WriteString(", ")
+		}
+		b.WriteString(strconv.Quote(w))
+		width += len(w) + 4
+	}
+	return b.String()
+}
+
+// boolean returns true or false, false where nothing is written.
+func (t *table) boolean(name string) bool {
+	v, k, ok := t.take(name)
+	if !ok {
+		return false
+	}
+	b, isBool := v.(bool)
+	if !isBool {
+		t.wrongKind(k, v)
+	}
+	return b
+}
+
+// integer returns a whole number, 0 where none is written or it is refused.
+func (t *table) integer(name string) int {
+	v, k, ok := t.take(name)
+	if !ok {
+		return 0
+	}
+	n, isInt := v.(int64)
+	switch {
+	case !isInt:
+		t.wrongKind(k, v)
+	case !k.Possible.holds(float64(n), float64(n)):
+		t.fault(name, strconv.FormatInt(n, 10),
+			fmt.Sprintf("a whole number from %g to %g is asked for", k.Possible.Low, k.Possible.High), k.hint())
+	default:
+		return int(n)
+	}
+	return 0
+}
+
+// section returns a [section]; nil where it is not written or refused.
+func (t *table) section(name string) *table {
+	v, k, ok := t.take(name)
+	if !ok {
+		return nil
+	}
+	keys, isTable := v.(map[string]any)
+	if !isTable {
+		t.wrongKind(k, v)
+		return nil
+	}
+	s := t.page.open(name, name, keys)
+	s.anyOf(k)
+	return s
+}
+
+// sections returns every [[section]] of a name.
+func (t *table) sections(name string) []*table {
+	v, k, ok := t.take(name)
+	if !ok {
+		return nil
+	}
+	list, isList := v.([]map[string]any)
+	if !isList {
+		t.wrongKind(k, v)
+		return nil
+	}
+	all := make([]*table, len(list))
+	for i, keys := range list {
+		all[i] = t.page.open(name, element(name, i), keys)
+		all[i].anyOf(k)
+	}
+	return all
+}
+
+// anyOf records that none of the keys is there of which the section needs one.
+func (t *table) anyOf(k *Key) {
+	if len(k.AnyOf) == 0 || slices.ContainsFunc(k.AnyOf, t.has) {
+		return
+	}
+	for _, name := range k.AnyOf {
+		if slices.Contains(t.meant, name) {
+			return
+		}
+	}
+	var right []string
+	for _, name := range k.AnyOf {
+		right = append(right, t.group.named[name].line())
+	}
+	reason := "at least one of these keys has to be there: " + strings.Join(k.AnyOf, ", ")
+	if t.has("shape") {
+		reason = "shape says how the force runs, not how far or how long; " + reason
+	}
+	t.page.fault(t.path, t.path, "", reason, "write: "+strings.Join(right, or))
+}
+
+// beside records keys that stand without their companion, and companions whose
+// word asks for a key that is not there.
+func (t *table) beside() {
+	for _, k := range t.group.keys {
+		if k.Beside.Name == "" {
+			continue
+		}
+		word, _ := t.keys[k.Beside.Name].(string)
+		there := t.has(k.Beside.Name) && (k.Beside.Choice == "" || word == k.Beside.Choice)
+		switch {
+		case t.has(k.Name) && !there:
+			t.alone(k)
+		case !t.has(k.Name) && there && k.Beside.Choice != "" && !slices.Contains(t.meant, k.Name):
+			t.fault(k.Beside.Name, word, "it asks for "+t.key(k.Name)+": "+k.Help, k.hint())
+		}
+	}
+}
+
+// alone records a key that stands without its companion.
+func (t *table) alone(k *Key) {
+	c := t.group.named[k.Beside.Name]
+	if slices.Contains(t.meant, c.Name) {
+		return
+	}
+	partner, right := t.key(c.Name), c.lines()
+	if k.Beside.Choice != "" {
+		right = c.Name + " = " + strconv.Quote(k.Beside.Choice)
+		partner = t.path + "." + right
+	}
+	t.fault(k.Name, "", "it stands only beside "+partner, "write: "+right+or+"take out "+t.key(k.Name))
+}
+
+// wrongKind records a value that is not of the kind of its key.
+func (t *table) wrongKind(k *Key, v any) {
+	text, found := t.written(k.Name, v)
+	reason := "this is " + found + "; " + k.asked() + " is asked for"
+	hint := k.hint()
+	switch {
+	case k.Kind == Sections && (found == "a section" || found == "a list"):
+		reason = "this may stand several times, each with a heading of its own"
+		hint = "write: [[" + k.Name + "]]"
+	case k.Kind == Section && found == "a list of sections":
+		reason = "this stands once in a file"
+	case found == "a date" && (k.Kind == Text || k.Kind == Choice):
+		reason = "a date is written as text, in double quotes"
+		hint = "write: " + k.Name + " = " + strconv.Quote(text)
+	case found == "a number" && (k.Kind == Text || k.Kind == Choice):
+		reason = "words are asked for, in double quotes"
+		if k.Kind == Text {
+			hint = "write: " + k.Name + " = " + strconv.Quote(text)
+		}
+	}
+	t.fault(k.Name, text, reason, hint)
+}
+
+// written returns a value as it is written, where that is short, and what it
+// is in words.
+func (t *table) written(name string, v any) (text, found string) {
+	if t.page.marks == nil {
+		t.page.marks = scan(t.page.data)
+	}
+	text = t.page.marks[t.key(name)].text
+	switch v := v.(type) {
+	case string:
+		return v, "text"
+	case bool:
+		return text, "true or false"
+	case int64, float64:
+		return text, "a number"
+	case time.Time:
+		return text, "a date"
+	case map[string]any:
+		return "", "a section"
+	case []map[string]any:
+		return "", "a list of sections"
+	}
+	return "", "a list"
+}
+
+// asked says in words what a key asks for.
+func (k *Key) asked() string {
+	switch k.Kind {
+	case Section, Sections:
+		return "a section"
+	case Files:
+		return "a list of file names in square brackets"
+	case Quantity:
+		return "text with a unit"
+	case Integer:
+		return "a whole number without quotes"
+	case Boolean:
+		return "true or false, without quotes,"
+	}
+	return "text in double quotes"
+}
+
+// line returns the key as it is typed with its example.
+func (k *Key) line() string {
+	switch k.Kind {
+	case Section:
+		return "[" + k.Name + "]"
+	case Sections:
+		return "[[" + k.Name + "]]"
+	}
+	return k.Name + " = " + k.Example
+}
+
+// or stands between two next actions.
+const or = "\n   or: "
+
+// lines returns the key as it is typed, with each word it can hold.
+func (k *Key) lines() string {
+	if k.Kind != Choice {
+		return k.line()
+	}
+	lines := make([]string, len(k.Choices))
+	for i, w := range k.Choices {
+		lines[i] = k.Name + " = " + strconv.Quote(w)
+	}
+	return strings.Join(lines, or)
+}
+
+// hint returns the next action for a key that is missing or wrong.
+func (k *Key) hint() string { return "write: " + k.line() }
+
+// sectionHint returns a section with all the keys it has to have.
+func (all groups) sectionHint(k *Key) string {
+	hint := k.hint()
+	g := all[k.Name]
+	for _, in := range g.keys {
+		if in.Required {
+			hint += "\n       " + in.line()
+		}
+	}
+	if len(k.AnyOf) > 0 {
+		hint += "\n       " + g.named[k.AnyOf[0]].line()
+	}
+	return hint
+}
