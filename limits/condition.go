@@ -28,7 +28,7 @@ func (r *row) conditions() tested {
 	}
 	if l.PersonsAtMost > 0 && r.res.Persons > l.PersonsAtMost {
 		t.fails = true
-		t.reasons = append(t.reasons, words(ConditionNotMet,
+		t.reasons = append(t.reasons, words(ConditionUnfulfilled,
 			"persons_at_most", strconv.Itoa(r.res.Persons), strconv.Itoa(l.PersonsAtMost)))
 	}
 	return t
@@ -52,7 +52,7 @@ func (r *row) test(t *tested, key string, q arrest.Quantity, most *quantity.Band
 		}
 		if low > most.Value {
 			t.fails = true
-			t.reasons = append(t.reasons, conditionReason(ConditionNotMet, key, q, most, low))
+			t.reasons = append(t.reasons, conditionReason(ConditionUnfulfilled, key, q, most, low))
 			return
 		}
 		if math.IsNaN(least) || low < least {

@@ -21,15 +21,15 @@ func TestConditionTable(t *testing.T) {
 		{"below", es(between(mass, 90, 130)), false, ""},
 		{"one step below", es(between(mass, 90, down(140))), false, ""},
 		{"equal", es(between(mass, 140, 140)), false, ""},
-		{"one step above", es(between(mass, up(140), up(140))), true, ConditionNotMet},
+		{"one step above", es(between(mass, up(140), up(140))), true, ConditionUnfulfilled},
 		{"up to one step above", es(between(mass, 140, up(140))), false, ConditionStraddles},
 		{"across", es(between(mass, 130, 150)), false, ConditionStraddles},
-		{"above", es(between(mass, 141, 150)), true, ConditionNotMet},
+		{"above", es(between(mass, 141, 150)), true, ConditionUnfulfilled},
 		{"floor below", es(floor(mass, 90, 100)), false, ConditionStraddles},
-		{"floor above", es(floor(mass, 141, 150)), true, ConditionNotMet},
+		{"floor above", es(floor(mass, 141, 150)), true, ConditionUnfulfilled},
 		{"ceiling", es(ceiling(mass, 140)), false, ""},
 		{"every estimate must hold", es(between(mass, 100, 130), by(arrest.Measured, between(mass, 130, 150))), false, ConditionStraddles},
-		{"one of two above", es(between(mass, 100, 130), by(arrest.Measured, between(mass, 141, 150))), true, ConditionNotMet},
+		{"one of two above", es(between(mass, 100, 130), by(arrest.Measured, between(mass, 141, 150))), true, ConditionUnfulfilled},
 		{"nothing entered", nil, true, NotComputed},
 		{"nothing but a shape", es(shape(mass, "spring", 100)), true, NotComputed},
 		{"nothing but a rating outside", es(outside(mass, "label A")), true, NotComputed},
@@ -93,11 +93,11 @@ func TestEachConditionIsTested(t *testing.T) {
 		reason []ReasonID
 		keys   []string
 	}{
-		{"mass", fs(mass), NotCompared, rs(ConditionNotMet, AlsoBeyond), []string{"total_mass_at_most"}},
+		{"mass", fs(mass), NotCompared, rs(ConditionUnfulfilled, AlsoBeyond), []string{"total_mass_at_most"}},
 		{"fall", fs(fall), Undecided, rs(ConditionStraddles, AlsoBeyond), []string{"free_fall_at_most"}},
-		{"persons", fs(one), NotCompared, rs(ConditionNotMet, AlsoBeyond), []string{"persons_at_most"}},
+		{"persons", fs(one), NotCompared, rs(ConditionUnfulfilled, AlsoBeyond), []string{"persons_at_most"}},
 		{"persons as many", fs(two), Exceeded, nil, nil},
-		{"all", fs(mass, fall, one), NotCompared, rs(ConditionNotMet, ConditionStraddles, ConditionNotMet, AlsoBeyond),
+		{"all", fs(mass, fall, one), NotCompared, rs(ConditionUnfulfilled, ConditionStraddles, ConditionUnfulfilled, AlsoBeyond),
 			[]string{"total_mass_at_most", "free_fall_at_most", "persons_at_most"}},
 	}
 	for _, c := range cases {

@@ -23,27 +23,27 @@ type ReasonID string
 // there a ceiling leaves the bad side open, and a floor short of the limit does
 // not show that the demand is.
 const (
-	OnlyFloor          ReasonID = "only_floor"          // floor: no upper figure is known (at_least: the floor is short of the limit)
-	OnlyCeiling        ReasonID = "only_ceiling"        // ceiling: beyond the limit, which does not show that the demand is (at_least: no lower figure is known)
-	Straddles          ReasonID = "straddles"           // least, greatest: the limit lies between
-	FloorReaches       ReasonID = "floor_reaches"       // reach of the floor over the entries is beyond the limit ("open" as text when infinite)
-	PairDiffers        ReasonID = "pair_differs"        // at_most as typed, also_printed as typed
-	AssumedShape       ReasonID = "assumed_shape"       // shape: conditional figures decide no row
-	OpenInput          ReasonID = "open_input"          // key, why (arrest.OpenReason as text)
-	OutsideRating      ReasonID = "outside_rating"      // document
-	Contradicted       ReasonID = "contradicted"        // evidence A, evidence B
-	SeveralPersons     ReasonID = "several_persons"     // number as text
-	ExampleValues      ReasonID = "example_values"      // none: the job's or the set's values are examples
-	NotChecked         ReasonID = "limit_not_checked"   // none: limit without checked_on
-	Superseded         ReasonID = "superseded"          // the date as text
-	IsProductTest      ReasonID = "product_test"        // none
-	ConditionNotMet    ReasonID = "condition_not_met"   // condition key, demand, condition as typed
-	ConditionStraddles ReasonID = "condition_straddles" // condition key, least, greatest, condition as typed
-	AlsoBeyond         ReasonID = "also_beyond"         // none: not compared, and also beyond the figure
-	NoAllowance        ReasonID = "no_allowance"        // none: a modelled figure without the user's allowance is not compared
-	DeviceExhausted    ReasonID = "exhausted_device"    // none: somewhere in the entries a travel is used up
-	BeyondModel        ReasonID = "beyond_model"        // none: a loading curve is left, or the stop is a blow on something rigid
-	NotComputed        ReasonID = "not_computed"        // none: nothing to compare; or the key of the condition that nothing was entered to test
+	OnlyFloor            ReasonID = "only_floor"            // floor: no upper figure is known (at_least: the floor is short of the limit)
+	OnlyCeiling          ReasonID = "only_ceiling"          // ceiling: beyond the limit, which does not show that the demand is (at_least: no lower figure is known)
+	Straddles            ReasonID = "straddles"             // least, greatest: the limit lies between
+	FloorReaches         ReasonID = "floor_reaches"         // reach of the floor over the entries is beyond the limit ("open" as text when infinite)
+	PairDiffers          ReasonID = "pair_differs"          // at_most as typed, also_printed as typed
+	AssumedShape         ReasonID = "assumed_shape"         // shape: conditional figures decide no row
+	OpenInput            ReasonID = "open_input"            // key, why (arrest.OpenReason as text)
+	OutsideRating        ReasonID = "outside_rating"        // document
+	Contradicted         ReasonID = "contradicted"          // evidence A, evidence B
+	SeveralPersons       ReasonID = "several_persons"       // number as text
+	ExampleValues        ReasonID = "example_values"        // none: the job's or the set's values are examples
+	NotChecked           ReasonID = "limit_not_checked"     // none: limit without checked_on
+	Superseded           ReasonID = "superseded"            // the date as text
+	IsProductTest        ReasonID = "product_test"          // none
+	ConditionUnfulfilled ReasonID = "condition_unfulfilled" // condition key, demand, condition as typed
+	ConditionStraddles   ReasonID = "condition_straddles"   // condition key, least, greatest, condition as typed
+	AlsoBeyond           ReasonID = "also_beyond"           // none: not compared, and also beyond the figure
+	NoAllowance          ReasonID = "no_allowance"          // none: a modelled figure without the user's allowance is not compared
+	DeviceExhausted      ReasonID = "exhausted_device"      // none: somewhere in the entries a travel is used up
+	BeyondModel          ReasonID = "beyond_model"          // none: a loading curve is left, or the stop is a blow on something rigid
+	NotComputed          ReasonID = "not_computed"          // none: nothing to compare; or the key of the condition that nothing was entered to test
 )
 
 // A Reason is an id with its arguments.

@@ -156,7 +156,7 @@ var reasonArguments = map[limits.ReasonID]int{
 	limits.OnlyFloor: 1, limits.OnlyCeiling: 1, limits.Straddles: 2, limits.FloorReaches: 1, limits.PairDiffers: 2,
 	limits.AssumedShape: 1, limits.OpenInput: 2, limits.OutsideRating: 1, limits.Contradicted: 2, limits.SeveralPersons: 1,
 	limits.ExampleValues: 0, limits.NotChecked: 0, limits.Superseded: 1, limits.IsProductTest: 0,
-	limits.ConditionNotMet: 3, limits.ConditionStraddles: 4, limits.AlsoBeyond: 0, limits.NotComputed: 0,
+	limits.ConditionUnfulfilled: 3, limits.ConditionStraddles: 4, limits.AlsoBeyond: 0, limits.NotComputed: 0,
 	limits.NoAllowance: 0, limits.DeviceExhausted: 0, limits.BeyondModel: 0,
 }
 

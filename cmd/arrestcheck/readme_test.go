@@ -1,0 +1,136 @@
+package main
+
+import (
+	"bytes"
+	"flag"
+	"os"
+	"path/filepath"
+	"regexp"
+	"strings"
+	"testing"
+)
+
+var update = flag.Bool("update", false, "write what the program prints now into the README")
+
+// The README's job and limit set are read from it and checked: what it shows
+// of the report must be what the program prints.
+func TestReadmeIsTrue(t *testing.T) {
+	readme := readText(t, "../../README.md")
+	toml, shown := blocks(readme, "toml"), blocks(readme, "text")
+	if len(toml) != 2 || len(shown) != 4 {
+		t.Fatalf("%d toml and %d text blocks, want 2 and 4", len(toml), len(shown))
+	}
+	dir := t.TempDir()
+	job := filepath.Join(dir, "job.toml")
+	writeText(t, job, toml[0])
+	writeText(t, filepath.Join(dir, "site-limits.toml"), toml[1])
+
+	code, stdout, stderr := try("check", job)
+	if code != int(exitExceeded) || stderr != "" {
+		t.Errorf("exit code %d, %s", code, stderr)
+	}
+	for i, want := range []string{
+		between(t, stdout, "\nLimits  ", "\n━"),
+		between(t, stdout, "\nLimits as entered", "\nPeaks\n"),
+	} {
+		if *update {
+			readme = strings.Replace(readme, shown[i], want, 1)
+		} else if shown[i] != want {
+			t.Errorf("excerpt %d is:\n%s\nthe report holds:\n%s", i+1, shown[i], want)
+		}
+	}
+	if *update {
+		writeText(t, "../../README.md", readme)
+	}
+	for line := range strings.Lines(shown[3]) {
+		if !strings.Contains(exitHelp, "  "+line) {
+			t.Errorf("the help does not hold this exit code:\n%s", line)
+		}
+	}
+}
+
+// between returns the lines of text from the one that begins with from to the
+// last one with letters before to.
+func between(t *testing.T, text, from, to string) string {
+	t.Helper()
+	_, rest, found := strings.Cut(text, from)
+	part, _, ended := strings.Cut(rest, to)
+	if !found || !ended {
+		t.Fatalf("nothing between %q and %q in:\n%s", from, to, text)
+	}
+	return strings.TrimLeft(from, "\n") + strings.TrimRight(part, "\n") + "\n"
+}
+
+// Every command and flag that the README lists exists, and every one that
+// exists is listed.
+func TestReadmeListsTheCommands(t *testing.T) {
+	list := blocks(readText(t, "../../README.md"), "text")[2]
+	_, help, _ := try("help")
+	for _, name := range regexp.MustCompile(`(?m)^  ([a-z]+)  `).FindAllStringSubmatch(help, -1) {
+		if name[1] != "help" && !strings.Contains(list, "\narrestcheck "+name[1]+" ") && !strings.HasPrefix(list, "arrestcheck "+name[1]+" ") {
+			t.Errorf("the list lacks the command %s", name[1])
+		}
+	}
+	_, help, _ = try("help", "check")
+	flags := regexp.MustCompile(`--([a-z]+)`)
+	for _, name := range flags.FindAllString(help, -1) {
+		if name != "--help" && !strings.Contains(list, name+" ") {
+			t.Errorf("the list lacks the flag %s", name)
+		}
+	}
+	for _, name := range flags.FindAllString(list, -1) {
+		if !strings.Contains(help, name+" ") {
+			t.Errorf("check has no flag %s", name)
+		}
+	}
+}
+
+// blocks returns the fenced blocks of one language.
+func blocks(markdown, language string) (all []string) {
+	fence := regexp.MustCompile("(?s)\n```" + language + "\n(.*?)\n```\n")
+	for _, b := range fence.FindAllStringSubmatch(markdown, -1) {
+		all = append(all, b[1]+"\n")
+	}
+	return all
+}
+
+// try runs the program in this process.
+func try(args ...string) (code int, stdout, stderr string) {
+	var out, remarks bytes.Buffer
+	code = run(args, strings.NewReader(""), &out, &remarks)
+	return code, out.String(), remarks.String()
+}
+
+func readText(t *testing.T, path string) string {
+	t.Helper()
+	data, err := os.ReadFile(path)
+	if err != nil {
+		t.Fatal(err)
+	}
+	return string(data)
+}
+
+func writeText(t *testing.T, path, text string) {
+	t.Helper()
+	if err := os.WriteFile(path, []byte(text), 0o644); err != nil {
+		t.Fatal(err)
+	}
+}
+
+// Every file and folder that DEVELOPERS.md names exists, save those it says
+// are to come.
+func TestDevelopersNamesWhatExists(t *testing.T) {
+	text := readText(t, "../../DEVELOPERS.md")
+	names := regexp.MustCompile("`([a-z_./-]*/[a-z_.-]+|[A-Z]+\\.md)`").FindAllStringSubmatch(text, -1)
+	if len(names) < 40 {
+		t.Errorf("only %d names found", len(names))
+	}
+	for _, name := range names {
+		if name[1] == "testdata/validation" {
+			continue
+		}
+		if _, err := os.Stat(filepath.Join("../..", name[1])); err != nil {
+			t.Error(err)
+		}
+	}
+}
