@@ -13,10 +13,11 @@ func At(c *Case, p *Point) {
 		loadAt(c, p)
 		return
 	}
-	m := c.Mass + c.Tools
+	m, lost := sum(c.Mass, c.Tools)
 	g := c.Gravity
-	v2 := float64(c.InitialSpeed*c.InitialSpeed) + float64(2*g*c.FreeFall)
-	v := math.Sqrt(v2)
+	fallen := 2 * g * c.FreeFall
+	square := fallen + math.FMA(c.InitialSpeed, c.InitialSpeed, math.FMA(2*g, c.FreeFall, -fallen))
+	v := math.Sqrt(square)
 	p.TotalMass = m
 	p.Weight = m * g
 	p.FreeFall = c.FreeFall
@@ -24,9 +25,9 @@ func At(c *Case, p *Point) {
 		p.FreeFall = c.FreeFall + float64(c.InitialSpeed*c.InitialSpeed)/(2*g)
 	}
 	p.Speed = v
-	p.Energy = m * v2 / 2
-	p.Momentum = m * v
-	stopAt(p, v2, g, c.Distance, c.Time)
+	p.Energy = math.FMA(m, square, lost*square) / 2
+	p.Momentum = math.FMA(m, v, lost*v)
+	stopAt(p, &stop{m, lost, square, v, g}, c.Distance, c.Time)
 	if c.Path != nil {
 		modelAt(c, p)
 	}
@@ -37,52 +38,79 @@ func At(c *Case, p *Point) {
 	assumedAt(p, c)
 }
 
-// stopAt fills in what follows from the stop: both means, their ratio and the
-// floor of the peak. p holds mass, weight and speed; v2 is the square of the
-// speed. d and t are 0 where not given.
-func stopAt(p *Point, v2, g, d, t float64) {
-	p.MeanOverDistance, p.MeanOverTime, p.ShapeRatio = nan, nan, nan
-	p.Impossible = false
-	brake := nan // least peak of the net deceleration
-	switch {
-	case d > 0 && t > 0:
-		vt := p.Speed * t
-		p.MeanOverDistance = p.Weight + p.TotalMass*v2/(2*d)
-		p.MeanOverTime = p.Weight + float64(p.TotalMass*(p.Speed/t))
-		p.ShapeRatio = vt / (2 * d)
-		brake = leastBrake(v2, p.Speed, g, d, t)
-		p.Impossible = math.IsInf(brake, 1)
-	case d > 0:
-		brake = v2 / (2 * d)
-		p.MeanOverDistance = p.Weight + float64(p.TotalMass*brake)
-	case t > 0:
-		brake = p.Speed / t
-		p.MeanOverTime = p.Weight + float64(p.TotalMass*brake)
-	}
-	p.FloorDeceleration = brake
-	p.FloorOverWeight = 1 + brake/g
-	p.Floor = p.Weight + float64(p.TotalMass*brake)
+// A stop is what the body brings to it: its mass (and what its sum lost to
+// rounding), the square of the speed, the speed; and gravity.
+type stop struct{ m, lost, square, v, g float64 }
+
+// sum is a+b and what it lost to rounding, exact (D. Knuth, The Art of Computer
+// Programming 2, 4.2.2).
+func sum(a, b float64) (s, lost float64) {
+	s = a + b
+	t := s - a
+	return s, (a - (s - t)) + (b - t)
 }
 
-// leastBrake returns the least peak of the net deceleration, m/s2, of any stop
-// from the speed v to rest over the distance d in the time t (M-06):
+// force returns m*n/x, N, rounded about once; inverse is 1/x. FMA is exact on
+// every machine, so that the digits are the same everywhere.
+func (s *stop) force(n, x, inverse float64) float64 {
+	p := s.m * n
+	q := p * inverse
+	return math.FMA(math.FMA(-q, x, p)+math.FMA(s.lost, n, math.FMA(s.m, n, -p)), inverse, q)
+}
+
+// stopAt fills in what follows from the stop: both means, their ratio and the
+// floor of the peak. d and t are 0 where not given.
 //
-//	t >= 2*d/v    a = v^2/(2*d)
-//	t <  2*d/v    fall on freely for tau = (2*d - v*t)/(v + g*t), then brake evenly:
-//	              a = (v + g*tau)/(t - tau) = (v^2 + 2*g*d)/(2*v*t + g*t^2 - 2*d)
+//	F_d = W + m*v^2/(2*d) = m*(v^2 + 2*g*d)/(2*d)
+//	F_t = W + m*v/t       = m*(v + g*t)/t
+//	r   = v*t/(2*d)
+func stopAt(p *Point, s *stop, d, t float64) {
+	p.MeanOverDistance, p.MeanOverTime, p.ShapeRatio = nan, nan, nan
+	p.Impossible = false
+	brake, floor := nan, nan
+	if d > 0 {
+		inverse := 1 / (2 * d)
+		p.MeanOverDistance = s.force(math.FMA(2*s.g, d, s.square), 2*d, inverse)
+		brake, floor = s.square*inverse, p.MeanOverDistance
+		if t > 0 {
+			vt := s.v * t
+			r := vt * inverse
+			p.ShapeRatio = math.FMA(math.FMA(-r, 2*d, vt)+math.FMA(s.v, t, -vt), inverse, r)
+		}
+	}
+	if t > 0 {
+		inverse := 1 / t
+		p.MeanOverTime = s.force(math.FMA(s.g, t, s.v), t, inverse)
+		if !(d > 0) {
+			brake, floor = s.v*inverse, p.MeanOverTime
+		} else if !(p.ShapeRatio >= 1) {
+			brake, floor = s.shorter(d, t)
+			p.Impossible = math.IsInf(floor, 1)
+		}
+	}
+	p.FloorDeceleration = brake
+	p.FloorOverWeight = floor / p.Weight
+	p.Floor = floor
+}
+
+// shorter returns the least peak of any stop from the speed v to rest over the
+// distance d in a time t below 2*d/v (M-06): the net deceleration, m/s2, and
+// the force, N. The body falls on freely for tau, then brakes evenly:
+//
+//	tau = (2*d - v*t)/(v + g*t)
+//	a   = (v + g*tau)/(t - tau) = (v^2 + 2*g*d)/(2*v*t + g*t^2 - 2*d)
+//	F   = m*(g + a)
 //
 // +Inf when no force that only pulls can do it (M-05). Near that edge the
-// result hangs on the last digits of t and d.
-func leastBrake(v2, v, g, d, t float64) float64 {
-	vt := v * t
-	if vt >= 2*d {
-		return v2 / (2 * d)
-	}
-	room := 2*vt + float64(g*t*t) - 2*d
+// result hangs on the last digits of v, t and d.
+func (s *stop) shorter(d, t float64) (brake, floor float64) {
+	room := math.FMA(2*s.v, t, math.FMA(s.g*t, t, -2*d))
 	if room <= 0 {
-		return math.Inf(1)
+		return math.Inf(1), math.Inf(1)
 	}
-	return (v2 + 2*float64(g*d)) / room
+	inverse := 1 / room
+	n := math.FMA(2*s.g, d, s.square)
+	return n * inverse, s.force(math.FMA(s.g, room, n), room, inverse)
 }
 
 // reachable returns the distance, m, that the body would cover in the time t

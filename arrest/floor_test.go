@@ -150,7 +150,7 @@ func searchedFloor(j *Job) float64 {
 		overSpeed := golden(a.Speed, b.Speed, func(v float64) float64 {
 			return golden(lo.Distance, hi.Distance, func(d float64) float64 {
 				p := Point{TotalMass: a.TotalMass, Weight: a.Weight, Speed: v}
-				stopAt(&p, v*v, lo.Gravity, d, t)
+				stopAt(&p, &stop{m: a.TotalMass, square: v * v, v: v, g: lo.Gravity}, d, t)
 				return p.Floor
 			})
 		})
