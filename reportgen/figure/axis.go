@@ -23,6 +23,11 @@ func (a Axis) label() string {
 	return a.Name + ", " + a.Unit
 }
 
+// told returns what the scale of the axis is, in words.
+func (a Axis) told(ticks []Tick) string {
+	return a.label() + ": " + ticks[0].Label + " .. " + ticks[len(ticks)-1].Label
+}
+
 // greatest bounds the figures along an axis. Beyond it no physical amount in a
 // sensible unit lies.
 const greatest = 1e15
@@ -122,9 +127,9 @@ func (s scale) at(v float64) float64 {
 
 // holds reports whether v is on the axis. Its ends are.
 func (s scale) holds(v float64) bool {
-	slack := 1e-9 * (s.axis.High - s.axis.Low)
+	slack := float64(1e-9 * (s.axis.High - s.axis.Low))
 	if s.axis.Log {
-		slack = 1e-9 * s.axis.Low
+		slack = float64(1e-9 * s.axis.Low)
 	}
 	return v >= s.axis.Low-slack && v <= s.axis.High+slack
 }

@@ -38,8 +38,8 @@ func (b *Bars) Scene() (*Scene, error) {
 	if err != nil {
 		return nil, err
 	}
-	above := float64(len(b.Uprights))*Normal.pitch() + 3
-	s := NewScene(b.Title, above+float64(len(b.Rows))*barPitch+2+frameBottom)
+	above := grain(float64(len(b.Uprights))*Normal.pitch()) + 3
+	s := NewScene(b.Title, above+float64(float64(len(b.Rows))*barPitch)+2+frameBottom)
 	s.Desc, s.Stamp, s.Statement, s.Notes = b.Desc, b.Stamp, b.Statement, slices.Clone(b.Notes)
 	f := b.frame(s, axis, above)
 	f.barAxis()
@@ -47,7 +47,7 @@ func (b *Bars) Scene() (*Scene, error) {
 		f.barUpright(&b.Uprights[i], i)
 	}
 	for i := range b.Rows {
-		f.bar(&b.Rows[i], above+(float64(i)+0.5)*barPitch)
+		f.bar(&b.Rows[i], above+float64((float64(i)+0.5)*barPitch))
 	}
 	return s, nil
 }
@@ -65,21 +65,51 @@ func (b *Bars) values() []float64 {
 
 // frame leaves room for the names at the left and for the figures at both ends.
 func (b *Bars) frame(s *Scene, axis Axis, top float64) *frame {
-	name, low, high := 0.0, 0.0, 0.0
-	for _, r := range b.Rows {
-		name = max(name, min(RoomFor(r.Name), widestRow))
-		lowText, highText := r.FromText, r.ToText
-		if r.From > r.To {
-			lowText, highText = highText, lowText
-		}
-		low, high = max(low, RoomFor(lowText)), max(high, RoomFor(highText))
-	}
-	side := 3 * cellWidth
 	f := &frame{scene: s}
-	f.box = Box{min(name+low+side+2*cellWidth, s.Width/2), top, s.Width - min(high+side, s.Width/4), s.Height - frameBottom}
-	f.x = scale{axis, f.box.Left, f.box.Right}
-	f.ticks[0] = xTicks(axis, f.box.Right-f.box.Left)
+	left, right := b.sides(axis)
+	f.box = Box{left, top, right, s.Height - frameBottom}
+	f.x = scale{axis, left, right}
+	f.ticks[0] = xTicks(axis, right-left)
 	return f
+}
+
+// sides returns where the axis begins and ends: as far out as the names and
+// the figures at the ends of the bars let it. Each end limits the other, so
+// they are found in turns.
+func (b *Bars) sides(axis Axis) (left, right float64) {
+	const side = 3 * cellWidth
+	names := side
+	for _, r := range b.Rows {
+		names = max(names, min(RoomFor(r.Name), widestRow)+side)
+	}
+	left, right = names, FullWidth-side
+	for range 4 {
+		for _, r := range b.Rows {
+			low, high := r.ends()
+			if p := (scale{axis, 0, 1}).at(axis.kept(low.at)); p < 0.99 {
+				left = max(left, (names+RoomFor(low.text)+side-float64(p*right))/(1-p))
+			}
+			if p := (scale{axis, 0, 1}).at(axis.kept(high.at)); p > 0.01 {
+				right = min(right, (FullWidth-RoomFor(high.text)-side-float64(left*(1-p)))/p)
+			}
+		}
+	}
+	return min(left, FullWidth*0.6), max(right, FullWidth*0.75)
+}
+
+// A barEnd is one end of a bar with its figure.
+type barEnd struct {
+	at   float64
+	text string
+}
+
+// ends returns the ends of r, the lower first.
+func (r *Bar) ends() (low, high barEnd) {
+	low, high = barEnd{r.From, r.FromText}, barEnd{r.To, r.ToText}
+	if r.From > r.To {
+		low, high = high, low
+	}
+	return low, high
 }
 
 // barAxis draws the axis below the bars.
@@ -89,8 +119,10 @@ func (f *frame) barAxis() {
 	for _, t := range f.ticks[0] {
 		at := Point{f.x.at(t.Value), b.Bottom}
 		f.scene.Line(at, Point{at.X, at.Y + tickLength}, Pen{})
-		f.scene.Text(Text{Text: t.Label, Rank: RankScale, Spots: []Spot{{At: at, Anchor: Middle, Lift: Below, Gap: figureGap}}})
 	}
+	f.scene.scaled(f.ticks[0], f.x.axis.told(f.ticks[0]), func(t Tick) Spot {
+		return Spot{At: Point{f.x.at(t.Value), b.Bottom}, Anchor: Middle, Lift: Below, Gap: figureGap}
+	})
 	spot := Spot{At: Point{b.Right, b.Bottom}, Anchor: End, Lift: Below, Gap: figureGap, Lines: 1}
 	far := spot
 	far.At.X = f.scene.Width
@@ -103,7 +135,7 @@ func (f *frame) barUpright(l *Level, i int) {
 		f.outside(l.Label)
 		return
 	}
-	x, y := f.x.at(l.At), (float64(i)+0.5)*Normal.pitch()
+	x, y := f.x.at(l.At), grain((float64(i)+0.5)*Normal.pitch())
 	f.scene.Line(Point{x, y - Normal.pitch()/2}, Point{x, f.box.Bottom}, l.Pen)
 	f.scene.Text(Text{Text: l.Label, Rank: RankLimit, Spots: []Spot{
 		{At: Point{x, y}, Anchor: Start}, {At: Point{x, y}, Anchor: End},
@@ -115,24 +147,20 @@ func (f *frame) bar(r *Bar, y float64) {
 	f.scene.Text(Text{Text: r.Name, Rank: RankAxis, Spots: []Spot{
 		{At: Point{-sideGap, y}, Anchor: Start}, {At: Point{0, y}, Anchor: Start, Lift: Above},
 	}})
-	low, high := min(r.From, r.To), max(r.From, r.To)
-	if !finite(low) || !finite(high) || high < f.x.axis.Low || low > f.x.axis.High {
+	low, high := r.ends()
+	if !finite(low.at) || !finite(high.at) || high.at < f.x.axis.Low || low.at > f.x.axis.High {
 		f.outside(strings.Join([]string{r.Name, r.FromText, r.ToText}, "; "))
 		return
 	}
-	lowText, highText := r.FromText, r.ToText
-	if r.From > r.To {
-		lowText, highText = highText, lowText
-	}
-	from, to := f.barEnd(low, y), f.barEnd(high, y)
+	from, to := f.barTick(low.at, y), f.barTick(high.at, y)
 	f.scene.Line(Point{from, y}, Point{to, y}, Pen{Weight: Heavy})
-	f.scene.Text(Text{Text: lowText, Rank: RankPoint, Spots: barSpots(from, y, End)})
-	f.scene.Text(Text{Text: highText, Rank: RankPoint, Spots: barSpots(to, y, Start)})
+	f.scene.Text(Text{Text: low.text, Rank: RankPoint, Spots: barSpots(from, y, End)})
+	f.scene.Text(Text{Text: high.text, Rank: RankPoint, Spots: barSpots(to, y, Start)})
 }
 
-// barEnd draws the end of a bar, which is open where the axis ends before it,
-// and returns where it is.
-func (f *frame) barEnd(v, y float64) float64 {
+// barTick draws the tick at the end of a bar, which has none where the axis
+// ends before it, and returns where the end is.
+func (f *frame) barTick(v, y float64) float64 {
 	x := f.x.at(f.x.axis.kept(v))
 	if f.x.holds(v) {
 		f.scene.Line(Point{x, y}, Point{x, y - barTick}, Pen{})

@@ -41,7 +41,7 @@ func (c *canvas) at(column, row int) *cell { return &c.cells[row*c.columns+colum
 func (c *canvas) hatch(h hatch) {
 	for row := range c.rows {
 		for column := range c.columns {
-			middle := Point{(float64(column) + 0.5) * c.across, (float64(row) + 0.5) * c.down}
+			middle := Point{float64((float64(column) + 0.5) * c.across), float64((float64(row) + 0.5) * c.down)}
 			if inside(h.region, middle) {
 				c.at(column, row).hatching = hatchGlyph(h.kind, column, row)
 			}

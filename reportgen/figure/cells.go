@@ -87,8 +87,8 @@ func (g grid) cell(p Point) (column, row int) {
 func (g grid) box(t *Text, text string, at Spot) Box {
 	column, row, n := g.start(t, text, at)
 	return Box{
-		float64(column) * g.across, float64(row) * g.down,
-		float64(column+n) * g.across, float64(row+1) * g.down,
+		float64(float64(column) * g.across), float64(float64(row) * g.down),
+		float64(float64(column+n) * g.across), float64(float64(row+1) * g.down),
 	}
 }
 

@@ -78,7 +78,7 @@ func (c *Chain) side() float64 {
 // chainDatum writes the name of the datum on the side where no dimensions are.
 func (s *Scene) chainDatum(c *Chain) {
 	at := c.point(c.Datum, -c.side()*chainTick)
-	spots := around8(at, 0.4)
+	spots := Around(at, 0.4)
 	if !c.Level {
 		anchor := End
 		if c.Far {

@@ -18,10 +18,10 @@
 // Texts are placed by the writer, each by its own measure: at the first of
 // their spots where they overlap no other text. A text that finds no room is
 // replaced by a key, "(a)", and listed below the figure; none is left out
-// without a word, except single figures of a scale, whose neighbours say the
-// same. Boxes returns where the texts of the SVG stand.
+// without a word, except figures of a scale of which two others stand. Boxes
+// returns where the texts of the SVG stand.
 //
-// The package takes plain numbers and strings, knows nothing of falls and has
-// no sentence of its own. It is pure: the same scene gives the same bytes on
-// every machine.
+// The package takes plain numbers and strings and knows nothing of falls. Its
+// only words of its own say why a text stands below the figure, and what a
+// scale is. It is pure: the same scene gives the same bytes on every machine.
 package figure

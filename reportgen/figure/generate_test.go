@@ -133,7 +133,7 @@ func anyDrawing(t *rapid.T) (*Scene, []string) {
 		s.Arrow(at, Point{anyValue(t, "x") * 15, anyValue(t, "y") * 12}, anyPen(t))
 		if at.finite() {
 			text := anyText(t, "point")
-			s.Text(Text{Text: text, Rank: RankPoint, Turned: rapid.Bool().Draw(t, "turned"), Spots: around8(at, symbolRadius)})
+			s.Text(Text{Text: text, Rank: RankPoint, Turned: rapid.Bool().Draw(t, "turned"), Spots: Around(at, symbolRadius)})
 			labels = append(labels, text)
 		}
 	}

@@ -52,7 +52,7 @@ func hatchOne(area Box, region []Point, d direction, spacing float64) [][2]Point
 	first, last := math.Ceil(max(low, least)/spacing), math.Floor(min(high, most)/spacing)
 	var lines [][2]Point
 	for i := first; i <= last; i++ {
-		at := i * spacing
+		at := float64(i * spacing)
 		cuts := crossings(region, d, at)
 		for k := 0; k+1 < len(cuts); k += 2 {
 			if a, b, some := clip(area, place(d, cuts[k], at), place(d, cuts[k+1], at)); some {

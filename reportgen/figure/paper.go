@@ -26,7 +26,7 @@ func (paper) box(t *Text, text string, at Spot) Box {
 	case End:
 		x -= width
 	}
-	local := Box{x, y - ascent*em, x + width, y + descent*em}
+	local := Box{x, y - float64(ascent*em), x + width, y + float64(descent*em)}
 	if t.Turned { // what is right goes up, what is below goes right
 		local = Box{local.Top, -local.Right, local.Bottom, -local.Left}
 	}
@@ -38,7 +38,7 @@ func (paper) box(t *Text, text string, at Spot) Box {
 // spot, mm to the right and downwards as the text is read.
 func (at Spot) offset(size Size) (x, y float64) {
 	em := size.em()
-	lines := float64(at.Lines) * size.pitch()
+	lines := float64(float64(at.Lines) * size.pitch())
 	switch at.Lift {
 	case Above:
 		return 0, -(at.Gap + liftGap + float64(descent*em) + lines)
@@ -52,7 +52,7 @@ func (at Spot) offset(size Size) (x, y float64) {
 	case End:
 		side = -side
 	}
-	return side, middle * em
+	return side, float64(middle * em)
 }
 
 // baseline returns the point of the drawing where the anchor of p stands.
@@ -136,8 +136,8 @@ func (h *sheet) paragraph(text string, size Size, mid bool, y float64) float64 {
 		}
 		h.lines = append(h.lines, sheetLine{
 			text: line, size: size, mid: mid,
-			at:  Point{x, grain(y + ascent*em)},
-			box: Box{grain(left), grain(y), grain(left + width), grain(y + (ascent+descent)*em)},
+			at:  Point{x, grain(y + float64(ascent*em))},
+			box: Box{grain(left), grain(y), grain(left + width), grain(y + float64((ascent+descent)*em))},
 		})
 		y = grain(y + size.pitch())
 	}

@@ -8,6 +8,14 @@ type Pen struct {
 	Dash   Dash
 }
 
+// The pens of all figures, so that one kind of line looks the same in each.
+var (
+	CurvePen = Pen{Heavy, Solid}       // a curve
+	LimitPen = Pen{Medium, LongDashes} // a limit
+	MeanPen  = Pen{Medium, ChainLine}  // a mean, and other figures worked out
+	HelpPen  = Pen{Thin, Dots}         // a line that leads the eye
+)
+
 // Weight is the width of a line.
 type Weight uint8
 

@@ -63,13 +63,14 @@ func (s *Scene) place(m measure) placing {
 	for _, t := range order {
 		p.text(t)
 	}
+	p.scales()
 	return p.placing
 }
 
 // text places one text, or a key in its place.
 func (p *placer) text(t *Text) {
 	text := p.measure.clean(t.Text)
-	if text == "" || p.upTo(onThinLines, t, text) || t.Rank == RankScale {
+	if text == "" || p.upTo(onThinLines, t, text) || t.scale > 0 {
 		return
 	}
 	key := "(" + letters(p.keys) + ")"
@@ -79,6 +80,20 @@ func (p *placer) text(t *Text) {
 		return
 	}
 	p.listed = append(p.listed, text+noRoom)
+}
+
+// scales lists the scales of which fewer than two figures have room. Any two
+// say what the others are, so that the rest may be left out.
+func (p *placer) scales() {
+	count := make([]int, len(p.scene.scales)+1)
+	for i := range p.placed {
+		count[p.placed[i].scale]++
+	}
+	for i, told := range p.scene.scales {
+		if count[i+1] < 2 {
+			p.listed = append(p.listed, p.measure.clean(told)+noRoom)
+		}
+	}
 }
 
 // What stands behind a text that is listed because it is nowhere in the drawing.

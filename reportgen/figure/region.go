@@ -61,7 +61,7 @@ func regionSpots(corners []Point) []Spot {
 		spots = append(spots, Spot{At: in.at, Anchor: Middle})
 	}
 	if len(spots) == 0 { // too thin for the grid: its key may stand at a corner
-		spots = around8(corners[0], 0)
+		spots = Around(corners[0], 0)
 	}
 	return spots
 }

@@ -52,10 +52,10 @@ func sweepPlot(log bool) *Plot {
 		Notes:     []string{"A mean over the distance is a floor, not what the body feels."},
 		X:         Axis{Name: "stopping distance", Unit: "m", Log: log},
 		Y:         Axis{Name: "mean force over the distance", Unit: "kN", Log: log},
-		Curves:    []Curve{{X: x, Y: y, Label: "at least", Pen: Pen{Weight: Heavy}}},
+		Curves:    []Curve{{X: x, Y: y, Label: "at least", Pen: CurvePen}},
 		Levels: []Level{
-			{At: 6, Label: "limit mean-a: at most 6 kN", Pen: Pen{Medium, LongDashes}},
-			{At: 4, Label: "limit mean-b: at most 4 kN", Pen: Pen{Medium, LongDashes}},
+			{At: 6, Label: "limit mean-a: at most 6 kN", Pen: LimitPen},
+			{At: 4, Label: "limit mean-b: at most 4 kN", Pen: LimitPen},
 		},
 		Points: []Marked{
 			{X: 0.351679, Y: 6, Label: "0.3516 m", Symbol: Open},
@@ -84,13 +84,13 @@ func forcePlot() *Plot {
 		Statement: statement,
 		X:         Axis{Name: "time from the first pull", Unit: "s"},
 		Y:         Axis{Name: "force on the body", Unit: "kN"},
-		Curves:    []Curve{{X: x, Y: y, Label: "as modelled", Pen: Pen{Weight: Heavy}}},
+		Curves:    []Curve{{X: x, Y: y, Label: "as modelled", Pen: CurvePen}},
 		Levels: []Level{
-			{At: 8, Label: "limit peak-on-body: at most 8 kN (as modelled, without allowance)", Pen: Pen{Medium, LongDashes}},
-			{At: 2.63, From: 0, To: 0.36, Label: "mean over the distance 2.63 kN", Pen: Pen{Medium, ChainLine}},
+			{At: 8, Label: "limit peak-on-body: at most 8 kN (as modelled, without allowance)", Pen: LimitPen},
+			{At: 2.63, From: 0, To: 0.36, Label: "mean over the distance 2.63 kN", Pen: MeanPen},
 			{At: 2.96, From: 0, To: 0.36, Label: "mean over the time 2.96 kN", Pen: Pen{Medium, Dashes}},
 		},
-		Uprights: []Level{{At: 0.36, Label: "first rest, 0.36 s", Pen: Pen{Thin, Dots}}},
+		Uprights: []Level{{At: 0.36, Label: "first rest, 0.36 s", Pen: HelpPen}},
 		Points:   []Marked{{X: 0.1364, Y: 5.6 * math.Sin(math.Pi*0.1364/0.36) * (1 + 0.3*math.Sin(18*0.1364)), Label: "peak as modelled 6.19 kN", Symbol: Open}},
 	}
 }
@@ -115,8 +115,8 @@ func envelopePlot() *Plot {
 		X:         Axis{Name: "stopping distance", Unit: "m", Low: 0, High: 1.2},
 		Y:         Axis{Name: "free fall", Unit: "m", Low: 0, High: 4},
 		Curves: []Curve{
-			{X: lightX, Y: lightY, Label: "90 kg", Pen: Pen{Weight: Heavy}},
-			{X: heavyX, Y: heavyY, Label: "110 kg", Pen: Pen{Weight: Heavy}},
+			{X: lightX, Y: lightY, Label: "90 kg", Pen: CurvePen},
+			{X: heavyX, Y: heavyY, Label: "110 kg", Pen: CurvePen},
 		},
 		Points: []Marked{{X: 1.07, Y: 1.8, Label: "this job", Symbol: Filled}, {X: 0.62, Y: 1.8, Label: "with 0.62 m", Symbol: Cross}},
 	}
@@ -154,8 +154,8 @@ func sensitivityBars() *Bars {
 			{"worker.tools", 2.63, 2.63, "", "no change"},
 		},
 		Uprights: []Level{
-			{At: 2.63, Label: "as entered 2.63 kN", Pen: Pen{Thin, Dots}},
-			{At: 3.0, Label: "limit: at most 3 kN", Pen: Pen{Medium, LongDashes}},
+			{At: 2.63, Label: "as entered 2.63 kN", Pen: HelpPen},
+			{At: 3.0, Label: "limit: at most 3 kN", Pen: LimitPen},
 		},
 	}
 }
@@ -191,15 +191,11 @@ func elevation(t testing.TB) *Scene {
 	ground(-2.2, 2, floor)
 	s.Line(v.At(-0.5, 0), v.At(-0.5, -0.5), Pen{Weight: Medium})
 	s.Outline([]Point{v.At(0.9, floor), v.At(1.9, floor), v.At(1.9, floor+0.8), v.At(0.9, floor+0.8)}, Pen{Weight: Medium})
-	point := func(text string, at Point, symbol Symbol) {
-		s.Mark(at, symbol)
-		s.Text(Text{Text: text, Rank: RankPoint, Spots: around8(at, symbolRadius)})
-	}
 	anchor := v.At(0, 3)
-	point("anchor", anchor, Cross)
-	point("D-ring at the start", v.At(offset, start), Open)
-	point("taut", v.At(offset, taut), Open)
-	point("at rest", v.At(0, rest), Filled)
+	s.Named(anchor, Cross, "anchor")
+	s.Named(v.At(offset, start), Open, "D-ring at the start")
+	s.Named(v.At(offset, taut), Open, "taut")
+	s.Named(v.At(0, rest), Filled, "at rest")
 	s.Line(anchor, v.At(offset, start), Pen{Dash: Dashes})
 	s.Line(anchor, v.At(offset, taut), Pen{Weight: Medium})
 	s.Line(anchor, v.At(0, rest), Pen{Dash: ChainLine})

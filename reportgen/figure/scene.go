@@ -21,6 +21,7 @@ type Scene struct {
 	hatches []hatch
 	marks   []mark
 	texts   []Text
+	scales  []string // what stands below if fewer than two figures of one have room
 }
 
 // PageWidth is the width of a whole figure, mm: with the margins that browsers
@@ -35,7 +36,7 @@ const FullWidth = PageWidth - 2*margin
 
 // MaxHeight is the greatest height of a whole figure that prints on one sheet
 // of A4 or Letter, mm.
-const MaxHeight = 240.0
+const MaxHeight = 235.0
 
 // NewScene returns an empty scene of FullWidth and the given height, mm.
 func NewScene(title string, height float64) *Scene {
@@ -120,6 +121,12 @@ func (s *Scene) Mark(at Point, kind Symbol) {
 	}
 }
 
+// Named adds a mark with its name beside it.
+func (s *Scene) Named(at Point, kind Symbol, name string) {
+	s.Mark(at, kind)
+	s.Text(Text{Text: name, Rank: RankPoint, Spots: Around(at, symbolRadius)})
+}
+
 // Text adds a text. It panics if t has no spot.
 func (s *Scene) Text(t Text) {
 	if len(t.Spots) == 0 {
@@ -134,6 +141,15 @@ func (s *Scene) Text(t Text) {
 	}
 	t.Spots = spots
 	s.texts = append(s.texts, t)
+}
+
+// scaled adds the figures of a scale, each at its spot. told says what the
+// scale is, for the case that not two of them have room.
+func (s *Scene) scaled(ticks []Tick, told string, spot func(Tick) Spot) {
+	s.scales = append(s.scales, told)
+	for _, t := range ticks {
+		s.Text(Text{Text: t.Label, Rank: RankScale, Spots: []Spot{spot(t)}, scale: len(s.scales)})
+	}
 }
 
 // note adds a line below the drawing.

@@ -142,13 +142,15 @@ func TestKeys(t *testing.T) {
 	s.Text(Text{Text: long + "one", Rank: RankNote, Spots: spot(40)})
 	s.Text(Text{Text: long + "two", Rank: RankNote, Spots: spot(80)})
 	s.Text(Text{Text: "three", Rank: RankNote, Spots: spot(80)})
-	s.Text(Text{Text: "0.5", Rank: RankScale, Spots: spot(163.5)})
+	s.Text(Text{Text: "0.5", Rank: RankScale, Spots: spot(163.5), scale: 1})
+	s.Text(Text{Text: "0.0", Rank: RankScale, Spots: spot(120), scale: 1})
+	s.scales = []string{"time, s: 0.0 .. 0.5"}
 	got := s.place(paper{})
-	want := []string{"(a) " + clean(long+"one"), "(b) " + clean(long+"two"), "three (no room in the drawing)"}
+	want := []string{"(a) " + clean(long+"one"), "(b) " + clean(long+"two"), "three (no room in the drawing)", "time, s: 0.0 .. 0.5 (no room in the drawing)"}
 	if strings.Join(got.listed, "|") != strings.Join(want, "|") {
 		t.Errorf("listed: %q, not %q", got.listed, want)
 	}
-	if len(got.placed) != 2 || got.placed[0].text != "(a)" || got.placed[1].text != "(b)" {
+	if len(got.placed) != 3 || got.placed[0].text != "0.0" || got.placed[1].text != "(a)" || got.placed[2].text != "(b)" {
 		t.Errorf("placed: %v", got.placed)
 	}
 }

@@ -48,10 +48,18 @@ type svgWriter struct {
 
 func (w *svgWriter) raw(text string) { w.out.WriteString(text) }
 
-// number writes x in hundredths of a millimetre, 12.5. It is rounded by way of
-// the micrometre, so that the last bits of a processor decide no tie.
+// number writes x mm as a whole number of hundredths of a millimetre, the unit
+// of the SVG: with larger units browsers would round the sizes of fonts. It is
+// rounded by way of the micrometre, so that the last bits of a processor decide
+// no tie.
 func (w *svgWriter) number(x float64) {
-	w.out.Write(strconv.AppendFloat(w.out.AvailableBuffer(), math.Round(grain(x)*100)/100+0, 'f', -1, 64))
+	hundredths := math.Round(math.Round(reached(x)*1000) / 10)
+	w.out.Write(strconv.AppendInt(w.out.AvailableBuffer(), int64(hundredths), 10))
+}
+
+// millimetres writes a length that is not in units of the SVG.
+func (w *svgWriter) millimetres(x float64) {
+	w.raw(strconv.FormatFloat(grain(x), 'f', -1, 64) + "mm")
 }
 
 // attribute writes one with a number.
@@ -76,10 +84,10 @@ func (w *svgWriter) element(name, text string) {
 
 func (w *svgWriter) open(s *Scene, h *sheet) {
 	w.raw(`<svg xmlns="http://www.w3.org/2000/svg" width="`)
-	w.number(h.width)
-	w.raw(`mm" height="`)
-	w.number(h.height)
-	w.raw(`mm" viewBox="0 0 `)
+	w.millimetres(h.width)
+	w.raw(`" height="`)
+	w.millimetres(h.height)
+	w.raw(`" viewBox="0 0 `)
 	w.number(h.width)
 	w.raw(" ")
 	w.number(h.height)
@@ -104,7 +112,7 @@ func (w *svgWriter) shift(to Point) {
 // drawing writes all that is not text.
 func (w *svgWriter) drawing(s *Scene) {
 	if len(s.hatches) > 0 {
-		w.raw(`<g fill="none" stroke="black" stroke-width="0.12">` + "\n")
+		w.raw(`<g fill="none" stroke="black" stroke-width="12">` + "\n")
 		for _, h := range s.hatches {
 			w.hatch(s.area(), h)
 		}
@@ -162,7 +170,7 @@ func (w *svgWriter) mark(m mark) {
 		w.raw(`<path d="`)
 		w.path([]Point{{m.at.X - r, m.at.Y - r}, {m.at.X + r, m.at.Y + r}})
 		w.path([]Point{{m.at.X - r, m.at.Y + r}, {m.at.X + r, m.at.Y - r}})
-		w.raw(`" stroke="black" stroke-width="0.35"/>` + "\n")
+		w.raw(`" stroke="black" stroke-width="35"/>` + "\n")
 		return
 	}
 	w.raw("<circle")
@@ -173,7 +181,7 @@ func (w *svgWriter) mark(m mark) {
 	if m.kind == Open {
 		fill = "white"
 	}
-	w.raw(` fill="` + fill + `" stroke="black" stroke-width="0.3"/>` + "\n")
+	w.raw(` fill="` + fill + `" stroke="black" stroke-width="30"/>` + "\n")
 }
 
 // texts writes the texts of the drawing. What lies beneath a text is covered.
@@ -239,12 +247,12 @@ func (w *svgWriter) frame(h *sheet) {
 		w.attribute("y", h.stamp.Top)
 		w.attribute("width", h.stamp.Right-h.stamp.Left)
 		w.attribute("height", h.stamp.Bottom-h.stamp.Top)
-		w.raw(` fill="none" stroke="black" stroke-width="0.5"/>` + "\n")
+		w.raw(` fill="none" stroke="black" stroke-width="50"/>` + "\n")
 	}
 	if h.rule > 0 {
 		w.raw(`<path d="`)
 		w.path([]Point{{margin, h.rule}, {h.width - margin, h.rule}})
-		w.raw(`" stroke="black" stroke-width="0.18"/>` + "\n")
+		w.raw(`" stroke="black" stroke-width="18"/>` + "\n")
 	}
 	for _, l := range h.lines {
 		anchor := "start"

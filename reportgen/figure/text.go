@@ -15,13 +15,15 @@ type Text struct {
 
 	// Inside, if not nil, is a region that the text must stand in.
 	Inside []Point
+
+	scale int // which scale it is a figure of, from 1; 0 is none
 }
 
 // Rank is the importance of a text.
 type Rank uint8
 
 const (
-	RankScale  Rank = iota // a figure of a scale: left out where there is no room
+	RankScale  Rank = iota // a figure of a scale
 	RankAxis               // the name of an axis, of a datum, a dimension
 	RankLimit              // what a line of comparison is
 	RankRegion             // the word for a region
