@@ -55,10 +55,20 @@ func TestQuotient(t *testing.T) {
 		if got := quotient(num, den); got != want {
 			t.Fatalf("%d / %d = %v, want %v", num, den, got, want)
 		}
+		if num > math.MaxInt64 || den > math.MaxInt64 {
+			return
+		}
+		x := exact{num: int64(num), den: int64(den)}
+		if got := x.float(); got != want {
+			t.Fatalf("%d / %d = %v, want %v", num, den, got, want)
+		}
+		if got := x.minus().float(); got != -want {
+			t.Fatalf("-%d / %d = %v, want %v", num, den, got, -want)
+		}
 	}
 	const limit = 1 << 53
-	for _, num := range []uint64{1, 2, 3, limit - 1, limit, limit + 1, limit + 2, limit + 3, 1<<54 + 2, 1<<54 + 6, 1<<63 + 1<<10, 1<<63 + 1<<10 + 1, 1<<63 + 1<<10 - 1, 1<<63 - 1, 1 << 63, math.MaxUint64} {
-		for _, den := range []uint64{1, 2, 3, 7, 10, limit, limit + 1, 1e18, 1<<63 - 1, 1 << 63, math.MaxUint64} {
+	for _, num := range []uint64{1, 2, 3, 11, 45359237, limit/3 + 7, limit - 1, limit, limit + 1, limit + 2, limit + 3, 1<<54 + 2, 1<<54 + 6, 1<<63 + 1<<10, 1<<63 + 1<<10 + 1, 1<<63 + 1<<10 - 1, 1<<63 - 1, 1 << 63, math.MaxUint64} {
+		for _, den := range []uint64{1, 2, 3, 7, 10, limit, limit + 1, limit + 3, 3*limit + 1, 5*limit + 7, 1e18, 1<<63 - 1, 1 << 63, math.MaxUint64} {
 			check(t, num, den)
 		}
 	}

@@ -55,6 +55,8 @@ func TestParse(t *testing.T) {
 		{Length, "6 ft 11 127/128 in", 2.1334015625, 2.1334015625, 2.1334015625, Untold, "ft"},
 		{Length, "4 1/2 in", 0.1143, 0.1143, 0.1143, Untold, "in"},
 		{Length, "1/2 in", 0.0127, 0.0127, 0.0127, Untold, "in"},
+		{Length, "1/128 in", 0.0001984375, 0.0001984375, 0.0001984375, Untold, "in"},
+		{Length, "6 ft 11.999 in", 2.1335746, 2.1335746, 2.1335746, Untold, "ft"},
 		{Length, "1/3 ft", 0.1016, 0.1016, 0.1016, Untold, "ft"},
 		{Length, "6 1/2 ft", 1.9812, 1.9812, 1.9812, Untold, "ft"},
 		{Length, "-6 ft 4 in", -1.9304, -1.9304, -1.9304, Untold, "ft"},
@@ -96,6 +98,25 @@ func TestParse(t *testing.T) {
 		}
 		if b.Low == 0 && math.Signbit(b.Low) {
 			t.Errorf("Parse(%v, %q) gives -0", c.dimension, c.text)
+		}
+	}
+}
+
+// A text of 120 bytes is read, one of 121 is not, whatever it says.
+func TestLongestText(t *testing.T) {
+	text := "100 kg" + strings.Repeat(" ", longest-len("100 kg"))
+	if b, err := Parse(Mass, text); err != nil || b.Value != 100 {
+		t.Errorf("%d bytes: %v, %v", len(text), b.Value, err)
+	}
+	if b, err := Parse(Mass, text+" "); err == nil {
+		t.Errorf("%d bytes: %v", len(text)+1, b.Value)
+	}
+	tiny := "0." + strings.Repeat("0", longest-len("0.5 g ± 1 %")) + "5 g ± 1 %"
+	huge := strings.Repeat("9", longest-len(" kip ± 99 %")) + " kip ± 99 %"
+	for _, b := range []Band{must(t, Mass, tiny[:2]+tiny[4:]), must(t, Force, huge)} {
+		inOrder(t, b)
+		if !(0 < b.Low && b.Low < b.Value && b.Value < b.High) {
+			t.Errorf("%q: %v, %v, %v", b.Text, b.Low, b.Value, b.High)
 		}
 	}
 }

@@ -49,6 +49,7 @@ func TestFormat(t *testing.T) {
 		{0.1 + 0.2, "m", 12, Up, "0.300000000000 m"},
 		{2.6000000000000005, "m", 2, Up, "2.6 m"},
 		{2.5999999999999996, "m", 2, Down, "2.6 m"},
+		{2.59999999999949, "m", 2, Down, "2.6 m"}, // snapped to 2.60000000000 first
 		{0.25, "%", 3, Nearest, "25.0 %"},
 		{1.0483, "1", 3, Up, "1.05"},
 		{math.Pi / 6, "deg", 3, Nearest, "30.0 deg"},
@@ -101,6 +102,9 @@ func TestRoundingDirections(t *testing.T) {
 		}
 		if x != 0 {
 			step := stepAt(snapped, digits)
+			if below.Cmp(step) >= 0 || above.Cmp(step) >= 0 {
+				t.Fatalf("%v: down to %v, up to %v", x, down.FloatString(20), up.FloatString(20))
+			}
 			if width := new(big.Rat).Sub(up, down); width.Sign() != 0 && width.Cmp(step) != 0 {
 				t.Fatalf("%v: %v apart, want %v", x, width, step)
 			}

@@ -72,11 +72,9 @@ func meant(d Dimension, word string) string {
 	if u, ok := LookUp(word); ok && u.row().typed() {
 		return word
 	}
-	for e := Mass; e <= Ratio; e++ {
-		for _, s := range spellings {
-			if find(e, s.symbol) != nil && s.has(word, false) {
-				return s.symbol
-			}
+	for _, s := range spellings {
+		if s.has(word, false) {
+			return s.symbol
 		}
 	}
 	for _, u := range Units() {

@@ -168,7 +168,7 @@ func (p *parser) badFraction(top, bottom exact, start int) *fault {
 		return &fault{reason: "fractions are read down to 1/128; write a decimal"}
 	}
 	f := &fault{reason: "a fraction stays below one"}
-	if before := p.text[:start]; before == "" || !isDigit(before[len(before)-1]) && before[len(before)-1] != ' ' {
+	if before := strings.TrimRight(p.text[:start], " "); before == "" || !isDigit(before[len(before)-1]) {
 		f.better = []string{p.replaced(start, p.at, mixedNumber(top.num, bottom.num))}
 	}
 	return f

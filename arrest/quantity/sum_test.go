@@ -112,6 +112,13 @@ func TestSumOfOtherBands(t *testing.T) {
 	if sum := Sum(open, changed); sum.Low != 10.5 || !math.IsNaN(sum.Value) || !math.IsInf(sum.High, 1) {
 		t.Errorf("sum with an open end: %+v", sum)
 	}
+	if sum := Sum(changed, open); sum.Low != 10.5 || !math.IsNaN(sum.Value) || !math.IsInf(sum.High, 1) {
+		t.Errorf("sum with an open end: %+v", sum)
+	}
+	tenth := Band{Low: 0.1, Value: 0.1, High: 0.1, Unit: kg, Text: "by hand"}
+	if sum := Sum(tenth, must(t, Mass, "0.2 kg")); sum.Value != 0.3 {
+		t.Errorf("float64(0.1) + 2/10 = %v, want it rounded once", sum.Value)
+	}
 }
 
 func TestSumText(t *testing.T) {
