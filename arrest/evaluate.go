@@ -32,7 +32,6 @@ func Evaluate(j *Job) Result {
 	}
 	ev.contradictions()
 	ev.runs()
-	ev.runs()
 	ev.warn(partImpossible)
 	return ev.res
 }

@@ -14,8 +14,8 @@ type Ends struct{ Low, Value, High, Reach float64 }
 
 // A Sought names what a Scan works out: the estimate of a quantity by an
 // evidence, or, where Of is not nil, a function of the case and of what At
-// says about it. Of must be monotone in every input, so that its ends lie at
-// corners; its NaN counts as not known.
+// says about it but for the run of a connector path. Of must be monotone in
+// every input, so that its ends lie at corners; its NaN counts as not known.
 type Sought struct {
 	Quantity Quantity
 	Evidence Evidence
@@ -24,8 +24,8 @@ type Sought struct {
 
 // A Scan works out chosen estimates of one job again and again while some of
 // its inputs are moved to single figures and the others keep their bands. Its
-// figures are those of Evaluate, to the last bit, on the job with these inputs
-// replaced by Band of the single figures.
+// figures are those of Evaluate, to the last bit, on the job with the bands of
+// these inputs replaced (see Single).
 //
 // A Scan works on its own copy of the job and allocates nothing once it is
 // made, but where distance and time are both given over bands of which a part
@@ -67,8 +67,8 @@ func (t *task) of(c *Case, p *Point) float64 {
 
 // NewScan prepares a Scan of j in which the inputs with the indexes moved are
 // replaced; each must be one that At uses (Input.Set is not nil). It reports
-// false if something sought is no closed form of a fall or asks for more than
-// corners: then Evaluate is the way.
+// false if something sought asks for more than corners, as a connector path
+// over bands does, or is no output of a fall: then Evaluate is the way.
 func NewScan(j *Job, moved []int, sought []Sought) (*Scan, bool) {
 	if j.Moving() {
 		return nil, false
@@ -76,6 +76,18 @@ func NewScan(j *Job, moved []int, sought []Sought) (*Scan, bool) {
 	s := &Scan{job: *j, moved: slices.Clone(moved)}
 	s.job.Inputs = slices.Clone(j.Inputs)
 	s.both = j.Point.Distance > 0 && j.Point.Time > 0
+	for i := range s.job.Inputs {
+		in := &s.job.Inputs[i]
+		if in.Set != nil && in.Band.High > in.Band.Low && !slices.Contains(moved, i) {
+			s.free = append(s.free, in)
+		}
+	}
+	if !slices.ContainsFunc(sought, func(w Sought) bool { return w.Of == nil }) {
+		s.job.Point.Path = nil
+	}
+	if s.job.Point.Path != nil && len(s.free) > 0 {
+		return nil, false
+	}
 	for _, want := range sought {
 		t, ok := s.task(want)
 		if !ok {
@@ -86,13 +98,7 @@ func NewScan(j *Job, moved []int, sought []Sought) (*Scan, bool) {
 		s.tasks = append(s.tasks, t)
 	}
 	s.lo, s.hi = ends(&s.job)
-	s.written = j.Point
-	for i := range s.job.Inputs {
-		in := &s.job.Inputs[i]
-		if in.Set != nil && in.Band.High > in.Band.Low && !slices.Contains(moved, i) {
-			s.free = append(s.free, in)
-		}
-	}
+	s.written = s.job.Point
 	s.exact = !s.both && s.Exact()
 	return s, true
 }
@@ -127,7 +133,7 @@ func (s *Scan) task(want Sought) (task, bool) {
 func (s *Scan) middles(r rests) bool {
 	for i := range s.job.Inputs {
 		in := &s.job.Inputs[i]
-		if in.Set == nil || in.Role == OfPlace || r>>in.place()&1 == 0 {
+		if in.Set == nil && in.Role != OfWorker || in.Role == OfPlace || r>>in.place()&1 == 0 {
 			continue
 		}
 		if !in.HasValue() && !slices.Contains(s.moved, i) {

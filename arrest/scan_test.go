@@ -164,6 +164,32 @@ func TestScanAllocatesNothing(t *testing.T) {
 	}
 }
 
+// One point says it all of a connector path without bands; with bands its ends
+// may lie between the corners, which a scan does not look for.
+func TestScanOfAPath(t *testing.T) {
+	sought := []Sought{{Quantity: PeakForce, Evidence: Modelled}, {Quantity: AbsorberTravel, Evidence: Modelled}, {Quantity: FallSpeed, Evidence: Given}}
+	j := onPath(t, figures{mass: "100 kg", fall: "1.8 m"}.job(t), FromLabel, ropePart, absorber("4 kN", "0.45 m"))
+	k := 2 // the free fall
+	s, ok := NewScan(j, []int{k}, sought)
+	if !ok {
+		t.Fatal("not scanned")
+	}
+	to := make([]Ends, len(sought))
+	for _, x := range []float64{0.5, 1.2, 2.5, 4} {
+		s.At([]float64{x}, to)
+		for i := range sought {
+			same(t, moveTo(j, k, x), sought[i], to[i])
+		}
+	}
+	j = onPath(t, figures{mass: "100 kg", fall: "1.8 m"}.job(t), FromLabel, ropePart, absorber("3 kN .. 8 kN", "0.45 m"))
+	if _, ok := NewScan(j, []int{k}, sought); ok {
+		t.Error("a path over bands is scanned")
+	}
+	if _, ok := NewScan(j, []int{k}, []Sought{{Of: func(c *Case, p *Point) float64 { return p.Speed }}}); !ok {
+		t.Error("a function of the fall does not need the path")
+	}
+}
+
 func TestScanSaysItsBounds(t *testing.T) {
 	j := figures{mass: "100 kg", fall: "1.8 m", distance: "1 m"}.job(t)
 	s, _ := NewScan(j, []int{3}, []Sought{{Quantity: PeakForce, Evidence: Given}, {Quantity: FallSpeed, Evidence: Given}})
