@@ -149,8 +149,8 @@ func searchedFloor(j *Job) float64 {
 	for _, t := range [...]float64{lo.Time, (lo.Time + hi.Time) / 2, hi.Time} {
 		overSpeed := golden(a.Speed, b.Speed, func(v float64) float64 {
 			return golden(lo.Distance, hi.Distance, func(d float64) float64 {
-				p := Point{TotalMass: a.TotalMass, Weight: a.Weight, Speed: v}
-				stopAt(&p, &stop{m: a.TotalMass, square: v * v, v: v, g: lo.Gravity}, d, t)
+				p := Point{TotalMass: a.TotalMass, Weight: a.Weight, Speed: v, Energy: a.TotalMass * v * v / 2, Momentum: a.TotalMass * v}
+				stopAt(&p, lo.Gravity, d, t)
 				return p.Floor
 			})
 		})

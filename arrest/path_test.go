@@ -1,6 +1,7 @@
 package arrest
 
 import (
+	"errors"
 	"fmt"
 	"math"
 	"testing"
@@ -171,4 +172,23 @@ func TestSeriesStaysNearThePeakTolerance(t *testing.T) {
 		}
 	}
 	near(t, "peak of the series", peak, 4296.7, 1e-3)
+}
+
+// A part that cannot be is named, and a path that can be is not refused.
+func TestCheckNamesThePart(t *testing.T) {
+	good := onPath(t, fall100(t), FromLabel, ropePart, absorber("4 kN", "0.40 m"))
+	if err := good.Point.Path.Check(&good.Point); err != nil {
+		t.Error(err)
+	}
+	bad := onPath(t, fall100(t), FromLabel, ropePart, absorber("4 kN", "0.40 m"))
+	bad.Point.Path.Parts[1].Name = "tear-out pack"
+	bad.Point.Figures[3] = 0 // the travel of the absorber
+	err := bad.Point.Path.Check(&bad.Point)
+	var part *PartError
+	if !errors.As(err, &part) || part.Part != 2 || err.Error() != "part 2 (tear-out pack): a plateau needs a travel above zero" {
+		t.Errorf("%v", err)
+	}
+	if err := (&PathPlan{}).Check(&bad.Point); err == nil || errors.As(err, &part) {
+		t.Errorf("no part at all: %v", err)
+	}
 }

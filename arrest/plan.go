@@ -1,6 +1,11 @@
 package arrest
 
-import "arrestcheck/arrest/connector"
+import (
+	"errors"
+	"fmt"
+
+	"arrestcheck/arrest/connector"
+)
 
 // MaxPathFigures is the greatest number of figures of one connector path.
 const MaxPathFigures = 24
@@ -51,6 +56,36 @@ func (pl *PathPlan) fill(c *Case, parts []connector.Part) []connector.Part {
 		parts = append(parts, pl.Parts[i].at(c))
 	}
 	return parts
+}
+
+// A PartError says why a part of a path cannot be what its figures make of it.
+type PartError struct {
+	Part int    // from 1
+	Name string // of the PlannedPart
+	Err  error  // never nil
+}
+
+func (e *PartError) Error() string { return fmt.Sprintf("part %d (%s): %v", e.Part, e.Name, e.Err) }
+
+func (e *PartError) Unwrap() error { return e.Err }
+
+// Check reports what keeps the figures of c from making a path: nil where At
+// can work the path out, a *PartError where one part cannot be, another error
+// where the parts cannot be a path together. It looks at one point; over bands
+// it holds for the points between only as far as the reader of the file sees to
+// it that no figure changes its meaning there.
+func (pl *PathPlan) Check(c *Case) error {
+	var path connector.Path
+	parts := pl.fill(c, nil)
+	for i := range parts {
+		if err := path.Set(parts[i]); err != nil {
+			if cause := errors.Unwrap(err); cause != nil {
+				err = cause
+			}
+			return &PartError{i + 1, pl.Parts[i].Name, err}
+		}
+	}
+	return path.Set(parts...)
 }
 
 func (pp *PlannedPart) at(c *Case) connector.Part {

@@ -39,7 +39,7 @@ func (ev *evaluation) assumedShape() {
 			ev.spans.take(&p, ev.spans.add(c), shapes)
 		}
 	}
-	ev.written.Assumed = Assumed{nan, nan, nan, nan, nan, nan}
+	ev.written.Assumed = noShape
 }
 
 func withoutTime(c Case) Case     { c.Time = 0; return c }
