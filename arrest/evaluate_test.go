@@ -165,6 +165,9 @@ func TestOpenInputs(t *testing.T) {
 		{OfPlace, NoSource, "1 kg", Settled},
 	} {
 		in := Input{Role: c.role, Source: c.source, Band: band(c.text)}
+		if over := (&Input{Role: c.role, Source: c.source, Band: in.Band, Overridden: true}); over.Open() != OpenNoSource {
+			t.Errorf("%v: a figure of the command line is settled", c.role)
+		}
 		if got := in.Open(); got != c.want {
 			t.Errorf("%v %q %q: %q, want %q", c.role, c.source, c.text, got, c.want)
 		}

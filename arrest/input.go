@@ -51,6 +51,10 @@ type Input struct {
 	// Set nil: the lightest to the heaviest of several workers.
 	Derived bool
 
+	// Overridden marks a figure that was put in on the command line: nobody
+	// has given a source for it, whatever the file says.
+	Overridden bool
+
 	// Set writes an SI figure into a Case; nil where At does not use the input.
 	Set func(*Case, float64)
 }
@@ -70,6 +74,8 @@ const (
 // a ± that may be 0). An exact zero with a source needs no tolerance.
 func (in *Input) Open() OpenReason {
 	switch {
+	case in.Overridden:
+		return OpenNoSource
 	case in.Role == OfDocument || in.Role == OfPlace:
 		return Settled
 	case in.Source == NoSource:

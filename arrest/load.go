@@ -136,28 +136,47 @@ func throughZero(j *Job, s *spans) {
 // the vector of the least components: never above the true least. Directions
 // are given up where a component may have either sign.
 func widenMagnitudes(s *spans) {
-	for _, v := range [...]struct{ magnitude, x, direction int }{
-		{indexOf(Impulse, Given), indexOf(ImpulseX, Given), indexOf(ImpulseDirection, Given)},
-		{indexOf(StoppingForce, Given), indexOf(StoppingForceX, Given), indexOf(StoppingForceDirection, Given)},
-	} {
+	change, force := componentEnds(s)
+	for _, v := range [...]struct {
+		ends      [3][2]float64
+		magnitude Quantity
+		direction Quantity
+	}{{change, Impulse, ImpulseDirection}, {force, StoppingForce, StoppingForceDirection}} {
 		var least [3]float64
 		oneSign := true
-		for i := range least {
-			c := &s.of[v.x+i]
-			if !c.known() {
-				continue
-			}
-			least[i] = max(c.low.value, -c.high.value, 0)
-			oneSign = oneSign && (c.low.value >= 0 || c.high.value <= 0)
+		for i, e := range v.ends {
+			least[i] = max(e[0], -e[1], 0)
+			oneSign = oneSign && (e[0] >= 0 || e[1] <= 0)
 		}
-		if m := &s.of[v.magnitude]; m.known() {
+		if m := &s.of[indexOf(v.magnitude, Given)]; m.known() {
 			m.low.value = min(m.low.value, norm(least))
 		}
 		if !oneSign {
-			s.of[v.direction].forget()
+			s.of[indexOf(v.direction, Given)].forget()
 		}
 	}
 	lowerMeans(s)
+}
+
+// componentEnds returns the least and greatest of each component of the impulse
+// and of the mean force over all corners, where they lie: each is monotone in
+// every input. The force is NaN without a time.
+func componentEnds(s *spans) (change, force [3][2]float64) {
+	var p Point
+	for n := range s.corners() {
+		c := s.corner(n)
+		At(&c, &p)
+		for i := range change {
+			if n == 0 {
+				change[i] = [2]float64{p.Load.Change[i], p.Load.Change[i]}
+				force[i] = [2]float64{p.Load.Force[i], p.Load.Force[i]}
+				continue
+			}
+			change[i][0], change[i][1] = min(change[i][0], p.Load.Change[i]), max(change[i][1], p.Load.Change[i])
+			force[i][0], force[i][1] = min(force[i][0], p.Load.Force[i]), max(force[i][1], p.Load.Force[i])
+		}
+	}
+	return change, force
 }
 
 // lowerMeans lowers what is made of the magnitudes with them.

@@ -77,6 +77,23 @@ func TestMovingLoad(t *testing.T) {
 	}
 }
 
+// One component: exact entries leave no spread, and a band keeps its low end.
+func TestOneComponentKeepsItsLowEnd(t *testing.T) {
+	res := Evaluate(loadJobs(t)["bumper"])
+	if e := find(t, &res, Impulse, Given); e.Low != e.High || !quantity.Close(e.Low, 990, 1e-15) {
+		t.Errorf("impulse %g .. %g, want 900*1.1", e.Low, e.High)
+	}
+	res = Evaluate(loadFigures{mass: "900 kg", before: []string{"1.0 m/s .. 1.2 m/s"}, after: []string{"0 m/s"}, time: "0.3 s"}.job(t))
+	for _, q := range []Quantity{StoppingForce, PeakForce} {
+		if e := find(t, &res, q, Given); !quantity.Close(e.Low, 900*1.0/0.3, 1e-15) {
+			t.Errorf("%s from %g, want 3000", q, e.Low)
+		}
+	}
+	if e := find(t, &res, MeanDeceleration, Given); !quantity.Close(e.Low, 1/0.3, 1e-15) {
+		t.Errorf("deceleration from %g", e.Low)
+	}
+}
+
 func randomLoad(r *rand.Rand) Case {
 	c := Case{Gravity: StandardGravity}
 	l := &c.Load

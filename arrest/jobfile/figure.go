@@ -3,6 +3,8 @@ package jobfile
 import (
 	"errors"
 	"math"
+	"slices"
+	"strconv"
 	"strings"
 
 	"arrestcheck/arrest"
@@ -17,6 +19,31 @@ type entry struct {
 	src   arrest.Source
 	note  string
 	given bool
+	set   bool // by an Override: it has no source, whatever stands around it
+}
+
+// A spot is where a figure is typed: its dotted key, and the name left of the
+// =, empty in a list.
+type spot struct{ key, name string }
+
+// write is the next action that puts figures in the spot.
+func (at spot) write(figures ...string) string {
+	left, end := at.name+" = ", ""
+	if at.name == "" {
+		left, end = "", " in its place"
+	}
+	for i, f := range figures {
+		figures[i] = left + strconv.Quote(f)
+	}
+	return "write: " + strings.Join(figures, " or ") + end
+}
+
+// hint is the next action with the example of the key.
+func (at spot) hint(k *Key) string {
+	if at.name != "" && at.name == k.Name || !strings.HasPrefix(k.Example, `"`) {
+		return k.hint()
+	}
+	return at.write(strings.Trim(k.Example, `"`))
 }
 
 // quantity returns the figure of a key.
@@ -28,59 +55,73 @@ func (t *table) figure(name string, d quantity.Dimension) entry {
 	if !ok {
 		return entry{}
 	}
-	e := entry{key: k}
+	return t.page.figure(spot{t.key(name), name}, k, d, v)
+}
+
+// figure reads a figure, text or a table of value, source and note.
+func (pg *page) figure(at spot, k *Key, d quantity.Dimension, v any) entry {
+	e := entry{key: k, set: pg.isSet(at.key)}
 	switch v := v.(type) {
 	case string:
-		e.band, e.given = t.parse(k, d, k.Name, v)
-	case map[string]any:
-		if !k.Sourced {
-			t.fault(name, "", "this figure stands as text alone, without a table around it", k.hint())
+		if k.MustSource && !e.set {
+			pg.fault(at.key, at.key, v, "the figure stands with its source: how it is known", k.hint())
 			return e
 		}
-		t.sourced(&e, d, v)
+		e.band, e.given = pg.parse(at, k, d, v)
+	case map[string]any:
+		if !k.Sourced {
+			pg.fault(at.key, at.key, "", "this figure stands as text alone, without a table around it", at.hint(k))
+			return e
+		}
+		pg.sourced(&e, at, d, v)
 	case int64, float64:
-		t.bareNumber(k, d, v)
+		pg.bareNumber(at, k, d, v)
 	default:
-		t.wrongKind(k, v)
+		pg.wrongKind(at, k, v)
 	}
 	return e
 }
 
 // bareNumber records a figure without quotes and unit.
-func (t *table) bareNumber(k *Key, d quantity.Dimension, v any) {
-	text, _ := t.written(k.Name, v)
+func (pg *page) bareNumber(at spot, k *Key, d quantity.Dimension, v any) {
+	text, _ := pg.written(at.key, v)
 	if x, isFloat := v.(float64); isFloat && (math.IsNaN(x) || math.IsInf(x, 0)) {
-		t.fault(k.Name, text, "not a number; a figure that is not known is left out", k.hint())
+		pg.fault(at.key, at.key, text, "not a number; a figure that is not known is left out", at.hint(k))
 		return
 	}
 	var right []string
 	for _, unit := range unitsOf(d) {
-		right = append(right, k.Name+` = "`+text+" "+unit+`"`)
+		right = append(right, text+" "+unit)
 	}
-	t.fault(k.Name, text, "a bare number has no unit", "write: "+strings.Join(right, " or "))
+	pg.fault(at.key, at.key, text, "a bare number has no unit", at.write(right...))
 }
 
 // sourced reads { value, source, note }.
-func (t *table) sourced(e *entry, d quantity.Dimension, keys map[string]any) {
-	in := t.page.open(Entry, t.key(e.key.Name), keys)
+func (pg *page) sourced(e *entry, at spot, d quantity.Dimension, keys map[string]any) {
+	in := pg.open(Entry, at.key, keys)
 	e.src = arrest.Source(in.choice("source"))
 	e.note = in.text("note")
-	v, k, ok := in.take("value")
-	if !ok {
-		return
+	if e.key.MustSource && !in.has("source") {
+		pg.fault(at.key, in.key("source"), "", "the key is missing: how the figure is known", in.group.named["source"].hint())
 	}
-	switch v := v.(type) {
+	const value = "value"
+	k, inside := in.group.named[value], spot{in.key(value), value}
+	switch v := in.keys[value].(type) {
+	case nil:
+		if !slices.Contains(in.meant, value) {
+			pg.fault(at.key, inside.key, "", "the key is missing: "+k.Help, inside.write(e.key.example(d)))
+		}
 	case string:
-		e.band, e.given = in.parse(e.key, d, k.Name, v)
+		e.band, e.given = pg.parse(inside, e.key, d, v)
 	case int64, float64:
-		in.bareNumber(k, d, v)
+		pg.bareNumber(inside, k, d, v)
 	default:
-		in.wrongKind(k, v)
+		pg.wrongKind(inside, k, v)
 	}
 }
 
-// parse reads a figure by the rules of key k; name is the key it is typed at.
-func (t *table) parse(k *Key, d quantity.Dimension, name, text string) (quantity.Band, bool) {
+// parse reads a figure by the rules of key k.
+func (pg *page) parse(at spot, k *Key, d quantity.Dimension, text string) (quantity.Band, bool) {
 	b, err := quantity.Parse(d, text)
 	if err != nil {
 		var qe *quantity.Error
@@ -88,26 +129,29 @@ func (t *table) parse(k *Key, d quantity.Dimension, name, text string) (quantity
 			qe = &quantity.Error{Text: text, Reason: err.Error(), Example: d.Example()}
 		}
 		// Where the text can be meant in two ways, the example holds both.
-		right := strings.ReplaceAll(qe.Example, " or ", `" or `+name+` = "`)
-		t.fault(name, qe.Text, qe.Reason, "write: "+name+` = "`+right+`"`)
+		pg.fault(at.key, at.key, qe.Text, qe.Reason, at.write(strings.Split(qe.Example, " or ")...))
 		return b, false
 	}
 	if reason := k.refuses(b); reason != "" {
-		hint := "write: " + name + " = " + k.Example
-		if k.Dimension == 0 {
-			hint = "write: " + name + ` = "` + d.Example() + `"`
-		}
-		t.fault(name, text, reason, hint)
+		pg.fault(at.key, at.key, text, reason, at.write(k.example(d)))
 		return b, false
 	}
 	return b, true
+}
+
+// example is a figure of the key as it is typed, without quotes.
+func (k *Key) example(d quantity.Dimension) string {
+	if k.Dimension != 0 && strings.HasPrefix(k.Example, `"`) {
+		return strings.Trim(k.Example, `"`)
+	}
+	return d.Example()
 }
 
 // refuses says why a figure cannot stand at the key; empty where it can.
 func (k *Key) refuses(b quantity.Band) string {
 	u := b.Unit
 	switch {
-	case k.Spread == NoSpread && b.Tolerance != quantity.Untold:
+	case k.Spread == NoSpread && b.Tolerance != quantity.Untold, k.Spread == NoWidth && b.Low != b.High:
 		return "one figure is asked for, without a range or a ±"
 	case k.Spread == MustSpread && b.Tolerance == quantity.Untold:
 		return "a rating without a mass range: a single figure does not say from which mass to which; a range or a ± is asked for"

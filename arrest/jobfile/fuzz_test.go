@@ -9,6 +9,7 @@ import (
 	"testing/fstest"
 	"unicode/utf8"
 
+	"arrestcheck/arrest"
 	"arrestcheck/arrest/jobfile"
 )
 
@@ -53,16 +54,48 @@ func FuzzRead(f *testing.F) {
 			refusedWell(t, err)
 			return
 		}
-		if c := file.Job.Point; !(c.Mass > 0) || !(c.Tools >= 0) || !(c.Gravity > 0) || !(c.FreeFall >= 0) ||
-			!(c.InitialSpeed >= 0) || !(c.Distance >= 0) || !(c.Time >= 0) || !(c.Rise >= 0 && c.Rise <= 1) || file.Job.Persons < 1 {
-			t.Errorf("read as %+v", file.Job)
-		}
-		for _, in := range file.Job.Inputs {
-			if !(in.Band.Low <= in.Band.High) {
-				t.Errorf("%s: %+v", in.Key, in.Band)
-			}
-		}
+		canBeWorkedOut(t, &file.Job)
 	})
+}
+
+// canBeWorkedOut asserts what the mechanics ask of a job, at both ends of its
+// bands.
+func canBeWorkedOut(t *testing.T, j *arrest.Job) {
+	low, high, bands := j.Point, j.Point, 0
+	for _, in := range j.Inputs {
+		if !(in.Band.Low <= in.Band.High) || in.Band.Unit.Symbol == "" {
+			t.Errorf("%s: %+v", in.Key, in.Band)
+		}
+		if in.Set == nil {
+			continue
+		}
+		if in.Band.Low < in.Band.High {
+			bands++
+		}
+		in.Set(&low, in.Band.Low)
+		in.Set(&high, in.Band.High)
+	}
+	if bands > 16 {
+		t.Errorf("%d bands", bands)
+	}
+	for _, c := range []arrest.Case{low, j.Point, high} {
+		if l := c.Load; !(c.Gravity > 0) || !(c.Mass > 0) != (l.Mass > 0) || !(c.Tools >= 0) || !(c.FreeFall >= 0) ||
+			!(c.InitialSpeed >= 0) || !(c.Distance >= 0) || !(c.Time >= 0) || !(c.Rise >= 0 && c.Rise <= 1) ||
+			!(l.Driving >= 0) || !(l.Time >= 0) || !(l.Distance >= 0) || l.Distance > 0 && l.Axes != 1 ||
+			l.Mass > 0 && (j.Persons != 0 || l.Axes < 1 || l.Axes > 3 || l.Time == 0 && l.Distance == 0 || c.Path != nil || len(j.Ratings) > 0) {
+			t.Errorf("read as %+v, %d persons", c, j.Persons)
+		}
+		var p arrest.Point
+		arrest.At(&c, &p)
+		if c.Path != nil && p.Model.Failed != nil {
+			t.Errorf("the path fails: %v\n%+v\n%v", p.Model.Failed, c.Path.Parts, c.Figures)
+		}
+	}
+	for i, r := range j.Ratings {
+		if r.Part != 0 && (j.Point.Path == nil || r.Part > len(j.Point.Path.Parts)) {
+			t.Errorf("rating %d of part %d", i+1, r.Part)
+		}
+	}
 }
 
 func FuzzReadLimits(f *testing.F) {

@@ -1,6 +1,7 @@
 package jobfile
 
 import (
+	"slices"
 	"sync"
 
 	"arrestcheck/arrest"
@@ -14,7 +15,8 @@ type inputs struct {
 	inputs  []arrest.Input
 	notes   []arrest.Warning
 	persons float64
-	refused bool // a figure that is written, or that has to be, was not read
+	path    *connection // nil where there is no connector
+	refused bool        // a figure that is written, or that has to be, was not read
 }
 
 func setMass(c *arrest.Case, x float64)         { c.Mass = x }
@@ -32,7 +34,7 @@ func (in *inputs) add(key string, role arrest.Role, e entry, set func(*arrest.Ca
 		in.refused = in.refused || e.key != nil
 		return
 	}
-	in.inputs = append(in.inputs, arrest.Input{Key: key, Role: role, Band: e.band, Source: e.src, Note: e.note, Set: set})
+	in.inputs = append(in.inputs, arrest.Input{Key: key, Role: role, Band: e.band, Source: e.src, Note: e.note, Overridden: e.set, Set: set})
 	if set != nil {
 		set(in.point, middle(e.band))
 	}
@@ -47,9 +49,16 @@ func middle(b quantity.Band) float64 {
 	return b.Value
 }
 
+// ofPersons are the sections whose usual figures are those of persons: what is
+// usual for a tool of any size nobody can say.
+var ofPersons = []string{"fall", "stop", "connector", "rated"}
+
 // note remarks on a figure outside what is usual. Masses are usual by person.
 func (in *inputs) note(key string, e entry, role arrest.Role) {
 	usual := e.key.Usual
+	if in.persons == 0 && slices.Contains(ofPersons, e.key.Section) {
+		return
+	}
 	if role == arrest.OfWorker && in.persons > 1 {
 		usual = Span{usual.Low * in.persons, usual.High * in.persons}
 	}
@@ -90,7 +99,9 @@ func (in *inputs) rated(j *arrest.Job, t *table, n int) {
 		if !e.given {
 			return nil
 		}
-		e.note = r.Document
+		if !e.set { // else no document says it any more
+			e.note = r.Document
+		}
 		in.add(t.path+"."+name, arrest.OfDocument, e, nil)
 		return &e.band
 	}
@@ -104,6 +115,6 @@ func (in *inputs) rated(j *arrest.Job, t *table, n int) {
 	r.MeanForceAtMost = get("mean_force_at_most")
 	r.TravelAtMost = get("travel_at_most")
 	r.TravelIsDeceleration = t.choice("travel_is") == travelOfBody
-	t.beside()
+	r.Part = in.partNamed(t)
 	j.Ratings = append(j.Ratings, r)
 }

@@ -15,7 +15,12 @@ func (t *table) job(f *File) {
 	if s := t.section("document"); s != nil {
 		f.Document = s.document()
 	}
+	t.together()
 	e := t.entries(j)
+	e.connectors(t)
+	if s := t.section("model"); s != nil {
+		e.add("model.allowance", arrest.OfModel, s.quantity("allowance"), nil)
+	}
 	e.gravity(t)
 	for i, s := range t.sections("rated") {
 		e.rated(j, s, i)
@@ -25,6 +30,7 @@ func (t *table) job(f *File) {
 			Quantity: arrest.Quantity(s.choice("quantity")), Where: s.text("where")})
 	}
 	j.Inputs, j.Notes = e.inputs, e.notes
+	t.bands(j)
 	if !e.refused {
 		t.impossible(j)
 	}
@@ -36,20 +42,21 @@ func (t *table) document() Document {
 		Revision: t.text("revision"), Date: t.text("date"), Purpose: t.text("purpose"),
 		System: t.text("system"), Rescue: t.text("rescue"),
 		PreparedBy: t.text("prepared_by"), CheckedBy: t.text("checked_by"),
+		ReviewDate: t.text("review_date"),
 	}
 }
 
-// entries reads who falls, how, and how it stops.
+// entries reads what is stopped, how it moves, and how it stops.
 func (t *table) entries(j *arrest.Job) *inputs {
-	j.Persons = 1
 	in := &inputs{point: &j.Point, inputs: make([]arrest.Input, 0, 8)}
-	if s := t.section("worker"); s != nil {
-		if n := s.integer("persons"); n > 0 {
-			j.Persons = n
-		}
-		in.persons = float64(j.Persons)
-		in.add("worker.mass", arrest.OfWorker, s.quantity("mass"), setMass)
-		in.add("worker.tools", arrest.OfWorker, s.quantity("tools"), setTools)
+	if s := t.section("moving_load"); s != nil {
+		in.load(s)
+	}
+	if s := t.section("tool"); s != nil {
+		in.add("tool.mass", arrest.OfWorker, s.quantity("mass"), setMass)
+	}
+	if list := t.sections("worker"); len(list) > 0 {
+		in.workers(j, list)
 	}
 	if s := t.section("fall"); s != nil {
 		in.add("fall.free_fall", arrest.OfFall, s.quantity("free_fall"), setFreeFall)
@@ -63,9 +70,27 @@ func (t *table) entries(j *arrest.Job) *inputs {
 		in.add("stop.time", arrest.OfStop, s.quantity("time"), setTime)
 		j.Point.Pulse = pulseOf(s.choice("shape"))
 		in.add("stop.rise_fraction", arrest.OfStop, s.quantity("rise_fraction"), setRise)
-		s.beside()
 	}
 	return in
+}
+
+// mostBands is how many inputs may have two ends: every combination of their
+// ends is worked out, 65,536 of them.
+const mostBands = 16
+
+// bands refuses a job with more bands than can be worked out.
+func (t *table) bands(j *arrest.Job) {
+	n := 0
+	for i := range j.Inputs {
+		in := &j.Inputs[i]
+		if in.Set == nil || in.Band.Low == in.Band.High {
+			continue
+		}
+		if n++; n == mostBands+1 {
+			t.page.fault(in.Key, in.Key, in.Band.Text, fmt.Sprintf("this is the %dth figure with a band; every combination of the ends of %d bands is worked out, and of more it is not", n, mostBands),
+				"write: one figure in place of a band where the band is narrowest, here or further up")
+		}
+	}
 }
 
 func pulseOf(word string) arrest.Pulse {

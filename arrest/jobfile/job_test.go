@@ -47,6 +47,11 @@ func TestPointIsAsWritten(t *testing.T) {
 		"bands.toml":              {Mass: 94, FreeFall: 1.75, Gravity: 9.80665, Distance: 0.8, Time: 0.29}, // ranges: low ends
 		"two-persons.toml":        {Mass: 170, Tools: 12, FreeFall: 0.6, InitialSpeed: 0.4, Gravity: 9.81, Distance: 0.9, Time: 0.45, Pulse: arrest.EarlyPeak},
 		"rated-thrown.toml":       {Mass: 92, FreeFall: 1.7, InitialSpeed: 6, Gravity: 9.80665},
+		"tool-tether.toml":        {Mass: 3.2, FreeFall: 1.5, Gravity: 9.80665, Distance: 0.35},
+		"load-trolley.toml":       {Gravity: 9.80665, Load: arrest.Load{Mass: 900, Before: [3]float64{1.1}, Distance: 0.2, Axes: 1}},
+		"load-landing.toml":       {Gravity: 9.80665, Load: arrest.Load{Mass: 65, Before: [3]float64{3, -9}, Time: 0.2, Up: [3]float64{0, 1}, Axes: 2}},
+		"load-space.toml":         {Gravity: 9.80665, Load: arrest.Load{Mass: 350, Before: [3]float64{1, -0.5, -1.2}, After: [3]float64{0.2}, Time: 0.6, Up: [3]float64{0, 0, 1}, Axes: 3}},
+		"load-lowered.toml":       {Gravity: 9.80665, Load: arrest.Load{Mass: 120, Before: [3]float64{0.6}, Time: 0.3, Up: [3]float64{-1}, Axes: 1}},
 	} {
 		if diff := cmp.Diff(want, goodJob(t, name).Job.Point); diff != "" {
 			t.Errorf("%s: %s", name, diff)
@@ -105,9 +110,12 @@ func TestInputsAreListedInOrder(t *testing.T) {
 // Setting every input to its own written figure changes nothing: each Set
 // writes the field that the key means.
 func TestSetWritesItsOwnField(t *testing.T) {
-	for _, name := range files(t, jobsFolder, 15) {
+	for _, name := range files(t, jobsFolder, 32) {
 		j := goodJob(t, name).Job
-		c := arrest.Case{Pulse: j.Point.Pulse}
+		c := arrest.Case{Pulse: j.Point.Pulse, Path: j.Point.Path, Load: arrest.Load{Axes: j.Point.Load.Axes, Up: j.Point.Load.Up}}
+		if slices.Contains(inputKeys(&j), "moving_load.slope_down") {
+			c.Load.Up = [3]float64{}
+		}
 		for _, in := range j.Inputs {
 			switch {
 			case in.Set == nil:

@@ -20,7 +20,7 @@ import (
 
 // Document is the text of the [document] section, as typed.
 type Document struct {
-	Title, Site, Reference, Revision, Date, Purpose, System, Rescue, PreparedBy, CheckedBy string
+	Title, Site, Reference, Revision, Date, Purpose, System, Rescue, PreparedBy, CheckedBy, ReviewDate string
 }
 
 // A File is one job file, read.
@@ -31,18 +31,22 @@ type File struct {
 	Job       arrest.Job
 	Sets      []limits.Set // limit files in the order named, then the inline limits
 	Elsewhere []limits.Elsewhere
+	Overrides []Change // in the order given; Job is the file with these in it
 }
 
 // Read reads a job and the limit files it names, which must lie in folder.
-// folder may be nil for a job that names none.
+// folder may be nil for a job that names none. Overrides are put into the file
+// before it is looked at: an overridden figure has lost its source and its note,
+// and so is open. SHA256 stays that of the bytes.
 //
 // The error is a *Faults with every fault of every file; Faults.Unreadable
 // tells a limit file that could not be read from one that is refused.
-func Read(name string, data []byte, folder fs.FS) (*File, error) {
+func Read(name string, data []byte, folder fs.FS, overrides ...Override) (*File, error) {
 	pg := &page{name: name, data: data, groups: jobGroups()}
 	f := &File{Name: name, SHA256: digest(data)}
 	pages := []*page{pg}
 	if top := pg.begin(jobFormat, limitsFormat); top != nil {
+		f.Overrides = pg.override(top.keys, overrides)
 		top.job(f)
 		for _, file := range top.files() {
 			set, within := file.read(pg, folder)

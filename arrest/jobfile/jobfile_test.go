@@ -35,7 +35,7 @@ func files(t testing.TB, folder string, atLeast int) []string {
 }
 
 func TestGoodJobsAreRead(t *testing.T) {
-	for _, name := range files(t, jobsFolder, 15) {
+	for _, name := range files(t, jobsFolder, 32) {
 		data, err := os.ReadFile(filepath.Join(jobsFolder, name))
 		if err != nil {
 			t.Fatal(err)
@@ -45,7 +45,10 @@ func TestGoodJobsAreRead(t *testing.T) {
 			t.Errorf("%s\n%v", name, err)
 			continue
 		}
-		if f.Document.Title == "" || len(f.Job.Inputs) == 0 || f.Job.Point.Mass <= 0 || f.Job.Point.Gravity <= 0 {
+		if w := never.FindString(string(data)); w != "" {
+			t.Errorf("%s: the file holds %q", name, w)
+		}
+		if f.Document.Title == "" || len(f.Job.Inputs) == 0 || f.Job.Point.Mass+f.Job.Point.Load.Mass <= 0 || f.Job.Point.Gravity <= 0 {
 			t.Errorf("%s: read as %+v", name, f)
 		}
 	}

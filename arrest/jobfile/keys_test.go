@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"regexp"
 	"slices"
+	"strconv"
 	"strings"
 	"testing"
 
@@ -11,55 +12,159 @@ import (
 	"arrestcheck/arrest/quantity"
 )
 
-// pairs writes every key of a section with its example, but for those that
-// exclude each other.
-func pairs(keys []jobfile.Key, place jobfile.Places, section string) string {
-	var b strings.Builder
-	for _, k := range keys {
-		if k.Section != section || k.Places&place == 0 || k.Kind == jobfile.Section || k.Kind == jobfile.Sections || k.Kind == jobfile.Files {
+// A whole file holds every key of the table that can stand in one file.
+type whole struct {
+	place   jobfile.Places
+	stopped string // "worker", "tool" or "moving_load"
+	part    string // of the one [[connector]]
+	wanted  string // of keys that exclude each other this one
+}
+
+var wholeJob = whole{place: jobfile.InJob, stopped: "worker", part: "absorber"}
+
+// holds reports whether a key stands in the file, and leaves out those that
+// exclude it.
+func (w whole) holds(k *jobfile.Key) bool {
+	switch {
+	case k.Places&w.place == 0, k.Kind == jobfile.Files, k.Path() == "limit.at_least": // the example quantity is limited from above
+		return false
+	case k.Section == "" && w.stopped == "moving_load":
+		return k.Name == w.stopped || len(k.Either) == 0 && !slices.Contains(record("moving_load").Not, k.Name)
+	case k.Section == "" && slices.Contains(k.Either, "worker"):
+		return k.Name == w.stopped
+	case k.Section == "connector":
+		return w.ofPart(k.Name)
+	case len(k.Either) > 0 && k.Section != "":
+		return k.Name == w.chosen(k.Either)
+	}
+	return true
+}
+
+// chosen is the one of several keys that the file holds.
+func (w whole) chosen(names []string) string {
+	if slices.Contains(names, w.wanted) {
+		return w.wanted
+	}
+	return names[0]
+}
+
+// ofPart reports whether the file's one part has a key.
+func (w whole) ofPart(name string) bool {
+	decided := false
+	for _, v := range record("connector.part").Variants {
+		all := append(slices.Concat(v.Needs...), v.May...)
+		decided = decided || slices.Contains(all, name)
+		if v.Word != w.part || !slices.Contains(all, name) {
 			continue
 		}
-		if k.Path() == "limit.at_least" {
-			continue // the example quantity is limited from above
+		for _, need := range v.Needs {
+			if slices.Contains(need, name) {
+				return name == w.chosen(need)
+			}
+		}
+		return true
+	}
+	return !decided
+}
+
+// record returns the record of a key of a job file.
+func record(path string) jobfile.Key {
+	for _, k := range jobfile.Keys() {
+		if k.Path() == path && k.Places&jobfile.InJob != 0 {
+			return k
+		}
+	}
+	panic("no key " + path)
+}
+
+// pairs writes every key of a section with its example.
+func (w whole) pairs(section string) string {
+	var b strings.Builder
+	for _, k := range jobfile.Keys() {
+		if k.Section != section || !w.holds(&k) || k.Kind == jobfile.Section || k.Kind == jobfile.Sections {
+			continue
 		}
 		value := k.Example
-		if k.Path() == "stop.shape" {
+		switch k.Path() {
+		case "stop.shape":
 			value = `"rise then plateau"` // what rise_fraction asks for
+		case "connector.part":
+			value = strconv.Quote(w.part)
+		case "moving_load.up":
+			value = `"+x"` // the one component of the example
 		}
 		fmt.Fprintf(&b, "%s = %s\n", k.Name, value)
 	}
 	return b.String()
 }
 
-// wholeFile writes a file that holds every key of the table.
-func wholeFile(place jobfile.Places) string {
-	keys := jobfile.Keys()
-	text := pairs(keys, place, "")
-	for _, k := range keys {
-		if k.Places&place == 0 {
-			continue
-		}
-		switch k.Kind {
-		case jobfile.Section:
-			text += "[" + k.Name + "]\n" + pairs(keys, place, k.Name)
-		case jobfile.Sections:
-			text += "[[" + k.Name + "]]\n" + pairs(keys, place, k.Name)
+func (w whole) text() string {
+	text := w.pairs("")
+	for _, k := range jobfile.Keys() {
+		switch {
+		case k.Section != "" || !w.holds(&k):
+		case k.Kind == jobfile.Section:
+			text += "[" + k.Name + "]\n" + w.pairs(k.Name)
+		case k.Kind == jobfile.Sections:
+			text += "[[" + k.Name + "]]\n" + w.pairs(k.Name)
 		}
 	}
 	return text
 }
 
+// wholeWith returns a whole file that holds a key.
+func wholeWith(k *jobfile.Key, place jobfile.Places) whole {
+	w := wholeJob
+	w.place, w.wanted = place, k.Name
+	for _, stopped := range record("worker").Either {
+		if k.Section == stopped || k.Section == "" && k.Name == stopped {
+			w.stopped = stopped
+		}
+	}
+	if k.Section == "connector" {
+		for _, v := range record("connector.part").Variants {
+			if w.part = v.Word; w.ofPart(k.Name) {
+				break
+			}
+		}
+	}
+	return w
+}
+
 // The examples of the table are what every hint shows: together they must make
-// files that are read without a fault.
+// files that are read without a fault, whatever is stopped and whatever part is
+// in the path.
 func TestExamplesAreRead(t *testing.T) {
-	f, err := jobfile.Read("job", []byte(wholeFile(jobfile.InJob)), nil)
+	f, err := jobfile.Read("job", []byte(wholeJob.text()), nil)
 	if err != nil {
 		t.Fatal(err)
 	}
-	if len(f.Sets) != 1 || len(f.Sets[0].Limits) != 1 || len(f.Job.Ratings) != 1 || len(f.Elsewhere) != 1 || !f.Job.Example {
+	if len(f.Sets) != 1 || len(f.Sets[0].Limits) != 1 || len(f.Job.Ratings) != 1 || f.Job.Ratings[0].Part != 1 || len(f.Elsewhere) != 1 || !f.Job.Example {
 		t.Errorf("not all of it was read: %+v", f)
 	}
-	if _, err := jobfile.ReadLimits("limits", []byte(wholeFile(jobfile.InLimits))); err != nil {
+	n := 0
+	for _, k := range jobfile.Keys() {
+		if k.Places&jobfile.InJob == 0 {
+			continue
+		}
+		n++
+		text := wholeWith(&k, jobfile.InJob).text()
+		if _, err := jobfile.Read("job", []byte(text), nil); err != nil {
+			t.Errorf("with %s\n%v\n%s", k.Path(), err, text)
+		}
+	}
+	for _, v := range record("connector.part").Variants {
+		w := wholeJob
+		w.part = v.Word
+		if _, err := jobfile.Read("job", []byte(w.text()), nil); err != nil {
+			t.Errorf("with a part %s\n%v", v.Word, err)
+		}
+	}
+	if n < 100 {
+		t.Errorf("%d keys of a job, at least 100 expected", n)
+	}
+	limits := whole{place: jobfile.InLimits}
+	if _, err := jobfile.ReadLimits("limits", []byte(limits.text())); err != nil {
 		t.Error(err)
 	}
 }
@@ -69,7 +174,7 @@ func TestExamplesAreRead(t *testing.T) {
 func TestEveryKeyIsLookedAt(t *testing.T) {
 	n := 0
 	for _, k := range jobfile.Keys() {
-		if k.Section == jobfile.Entry || k.Section == "limits" {
+		if k.Section == jobfile.Entry || k.Section == jobfile.Polar || k.Section == "limits" {
 			continue // below
 		}
 		for _, place := range []jobfile.Places{jobfile.InJob, jobfile.InLimits} {
@@ -77,7 +182,7 @@ func TestEveryKeyIsLookedAt(t *testing.T) {
 				continue
 			}
 			n++
-			key, err := withValue(k, place, "2025-06-04")
+			key, err := withValue(&k, place, "2025-06-04")
 			if err == nil {
 				t.Errorf("%s: a date is taken for its value", k.Path())
 			} else if !strings.Contains(err.Error(), ": "+key+": ") {
@@ -85,28 +190,31 @@ func TestEveryKeyIsLookedAt(t *testing.T) {
 			}
 		}
 	}
-	for _, name := range []string{"value", "source", "note"} {
+	load := wholeWith(&jobfile.Key{Name: "moving_load"}, jobfile.InJob).text()
+	for _, c := range []struct{ name, job, old, new, key string }{
+		{"value", wholeJob.text(), `mass = "92 kg ± 1 kg"`, `mass = { value = 2025-06-04 }`, "worker.mass.value"},
+		{"source", wholeJob.text(), `mass = "92 kg ± 1 kg"`, `mass = { source = 2025-06-04 }`, "worker.mass.source"},
+		{"note", wholeJob.text(), `mass = "92 kg ± 1 kg"`, `mass = { note = 2025-06-04 }`, "worker.mass.note"},
+		{"file", wholeJob.text(), "format", "limits = [{ file = 2025-06-04 }]\nformat", "limits[1].file"},
+		{"sha256", wholeJob.text(), "format", "limits = [{ sha256 = 2025-06-04 }]\nformat", "limits[1].sha256"},
+		{"speed", load, `velocity_before = "1.1 m/s"`, `velocity_before = { speed = 2025-06-04, direction = "0 deg" }`, "moving_load.velocity_before.speed"},
+		{"direction", load, `velocity_before = "1.1 m/s"`, `velocity_before = { speed = "1 m/s", direction = 2025-06-04 }`, "moving_load.velocity_before.direction"},
+	} {
 		n++
-		job := strings.Replace(wholeFile(jobfile.InJob), `mass = "92 kg ± 1 kg"`, `mass = { `+name+` = 2025-06-04 }`, 1)
-		if _, err := jobfile.Read("job", []byte(job), nil); err == nil || !strings.Contains(err.Error(), "worker.mass."+name+": ") {
-			t.Errorf("%s in a figure: %v", name, err)
+		job := strings.Replace(c.job, c.old, c.new, 1)
+		if _, err := jobfile.Read("job", []byte(job), nil); job == c.job || err == nil || !strings.Contains(err.Error(), c.key+": ") {
+			t.Errorf("%s: %v", c.name, err)
 		}
 	}
-	for _, name := range []string{"file", "sha256"} {
-		n++
-		if _, err := jobfile.Read("job", []byte("limits = [{ "+name+" = 2025-06-04 }]\n"+wholeFile(jobfile.InJob)), nil); err == nil || !strings.Contains(err.Error(), "limits[1]."+name+": ") {
-			t.Errorf("%s in the list of limit files: %v", name, err)
-		}
-	}
-	if n < 80 {
-		t.Errorf("%d keys, at least 80 expected", n)
+	if n < 120 {
+		t.Errorf("%d keys, at least 120 expected", n)
 	}
 }
 
 // withValue reads a whole file with one key or section replaced, and returns
 // the dotted key at which it stands.
-func withValue(k jobfile.Key, place jobfile.Places, value string) (key string, err error) {
-	text, line := wholeFile(place), k.Name+" = "+value+"\n"
+func withValue(k *jobfile.Key, place jobfile.Places, value string) (key string, err error) {
+	text, line := wholeWith(k, place).text(), k.Name+" = "+value+"\n"
 	key = k.Path()
 	switch {
 	case k.Kind == jobfile.Section || k.Kind == jobfile.Sections || k.Section == "":
@@ -154,11 +262,29 @@ func TestKeyTable(t *testing.T) {
 		if k.Kind == jobfile.Quantity && (k.Sign == 0 || (k.Dimension == 0) != (k.Section == "limit" && k.Usual == jobfile.Span{} && k.Possible == jobfile.Span{})) {
 			t.Errorf("%s: sign %v, dimension %v", at, k.Sign, k.Dimension)
 		}
+		if k.Usual != (jobfile.Span{}) && k.Kind != jobfile.Quantity && k.Kind != jobfile.Velocity {
+			t.Errorf("%s: a usual span for what is no figure", at)
+		}
+		if k.MustSource && !k.Sourced || k.Several && k.Kind != jobfile.Section {
+			t.Errorf("%s: %+v", at, k)
+		}
+		for _, v := range k.Variants {
+			if !slices.Contains(k.Choices, v.Word) {
+				t.Errorf("%s: a variant for %q, which is no choice", at, v.Word)
+			}
+			for _, name := range append(slices.Concat(v.Needs...), v.May...) {
+				record(k.Section + "." + name) // panics where there is none
+			}
+		}
 		if k.Usual != (jobfile.Span{}) && !(k.Possible.Low <= k.Usual.Low && k.Usual.Low < k.Usual.High && k.Usual.High <= k.Possible.High) {
 			t.Errorf("%s: usual %v not within possible %v", at, k.Usual, k.Possible)
 		}
 		if k.Kind == jobfile.Quantity && k.Usual != (jobfile.Span{}) {
-			b, err := quantity.Parse(k.Dimension, strings.Trim(k.Example, `"`))
+			example := strings.Trim(k.Example, `"`)
+			if k.MustSource {
+				example = strings.Split(k.Example, `"`)[1]
+			}
+			b, err := quantity.Parse(k.Dimension, example)
 			if err != nil || b.Low < k.Usual.Low || b.High > k.Usual.High {
 				t.Errorf("%s: example %s is not usual", at, k.Example)
 			}

@@ -229,8 +229,11 @@ func (s *scanner) inside(path string) {
 		}
 		before := s.at
 		if list {
-			s.put(element(path, n), s.line, "")
-			s.value(element(path, n))
+			line, key := s.line, element(path, n)
+			s.put(key, line, "")
+			if text := s.value(key); s.found[key].line == line {
+				s.found[key] = mark{line, text}
+			}
 		} else {
 			s.pair(path)
 		}

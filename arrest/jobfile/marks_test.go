@@ -38,7 +38,7 @@ func TestScanFindsLines(t *testing.T) {
 		"worker":                     {2, ""},
 		"worker.tools":               {2, "0 kg"},
 		"limits":                     {3, ""},
-		"limits[1]":                  {4, ""},
+		"limits[1]":                  {4, "a.toml"},
 		"limits[2]":                  {5, ""},
 		"limits[2].file":             {5, "b.toml"},
 		"limits[2].sha256":           {5, "]"},

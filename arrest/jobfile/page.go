@@ -24,13 +24,19 @@ type page struct {
 	groups groups
 	faults []Fault // Line is filled in by finish
 	at     []string
-	marks  marks // nil until asked for
-	ids    []id  // names of the limits in it
+	marks  marks               // nil until asked for
+	ids    []id                // names of the limits in it
+	sets   map[string]Override // what overrides have put, by dotted key
 }
 
 // fault records a fault. at is the key whose line is shown, key the key named.
 func (pg *page) fault(at, key, text, reason, hint string) {
-	pg.faults = append(pg.faults, Fault{File: pg.name, Key: key, Text: text, Reason: reason, Hint: hint})
+	f := Fault{File: pg.name, Key: key, Text: text, Reason: reason, Hint: hint}
+	if o, name, is := pg.setBy(key); is {
+		f.blame(o, name)
+		at = ""
+	}
+	pg.faults = append(pg.faults, f)
 	pg.at = append(pg.at, at)
 }
 

@@ -3,7 +3,6 @@ package jobfile
 import (
 	"errors"
 	"fmt"
-	"slices"
 	"strings"
 
 	"github.com/BurntSushi/toml"
@@ -76,16 +75,22 @@ func (pg *page) example(name, text string) string {
 }
 
 // headings lists the sections of a file.
-func (all groups) headings() string { return all.sections(Section, Sections) }
-
-// repeated lists the sections that may stand several times.
-func (all groups) repeated() string { return all.sections(Sections) }
-
-func (all groups) sections(kinds ...Kind) string {
+func (all groups) headings() string {
 	var list []string
 	for _, k := range all[""].keys {
-		if slices.Contains(kinds, k.Kind) {
+		if k.Kind == Section || k.Kind == Sections {
 			list = append(list, k.line())
+		}
+	}
+	return strings.Join(list, ", ")
+}
+
+// repeated lists the sections that may stand several times.
+func (all groups) repeated() string {
+	var list []string
+	for _, k := range all[""].keys {
+		if k.Several || k.Kind == Sections {
+			list = append(list, "[["+k.Name+"]]")
 		}
 	}
 	return strings.Join(list, ", ")

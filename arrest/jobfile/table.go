@@ -16,7 +16,8 @@ type table struct {
 	group *group
 	keys  map[string]any
 
-	meant []string // keys that a misspelt one probably stands for: not missing too
+	meant   []string // keys that a misspelt one probably stands for: not missing too
+	useless []string // keys that the word of a Choice has no use for: told already
 }
 
 // open begins with a section and records the keys that do not belong in it.
@@ -178,17 +179,21 @@ func (t *table) section(name string) *table {
 		return nil
 	}
 	s := t.page.open(name, name, keys)
-	s.anyOf(k)
+	s.whole(k)
 	return s
 }
 
-// sections returns every [[section]] of a name.
+// sections returns every [[section]] of a name, and the one [section] where
+// both ways are open.
 func (t *table) sections(name string) []*table {
 	v, k, ok := t.take(name)
 	if !ok {
 		return nil
 	}
 	list, isList := v.([]map[string]any)
+	if _, isTable := v.(map[string]any); isTable && k.Several {
+		return []*table{t.section(name)}
+	}
 	if !isList {
 		t.wrongKind(k, v)
 		return nil
@@ -196,69 +201,25 @@ func (t *table) sections(name string) []*table {
 	all := make([]*table, len(list))
 	for i, keys := range list {
 		all[i] = t.page.open(name, element(name, i), keys)
-		all[i].anyOf(k)
+		all[i].whole(k)
 	}
 	return all
 }
 
-// anyOf records that none of the keys is there of which the section needs one.
-func (t *table) anyOf(k *Key) {
-	if len(k.AnyOf) == 0 || slices.ContainsFunc(k.AnyOf, t.has) {
-		return
-	}
-	for _, name := range k.AnyOf {
-		if slices.Contains(t.meant, name) {
-			return
-		}
-	}
-	var right []string
-	for _, name := range k.AnyOf {
-		right = append(right, t.group.named[name].line())
-	}
-	reason := "at least one of these keys has to be there: " + strings.Join(k.AnyOf, ", ")
-	if t.has("shape") {
-		reason = "shape says how the force runs, not how far or how long; " + reason
-	}
-	t.page.fault(t.path, t.path, "", reason, "write: "+strings.Join(right, or))
-}
-
-// beside records keys that stand without their companion, and companions whose
-// word asks for a key that is not there.
-func (t *table) beside() {
-	for _, k := range t.group.keys {
-		if k.Beside.Name == "" {
-			continue
-		}
-		word, _ := t.keys[k.Beside.Name].(string)
-		there := t.has(k.Beside.Name) && (k.Beside.Choice == "" || word == k.Beside.Choice)
-		switch {
-		case t.has(k.Name) && !there:
-			t.alone(k)
-		case !t.has(k.Name) && there && k.Beside.Choice != "" && !slices.Contains(t.meant, k.Name):
-			t.fault(k.Beside.Name, word, "it asks for "+t.key(k.Name)+": "+k.Help, k.hint())
-		}
-	}
-}
-
-// alone records a key that stands without its companion.
-func (t *table) alone(k *Key) {
-	c := t.group.named[k.Beside.Name]
-	if slices.Contains(t.meant, c.Name) {
-		return
-	}
-	partner, right := t.key(c.Name), c.lines()
-	if k.Beside.Choice != "" {
-		right = c.Name + " = " + strconv.Quote(k.Beside.Choice)
-		partner = t.path + "." + right
-	}
-	t.fault(k.Name, "", "it stands only beside "+partner, "write: "+right+or+"take out "+t.key(k.Name))
+// whole records what is wrong with the keys of a section together: k is the
+// record of the section.
+func (s *table) whole(k *Key) {
+	s.anyOf(k)
+	s.together()
 }
 
 // wrongKind records a value that is not of the kind of its key.
-func (t *table) wrongKind(k *Key, v any) {
-	text, found := t.written(k.Name, v)
+func (t *table) wrongKind(k *Key, v any) { t.page.wrongKind(spot{t.key(k.Name), k.Name}, k, v) }
+
+func (pg *page) wrongKind(at spot, k *Key, v any) {
+	text, found := pg.written(at.key, v)
 	reason := "this is " + found + "; " + k.asked() + " is asked for"
-	hint := k.hint()
+	hint := at.hint(k)
 	switch {
 	case k.Kind == Sections && (found == "a section" || found == "a list"):
 		reason = "this may stand several times, each with a heading of its own"
@@ -267,23 +228,23 @@ func (t *table) wrongKind(k *Key, v any) {
 		reason = "this stands once in a file"
 	case found == "a date" && (k.Kind == Text || k.Kind == Choice):
 		reason = "a date is written as text, in double quotes"
-		hint = "write: " + k.Name + " = " + strconv.Quote(text)
+		hint = at.write(text)
 	case found == "a number" && (k.Kind == Text || k.Kind == Choice):
 		reason = "words are asked for, in double quotes"
 		if k.Kind == Text {
-			hint = "write: " + k.Name + " = " + strconv.Quote(text)
+			hint = at.write(text)
 		}
 	}
-	t.fault(k.Name, text, reason, hint)
+	pg.fault(at.key, at.key, text, reason, hint)
 }
 
 // written returns a value as it is written, where that is short, and what it
 // is in words.
-func (t *table) written(name string, v any) (text, found string) {
-	if t.page.marks == nil {
-		t.page.marks = scan(t.page.data)
+func (pg *page) written(key string, v any) (text, found string) {
+	if pg.marks == nil {
+		pg.marks = scan(pg.data)
 	}
-	text = t.page.marks[t.key(name)].text
+	text = pg.marks[key].text
 	switch v := v.(type) {
 	case string:
 		return v, "text"
@@ -310,6 +271,10 @@ func (k *Key) asked() string {
 		return "a list of file names in square brackets"
 	case Quantity:
 		return "text with a unit"
+	case Velocity:
+		return "text with a unit, a list of one to three of them, or a table of speed and direction"
+	case Points:
+		return "a list of pairs of extension and force"
 	case Integer:
 		return "a whole number without quotes"
 	case Boolean:

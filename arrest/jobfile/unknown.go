@@ -10,7 +10,7 @@ import (
 // was probably meant.
 func (t *table) unknown(name string) {
 	v := t.keys[name]
-	text, found := t.written(name, v)
+	text, found := t.page.written(t.key(name), v)
 	heading := found == "a section" || found == "a list of sections"
 	if heading || found == "text" && len(text) > shown {
 		text = ""
@@ -28,7 +28,7 @@ func (t *table) meaning(name string, heading bool) (reason, hint string) {
 	if near, ok := sameLetters(name, names); ok {
 		return t.spelling(name, near)
 	}
-	if where := t.page.groups.find(name); len(where) > 0 && !heading {
+	if where := t.page.groups.find(name); len(where) > 0 && !heading && t.group.section != "limits" {
 		return t.elsewhere(name, where)
 	}
 	if other, file := t.otherFile(name); other {
@@ -100,6 +100,8 @@ func (all groups) placeOf(section string) string {
 		return "to the top of the file, before the first section"
 	case Entry:
 		return "beside the value of a figure"
+	case Polar:
+		return "in the table of a velocity, beside its direction"
 	}
 	return "under " + all[""].named[section].line()
 }
@@ -119,7 +121,7 @@ func (t *table) renamed(name, right string) string {
 	if k.Kind == Section || k.Kind == Sections {
 		return k.line()
 	}
-	text, found := t.written(name, t.keys[name])
+	text, found := t.page.written(t.key(name), t.keys[name])
 	switch {
 	case found == "text" && len(text) <= shown:
 		return right + " = " + strconv.Quote(text)
