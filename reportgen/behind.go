@@ -11,6 +11,7 @@ import (
 // behind is what page 1 rests on.
 func (b *builder) behind() []Section {
 	sections := []Section{{Heading: behindHeading}, {inputsHeading, []Block{{Table: b.inputTable()}}}}
+	sections = append(append(sections, b.pathSections()...), b.comparedSection(false)...)
 	if len(b.asd().Findings) > 0 {
 		sections = append(sections, Section{limitTextsHeading, b.limitTexts()})
 	}
@@ -19,10 +20,10 @@ func (b *builder) behind() []Section {
 		Section{workingHeading, b.workingBlocks()},
 	)
 	if wrong := b.forgottenBlocks(); len(wrong) > 0 {
-		sections = append(sections, Section{forgottenHeading, wrong})
+		sections = append(sections, Section{forgottenHeading[b.sub], wrong})
 	}
 	return append(sections,
-		Section{notCheckedHeading, []Block{{Lines: bullets(notChecked)}}},
+		Section{notCheckedHeading, []Block{{Lines: bullets(notChecked[b.sub])}}},
 		Section{referencesHeading, []Block{{Lines: b.references()}}},
 		Section{filesHeading, []Block{{Lines: b.files()}}},
 	)
@@ -45,9 +46,24 @@ func (b *builder) inputTable() *Table {
 		if in.Note != "" {
 			state += "\n" + b.say(quoted, in.Note)
 		}
-		t.Rows = append(t.Rows, Row{Cells: []string{in.Key, in.Band.Text, siText(&in.Band), state}})
+		t.Rows = append(t.Rows, Row{Cells: []string{flat(in.Key), flat(in.Band.Text) + b.overridden(in), siText(&in.Band), state}})
 	}
 	return t
+}
+
+// overridden says of an input that was set on the command line what the file
+// has in its place.
+func (b *builder) overridden(in *arrest.Input) string {
+	for i := range b.s.File.Overrides {
+		switch o := &b.s.File.Overrides[i]; {
+		case o.Key != in.Key:
+		case o.Former == "":
+			return "\n" + b.say(setByHand)
+		default:
+			return "\n" + b.say(setByHandFor, o.Former)
+		}
+	}
+	return ""
 }
 
 // state says whether an input is settled, by what, and if not why.
@@ -87,7 +103,7 @@ func (b *builder) limitTexts() []Block {
 	for place, i := range b.rowOrder() {
 		l, set := b.asd().Findings[i].Limit, b.asd().Findings[i].Set
 		list := []Line{
-			{Label: strconv.Itoa(place + 1), Text: l.ID + ": " + title(l.Quantity) + " " + senseWords[l.Sense] + " " + l.Bound.Text},
+			{Label: strconv.Itoa(place + 1), Text: l.ID + ": " + b.title(l.Quantity) + " " + senseWords[l.Sense] + " " + l.Bound.Text},
 			{Text: l.Authority},
 		}
 		for _, pair := range limitWords(l, set) {
@@ -170,13 +186,19 @@ func (b *builder) register() []Line {
 			texts = append(texts, b.say(wordsCondition, r.Document, r.Conditions))
 		}
 	}
+	if b.plan() != nil {
+		texts = append(texts, pathAssumption)
+	}
+	if in := b.s.File.Job.AllowanceInput(); in != nil {
+		texts = append(texts, b.say(allowanceAssumption, in.Band.Text))
+	}
 	for i := range b.asd().Findings {
 		if l := b.asd().Findings[i].Limit; l.AppliesWhen != "" {
 			texts = append(texts, b.say(wordsOfLimit, l.ID, l.AppliesWhen))
 		}
 	}
 	var list []Line
-	for i, t := range append(texts, standingAssumptions...) {
+	for i, t := range append(texts, standingAssumptions[b.sub]...) {
 		list = append(list, Line{Label: "A" + strconv.Itoa(i+1), Text: t + " " + needsConfirmation})
 	}
 	return list

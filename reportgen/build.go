@@ -16,7 +16,7 @@ import (
 // It panics where a warning or a reason does not have the arguments that its
 // sentence needs: a sheet with a hole in a sentence would be worse than none.
 func Build(s *Sheet, units UnitChoice) Report {
-	b := builder{s: s, d: newDisplay(units, s.Result.Inputs)}
+	b := newBuilder(s, units)
 	return Report{
 		Head:     b.head(),
 		Warnings: lines(b.d.statements(s)),
@@ -26,8 +26,13 @@ func Build(s *Sheet, units UnitChoice) Report {
 
 // A builder holds what the sections are made from.
 type builder struct {
-	s *Sheet
-	d display
+	s   *Sheet
+	d   display
+	sub subject
+}
+
+func newBuilder(s *Sheet, units UnitChoice) builder {
+	return builder{s, newDisplay(units, s.Result.Inputs), s.subject()}
 }
 
 func (b *builder) res() *arrest.Result     { return b.s.Result }
@@ -70,18 +75,19 @@ func openInputs(inputs []arrest.Input) []int {
 }
 
 func (b *builder) pageOne() []Section {
-	sections := []Section{
-		{limitsHeading, append(b.banner(), b.limitBlocks()...)},
-		{peaksHeading, b.estimateBlocks(noPeak, isPeak)},
-	}
+	sections := append(b.comparedSection(true),
+		Section{limitsHeading, append(b.banner(), b.limitBlocks()...)},
+		Section{peaksHeading, b.estimateBlocks(noPeak, isPeak)},
+	)
 	if blocks := b.estimateBlocks("", isMean); len(blocks) > 0 {
 		sections = append(sections, Section{meansHeading, blocks})
 	}
+	sections = append(sections, b.vectorSections()...)
 	return append(sections,
-		Section{motionHeading, b.estimateBlocks("", isMotion)},
+		Section{motionHeading[b.sub], b.estimateBlocks("", isMotion)},
 		Section{openHeading, []Block{b.openBlock()}},
-		Section{statusHeading, []Block{{Lines: []Line{{Label: verificationLabel, Text: verification}, {Label: validationLabel, Text: validation}}}}},
-		Section{beforeHeading, []Block{{Text: stopMeasureAgain, Loud: true}}},
+		Section{statusHeading, []Block{{Lines: b.status()}}},
+		Section{beforeHeading, []Block{{Text: stopMeasureAgain[b.sub], Loud: true}}},
 		Section{namesHeading, b.nameBlocks()},
 	)
 }
@@ -93,9 +99,10 @@ func (b *builder) openBlock() Block {
 		return Block{Text: noOpenInputs}
 	}
 	block := Block{Text: b.say(openSentence, strconv.Itoa(len(open)), strconv.Itoa(len(b.res().Inputs)))}
+	block.Table = &Table{Header: openHead, Widths: []int{44, 34}}
 	for _, i := range open {
 		in := &b.res().Inputs[i]
-		block.Lines = append(block.Lines, Line{Label: in.Key, Text: openWords[string(in.Open())]})
+		block.Table.Rows = append(block.Table.Rows, Row{Cells: []string{flat(in.Key), openWords[string(in.Open())]}})
 	}
 	return block
 }

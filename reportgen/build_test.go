@@ -26,9 +26,9 @@ func TestPageOrder(t *testing.T) {
 		"Nobody entered", "clearance below", "Elsewhere", "anchor register",
 		"Worst row", "undecided in row 1, peak force on the body:", "at most 1800 lbf", "site rule 4",
 		warningHeading, "! S-31", "S-01", "S-10",
-		limitsHeading, exampleBanner, peaksHeading, meansHeading, motionHeading, openHeading, "stop.distance",
+		limitsHeading, exampleBanner, peaksHeading, meansHeading, motionHeading[aPerson], openHeading, "stop.distance",
 		statusHeading, "Verification", "Validation", beforeHeading, "stop. Measure", namesHeading, exampleBanner, "signature", "____",
-		behindHeading, inputsHeading, limitTextsHeading, registerHeading, workingHeading, forgottenHeading,
+		behindHeading, inputsHeading, limitTextsHeading, registerHeading, workingHeading, forgottenHeading[aPerson],
 		notCheckedHeading, referencesHeading, filesHeading, "10b", "5e7", "version 0",
 	}
 	out = strings.Join(strings.Fields(out), " ") // a sentence may be broken anywhere
@@ -153,7 +153,7 @@ func TestEstimateTexts(t *testing.T) {
 func TestEveryQuantityHasItsTable(t *testing.T) {
 	for _, q := range arrest.Quantities() {
 		n := 0
-		for _, in := range []bool{isPeak(q.ID), isMean(q.ID), isMotion(q.ID)} {
+		for _, in := range []bool{isPeak(q.ID), isMean(q.ID), isMotion(q.ID), isOfVector(q.ID)} {
 			if in {
 				n++
 			}
@@ -172,7 +172,7 @@ func TestRegister(t *testing.T) {
 	if !strings.Contains(list[0].Text, "stop.distance") || !strings.Contains(list[0].Text, "does not settle it") {
 		t.Errorf("first: %s", list[0].Text)
 	}
-	if len(list) != 1+len(standingAssumptions) {
+	if len(list) != 1+len(standingAssumptions[aPerson]) {
 		t.Errorf("%d lines", len(list))
 	}
 	for _, l := range list {

@@ -127,8 +127,15 @@ func format(si float64, u quantity.Unit, digits int, r quantity.Rounding) string
 }
 
 // span returns what lies between two SI figures, "3.42 to 3.61 kN (768 to 811
-// lbf)"; one figure where both print alike.
+// lbf)"; one figure where both print alike; what is known where the upper end
+// is open.
 func (d display) span(dim quantity.Dimension, typed quantity.Unit, low, high float64, digits int) string {
+	switch {
+	case math.IsInf(low, 1):
+		return noUpperEnd
+	case math.IsInf(high, 1):
+		return d.say(openAbove, d.figureAs(dim, typed, low, digits, quantity.Down))
+	}
 	return join(d.pair(dim, typed, high), low+high, func(u quantity.Unit) string {
 		last := format(high, u, digits, quantity.Nearest)
 		if format(low, u, digits, quantity.Nearest) == last {

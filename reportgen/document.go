@@ -1,6 +1,7 @@
 package reportgen
 
 import (
+	"math"
 	"strings"
 
 	"arrestcheck/arrest"
@@ -10,7 +11,7 @@ import (
 // newDocument gathers the JSON of a sheet. Lists that are empty are empty
 // lists, never null.
 func newDocument(s *Sheet) document {
-	b := builder{s: s, d: newDisplay(SIUnits, s.Result.Inputs)}
+	b := newBuilder(s, SIUnits)
 	n := s.Assessment.Counts()
 	return document{
 		Format: JSONFormat,
@@ -32,7 +33,10 @@ func newDocument(s *Sheet) document {
 		Cautions: each(b.d.statements(s), func(one *said) jsonCaution {
 			return jsonCaution{one.number, breakable(one.text)}
 		}),
-		NotChecked: notChecked,
+		NotChecked: notChecked[b.sub],
+		ModelRuns:  each(s.Result.Runs, b.jsonRun),
+		Vectors:    b.jsonVectors(),
+		Overrides:  each(s.File.Overrides, newOverride),
 	}
 }
 
@@ -62,8 +66,9 @@ func (b *builder) jsonJob() jsonJob {
 	return jsonJob{
 		Name: text(b.s.File.Name), Title: text(d.Title), Site: text(d.Site), Reference: text(d.Reference),
 		Revision: text(d.Revision), Date: text(d.Date), Purpose: text(d.Purpose), System: text(d.System),
-		Rescue: text(d.Rescue), PreparedBy: text(d.PreparedBy), CheckedBy: text(d.CheckedBy),
+		Rescue: text(d.Rescue), PreparedBy: text(d.PreparedBy), CheckedBy: text(d.CheckedBy), ReviewDate: text(d.ReviewDate),
 		Persons: b.res().Persons, Example: b.s.isExample(), SHA256: text(b.s.File.SHA256),
+		Subject: subjectIDs[b.sub],
 	}
 }
 
@@ -77,12 +82,19 @@ func newInput(in *arrest.Input) jsonInput {
 }
 
 func (b *builder) jsonEstimate(e *arrest.Estimate) jsonEstimate {
-	return jsonEstimate{
+	j := jsonEstimate{
 		Quantity: e.Quantity, Method: e.Method, Evidence: e.Evidence, Bound: text(e.Bound), Unit: siSymbol(e.Quantity),
 		Low: figure(e.Low), Value: figure(e.Value), High: figure(e.High), Reach: figure(e.Reach),
 		From: text(e.From), Outside: e.Outside,
-		Uses: each(e.Uses, func(i *int) string { return b.res().Inputs[*i].Key }),
+		Uses:      each(e.Uses, func(i *int) string { return b.res().Inputs[*i].Key }),
+		Allowance: figure(math.NaN()), ComparedLow: figure(math.NaN()), ComparedHigh: figure(math.NaN()),
+		Exhausted: e.Exhausted, BeyondModel: e.Beyond,
 	}
+	if widened(e) {
+		low, high := e.Ends()
+		j.Allowance, j.ComparedLow, j.ComparedHigh = figure(e.Allowance), figure(low), figure(high)
+	}
+	return j
 }
 
 func siSymbol(q arrest.Quantity) string {

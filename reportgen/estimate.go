@@ -1,6 +1,8 @@
 package reportgen
 
 import (
+	"strings"
+
 	"arrestcheck/arrest"
 	"arrestcheck/arrest/quantity"
 )
@@ -18,13 +20,13 @@ func isPeak(q arrest.Quantity) bool {
 func isMean(q arrest.Quantity) bool {
 	switch q {
 	case arrest.MeanForceOverDistance, arrest.MeanForceOverTime, arrest.MeanAboveLevel, arrest.MeanDeceleration,
-		arrest.StoppingForce, arrest.StoppingForceX, arrest.StoppingForceY, arrest.StoppingForceZ:
+		arrest.StoppingForce:
 		return true
 	}
 	return false
 }
 
-func isMotion(q arrest.Quantity) bool { return !isPeak(q) && !isMean(q) }
+func isMotion(q arrest.Quantity) bool { return !isPeak(q) && !isMean(q) && !isOfVector(q) }
 
 // estimateBlocks are a table of the estimates of some quantities, or the
 // paragraph none where there are no such estimates.
@@ -33,7 +35,7 @@ func (b *builder) estimateBlocks(none string, of func(arrest.Quantity) bool) []B
 	for i := range b.res().Estimates {
 		e := &b.res().Estimates[i]
 		if of(e.Quantity) {
-			t.Rows = append(t.Rows, Row{Cells: []string{title(e.Quantity), b.estimate(e, pageDigits), b.from(e)}})
+			t.Rows = append(t.Rows, Row{Cells: []string{b.title(e.Quantity), b.estimate(e, pageDigits), b.from(e)}})
 		}
 	}
 	switch {
@@ -46,7 +48,8 @@ func (b *builder) estimateBlocks(none string, of func(arrest.Quantity) bool) []B
 }
 
 // estimate returns the figure of an estimate with the word for its bound:
-// floors rounded down, ceilings up.
+// floors rounded down, ceilings up. A modelled figure stands as it is and with
+// the user's allowance.
 func (b *builder) estimate(e *arrest.Estimate, digits int) string {
 	rec, _ := e.Quantity.Record()
 	switch {
@@ -57,7 +60,28 @@ func (b *builder) estimate(e *arrest.Estimate, digits int) string {
 	case e.Bound == arrest.AtMost:
 		return boundWords[e.Bound] + " " + b.d.figureAs(rec.Dimension, e.Typed, e.High, digits, quantity.Up)
 	}
-	return b.d.span(rec.Dimension, e.Typed, e.Low, e.High, digits)
+	bare := b.d.span(rec.Dimension, e.Typed, e.Low, e.High, digits)
+	if !widened(e) {
+		return bare
+	}
+	low, high := e.Ends()
+	return b.say(withAllowance, bare, percent(e.Allowance), b.d.span(rec.Dimension, e.Typed, low, high, digits))
+}
+
+// widened reports whether the user's allowance is added to the estimate before
+// it is compared.
+func widened(e *arrest.Estimate) bool {
+	return e.Evidence == arrest.Modelled && isNumber(e.Allowance)
+}
+
+// percent returns a share in per cent with the digits of page 1, without zeros
+// that nobody wrote.
+func percent(share float64) string {
+	text := quantity.Number(share, mustUnit("%"), pageDigits, quantity.Nearest)
+	if strings.Contains(text, ".") {
+		text = strings.TrimRight(strings.TrimRight(text, "0"), ".")
+	}
+	return text + noBreak + "%"
 }
 
 // from says what an estimate rests on.
@@ -68,7 +92,7 @@ func (b *builder) from(e *arrest.Estimate) string {
 	case arrest.Rated:
 		return b.say(ratedRemark, e.From) + ", " + e.Method
 	case arrest.Modelled:
-		return modelRemark + ", " + e.Method
+		return b.fromModel(e)
 	case arrest.Measured:
 		return recordRemark + ", " + e.Method
 	}
@@ -76,7 +100,22 @@ func (b *builder) from(e *arrest.Estimate) string {
 	case e.Method == arrest.Entered:
 		return enteredRemark
 	case isMean(e.Quantity):
-		return entriesRemark + ", " + e.Method + ": " + floorRemark
+		return entriesRemark + b.route(e) + ", " + e.Method + ": " + floorRemark[b.sub]
 	}
 	return entriesRemark + ", " + e.Method
+}
+
+// fromModel adds what the model as a whole has to say of itself.
+func (b *builder) fromModel(e *arrest.Estimate) string {
+	text := modelRemark + ", " + e.Method
+	if isMean(e.Quantity) {
+		text += ": " + floorRemark[b.sub]
+	}
+	if e.Exhausted {
+		text += ", " + exhaustedRemark
+	}
+	if e.Beyond {
+		text += ", " + beyondRemark
+	}
+	return text
 }

@@ -100,7 +100,23 @@ func sheet(t testing.TB, name string) *Sheet {
 
 func worked(t testing.TB, name string, data []byte) *Sheet {
 	t.Helper()
-	file, err := jobfile.Read(name, data, os.DirFS(jobsFolder))
+	return workedIn(t, jobsFolder, name, data)
+}
+
+// workedWith works a job out with entries set on the command line, a key and
+// its figure each.
+func workedWith(t testing.TB, name string, data []byte, set ...string) *Sheet {
+	t.Helper()
+	return workedIn(t, jobsFolder, name, data, set...)
+}
+
+func workedIn(t testing.TB, folder, name string, data []byte, set ...string) *Sheet {
+	t.Helper()
+	var overrides []jobfile.Override
+	for i := 0; i < len(set); i += 2 {
+		overrides = append(overrides, jobfile.Override{Key: set[i], Value: set[i+1]})
+	}
+	file, err := jobfile.Read(name, data, os.DirFS(folder), overrides...)
 	if err != nil {
 		t.Fatal(err)
 	}

@@ -21,7 +21,8 @@ const goldenFolder = "../testdata/golden"
 //
 // and raise arrest.ModelVersion if a number of an unchanged job changed.
 func TestGolden(t *testing.T) {
-	expected := make(map[string]bool)
+	expected := map[string]bool{demoGolden: true}
+	golden(t, filepath.Join(goldenFolder, demoGolden), asMarkdown(t, demoSheet(t), MarkdownOptions{}))
 	for _, g := range []struct {
 		file, job string
 		write     func(*Sheet) string
@@ -31,6 +32,13 @@ func TestGolden(t *testing.T) {
 		{"bands-si.txt", "bands.toml", func(s *Sheet) string { return asText(t, s, SIUnits, TextOptions{}) }},
 		{"rated-too-far-us-ascii.txt", "rated-too-far.toml", func(s *Sheet) string { return asText(t, s, USUnits, TextOptions{ASCII: true}) }},
 		{"example-values-color.txt", "example-values.toml", func(s *Sheet) string { return asText(t, s, BothUnits, TextOptions{Color: true}) }},
+		{"path-exhausted.txt", "path-rope-absorber-40.toml", func(s *Sheet) string { return asText(t, s, BothUnits, TextOptions{}) }},
+		{"path-exhausted.json", "path-rope-absorber-40.toml", func(s *Sheet) string { return asJSON(t, s) }},
+		{"path-no-allowance.md", "path-no-allowance.toml", func(s *Sheet) string { return asMarkdown(t, s, MarkdownOptions{}) }},
+		{"load-swing.txt", "load-swing.toml", func(s *Sheet) string { return asText(t, s, BothUnits, TextOptions{}) }},
+		{"load-swing.json", "load-swing.toml", func(s *Sheet) string { return asJSON(t, s) }},
+		{"tool-tether-si.txt", "tool-tether.toml", func(s *Sheet) string { return asText(t, s, SIUnits, TextOptions{}) }},
+		{"explain-peak.txt", "feet-and-pounds.toml", func(s *Sheet) string { return explainText(t, s) }},
 		{"metric-settled.json", "metric-settled.toml", func(s *Sheet) string { return asJSON(t, s) }},
 		{"two-persons.json", "two-persons.toml", func(s *Sheet) string { return asJSON(t, s) }},
 	} {
@@ -46,6 +54,30 @@ func TestGolden(t *testing.T) {
 			t.Errorf("%s belongs to no test", path)
 		}
 	}
+}
+
+const demoGolden = "demo.md"
+
+// demoSheet works out the demo of the command.
+func demoSheet(t *testing.T) *Sheet {
+	t.Helper()
+	const folder = "../cmd/arrestcheck/demo"
+	data, err := os.ReadFile(filepath.Join(folder, "job.toml"))
+	if err != nil {
+		t.Fatal(err)
+	}
+	return workedIn(t, folder, "job.toml", data)
+}
+
+// explainText explains the first row of a sheet.
+func explainText(t *testing.T, s *Sheet) string {
+	t.Helper()
+	r, ok := Explain(s, s.Assessment.Findings[0].Limit.ID, BothUnits)
+	var b strings.Builder
+	if err := Text(&b, r, TextOptions{}); err != nil || !ok {
+		t.Fatal(err, ok)
+	}
+	return b.String()
 }
 
 func golden(t *testing.T, path, got string) {
@@ -71,7 +103,7 @@ func golden(t *testing.T, path, got string) {
 func TestReportsSayNoForbiddenWord(t *testing.T) {
 	for _, name := range jobNames(t) {
 		s := sheet(t, name)
-		for _, out := range []string{asText(t, s, BothUnits, TextOptions{}), asJSON(t, s)} {
+		for _, out := range []string{asText(t, s, BothUnits, TextOptions{}), asJSON(t, s), asMarkdown(t, s, MarkdownOptions{})} {
 			if w := forbidden.FindString(out); w != "" {
 				t.Errorf("%s: %q", name, w)
 			}

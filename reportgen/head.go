@@ -12,7 +12,7 @@ import (
 // head is what stands above the warnings.
 func (b *builder) head() []Block {
 	return append(append([]Block{{Text: notAPermission, Loud: true}}, b.banner()...),
-		Block{Lines: b.identity()},
+		Block{Lines: append(b.identity(), b.overrides()...)},
 		Block{Lines: b.coverage()},
 		Block{Lines: b.worst()},
 	)
@@ -28,10 +28,11 @@ func (b *builder) identity() []Line {
 		{Label: referenceLabel, Text: doc.Reference},
 		{Label: revisionLabel, Text: orNothing(doc.Revision)},
 		{Label: dateLabel, Text: doc.Date},
+		{Label: reviewLabel, Text: doc.ReviewDate},
 		{Label: sheetLabel, Text: b.say(sheetOf, strconv.Itoa(b.s.Number), strconv.Itoa(b.s.Of))},
-		{Label: datumLabel, Text: holdsFor},
+		{Label: datumLabel, Text: holdsFor[b.sub]},
 		{Label: systemLabel, Text: orNothing(doc.System)},
-		{Label: rescueLabel, Text: orNothing(doc.Rescue)},
+		{Label: rescueLabel, Text: b.rescue()},
 	}
 	kept := all[:0]
 	for _, l := range all {
@@ -40,6 +41,30 @@ func (b *builder) identity() []Line {
 		}
 	}
 	return kept
+}
+
+// overrides are the entries that were set on the command line: the job file
+// alone does not give this sheet.
+func (b *builder) overrides() []Line {
+	var list []Line
+	for i := range b.s.File.Overrides {
+		o := &b.s.File.Overrides[i]
+		text := b.say(setInPlace, o.Key, o.Value, o.Former)
+		if o.Former == "" {
+			text = b.say(setAnew, o.Key, o.Value)
+		}
+		list = append(list, Line{Label: setLabel, Text: text, Loud: true})
+	}
+	return list
+}
+
+// rescue is what is entered about it; where no person is part of the job, only
+// what somebody did enter.
+func (b *builder) rescue() string {
+	if b.sub != aPerson {
+		return b.s.File.Document.Rescue
+	}
+	return orNothing(b.s.File.Document.Rescue)
 }
 
 func orNothing(s string) string {
@@ -62,15 +87,25 @@ func (b *builder) coverage() []Line {
 	list := []Line{{Label: limitsLabel, Text: text, Loud: a.Counts()[limits.Exceeded] > 0}}
 	var missing []string
 	for _, e := range a.NotEntered {
-		missing = append(missing, expectedWord(e.Subject))
+		missing = append(missing, b.expected(e))
 	}
 	if len(missing) > 0 {
 		list = append(list, Line{Label: missingLabel, Text: strings.Join(missing, ", ")})
 	}
 	for _, e := range a.Elsewhere {
-		list = append(list, Line{Label: elsewhereLabel, Text: b.say(elsewhereLine, title(e.Quantity), e.Where)})
+		list = append(list, Line{Label: elsewhereLabel, Text: b.say(elsewhereLine, b.title(e.Quantity), e.Where)})
 	}
 	return list
+}
+
+// expected names a subject that limits are expected for.
+func (b *builder) expected(e limits.Expected) string {
+	if len(e.Quantities) > 0 && b.sub != aPerson {
+		if words, ok := titlesWithoutPersons[e.Quantities[0]]; ok {
+			return words
+		}
+	}
+	return expectedWord(e.Subject)
 }
 
 func expectedWord(subject string) string {
@@ -78,6 +113,14 @@ func expectedWord(subject string) string {
 		return words
 	}
 	return subject
+}
+
+// title returns what a quantity is called on a sheet about this subject.
+func (b *builder) title(q arrest.Quantity) string {
+	if words, ok := titlesWithoutPersons[q]; ok && b.sub != aPerson {
+		return words
+	}
+	return title(q)
 }
 
 func title(q arrest.Quantity) string {
@@ -97,7 +140,7 @@ func (b *builder) worst() []Line {
 	place := slices.Index(b.rowOrder(), worst)
 	f := &b.asd().Findings[worst]
 	demand, limit := b.demandAndLimit(f)
-	text := b.say(worstSentence, strconv.Itoa(place+1), outcomeWords[f.Outcome], title(f.Limit.Quantity), demand, limit, f.Limit.Authority)
+	text := b.say(worstSentence, strconv.Itoa(place+1), outcomeWords[f.Outcome], b.title(f.Limit.Quantity), demand, limit, f.Limit.Authority)
 	if len(f.Reasons) > 0 {
 		text = b.say(worstReason, text, b.reason(f, &f.Reasons[0]))
 	}
@@ -143,9 +186,21 @@ func (b *builder) outcome(f *limits.Finding) string {
 
 // reason puts a reason in words, its figures in the unit of the row.
 func (b *builder) reason(f *limits.Finding, r *limits.Reason) string {
+	return b.reasonOnRow(f, r, false)
+}
+
+// reasonOnRow is reason with the words for one that stands after others where
+// those differ.
+func (b *builder) reasonOnRow(f *limits.Finding, r *limits.Reason, further bool) string {
 	p, ok := reasons[r.ID]
-	if r.ID == limits.NotComputed && len(r.Args) > 0 {
+	if other, is := reasonsAtLeast[r.ID]; is && f.Limit.Sense == limits.AtLeast {
+		p = other
+	}
+	switch {
+	case r.ID == limits.NotComputed && len(r.Args) > 0:
 		p = untestedCondition
+	case r.ID == limits.AssumedShape && further:
+		p = shapeBeside
 	}
 	if !ok {
 		panic("reportgen: no words for the reason " + string(r.ID))

@@ -24,11 +24,14 @@ const JSONFormat = "arrestcheck result 1"
 // the value of a range), keys always in the same order. Characters without a
 // shape of their own are escaped, so that the line can go to a terminal; what
 // a reader decodes is the user's text untouched. The error is that of w.
-func JSON(w io.Writer, s *Sheet) error {
+func JSON(w io.Writer, s *Sheet) error { return encode(w, newDocument(s)) }
+
+// encode writes one JSON document on one line.
+func encode(w io.Writer, document any) error {
 	var b bytes.Buffer
 	e := json.NewEncoder(&b)
 	e.SetEscapeHTML(false)
-	if err := e.Encode(newDocument(s)); err != nil {
+	if err := e.Encode(document); err != nil {
 		panic("reportgen: json: " + err.Error()) // a struct of texts and numbers
 	}
 	_, err := io.WriteString(w, escapeJSON(b.String()))
@@ -80,6 +83,9 @@ type document struct {
 	Working       []jsonWorking  `json:"working"`
 	Cautions      []jsonCaution  `json:"cautions"`
 	NotChecked    []string       `json:"not_checked"`
+	ModelRuns     []jsonRun      `json:"model_runs"`
+	Vectors       []jsonVector   `json:"vectors"`
+	Overrides     []jsonOverride `json:"overrides"`
 }
 
 type jsonTool struct {
@@ -99,9 +105,11 @@ type jsonJob struct {
 	Rescue     *string `json:"rescue"`
 	PreparedBy *string `json:"prepared_by"`
 	CheckedBy  *string `json:"checked_by"`
+	ReviewDate *string `json:"review_date"`
 	Persons    int     `json:"persons"`
 	Example    bool    `json:"example"`
 	SHA256     *string `json:"sha256"`
+	Subject    string  `json:"subject"`
 }
 
 type jsonSet struct {
@@ -142,6 +150,14 @@ type jsonEstimate struct {
 	From     *string         `json:"from"`
 	Outside  bool            `json:"outside"`
 	Uses     []string        `json:"uses"`
+
+	// Of a modelled figure: the user's allowance, what is compared with it, and
+	// what keeps the model from being the whole story.
+	Allowance    figure `json:"allowance"`
+	ComparedLow  figure `json:"compared_low"`
+	ComparedHigh figure `json:"compared_high"`
+	Exhausted    bool   `json:"exhausted"`
+	BeyondModel  bool   `json:"beyond_model"`
 }
 
 type jsonFinding struct {

@@ -46,13 +46,21 @@ func (p phrase) fill(d display, typed quantity.Unit, args []arrest.Arg) string {
 func (d display) place(p phrase, name string, typed quantity.Unit, args []arrest.Arg, digits int) string {
 	if low, high, found := strings.Cut(name, " .. "); found {
 		a, b := args[p.index(low)], args[p.index(high)]
-		if a.Dimension == 0 || b.Dimension == 0 {
+		switch {
+		case a.Dimension != 0 && b == openEnd:
+			return d.span(a.Dimension, rowUnit(typed, a.Dimension), a.SI, math.Inf(1), digits)
+		case b.Dimension != 0 && a == openEnd:
+			return d.say(openBelow, d.argument(high, b, typed, digits))
+		case a.Dimension == 0 || b.Dimension == 0:
 			return d.argument(low, a, typed, digits) + " to " + d.argument(high, b, typed, digits)
 		}
 		return d.span(a.Dimension, rowUnit(typed, a.Dimension), a.SI, b.SI, digits)
 	}
 	return d.argument(name, args[p.index(name)], typed, digits)
 }
+
+// openEnd is the argument that stands where nothing bounds a figure.
+var openEnd = arrest.Text("open")
 
 func (p phrase) index(name string) int {
 	for i, arg := range p.args {
@@ -69,10 +77,17 @@ func (d display) argument(name string, a arrest.Arg, typed quantity.Unit, digits
 		if words, ok := idArguments[name][a.Text]; ok {
 			return words
 		}
-		return a.Text
+		return flat(a.Text)
+	}
+	if math.IsInf(a.SI, 1) {
+		return endlessFigure
 	}
 	return d.figureAs(a.Dimension, rowUnit(typed, a.Dimension), a.SI, digits, a.Rounding)
 }
+
+// flat returns a text of the user on one line: a line break in it must not make
+// a line of its own in a table.
+func flat(s string) string { return strings.ReplaceAll(s, "\n", " ") }
 
 // rowUnit returns typed if it is of the dimension, else no unit.
 func rowUnit(typed quantity.Unit, dim quantity.Dimension) quantity.Unit {

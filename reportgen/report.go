@@ -1,9 +1,11 @@
 // Package reportgen turns the results of a job into one report and writes it.
 //
-// Build makes a Report, plain data with every sentence and figure final; Text
-// writes it for a terminal or a file, 80 columns wide. JSON writes the same
-// results as data. Every sentence about a job is in wording.go and nowhere
-// else; the numbered ones, S-01 and up, are also in SAFETY.md.
+// Build makes a Report of a sheet, and Explain one of a single row: plain data
+// with every sentence and figure final. Text writes it for a terminal or a
+// file, 80 columns wide, Markdown for viewers of GitHub flavoured Markdown. JSON
+// writes the same results as data. Every sentence about a job is in the files
+// called wording and nowhere else; the numbered ones, S-01 and up, are also in
+// SAFETY.md.
 //
 // Build and the writers are pure: no clock, locale or environment, and the
 // same sheet gives the same bytes. The wording of sentences may change between
@@ -14,6 +16,7 @@ import (
 	"arrestcheck/arrest"
 	"arrestcheck/arrest/jobfile"
 	"arrestcheck/limits"
+	drawing "arrestcheck/reportgen/figure"
 )
 
 // UnitChoice says which units a report shows.
@@ -48,19 +51,25 @@ type Section struct {
 	Blocks  []Block
 }
 
-// A Block is a paragraph, labelled lines and a table, in that order, each of
-// which may be absent.
+// A Block is a paragraph, labelled lines, a table and a figure, in that order,
+// each of which may be absent.
 type Block struct {
-	Text  string // a paragraph, wrapped by the writer
-	Lines []Line
-	Table *Table
-	Loud  bool // the paragraph is printed so that it cannot be overlooked
+	Text   string // a paragraph, wrapped by the writer
+	Lines  []Line
+	Table  *Table
+	Figure *drawing.Scene
+	Loud   bool // the paragraph is printed so that it cannot be overlooked
+}
+
+func (b *Block) empty() bool {
+	return b.Text == "" && len(b.Lines) == 0 && b.Table == nil && b.Figure == nil
 }
 
 // A Line is a text with its label beside it; the text is wrapped under itself.
 type Line struct {
 	Label, Text string
-	Loud        bool
+	Loud        bool // the label stands out
+	Loudest     bool // label and text stand out from all others
 }
 
 // A Table is a table of final texts.

@@ -1,6 +1,7 @@
 package reportgen
 
 import (
+	"math"
 	"strconv"
 
 	"arrestcheck/arrest"
@@ -20,7 +21,7 @@ func (b *builder) limitBlocks() []Block {
 		demand, limit := b.demandAndLimit(f)
 		row := strconv.Itoa(place + 1)
 		t.Rows = append(t.Rows, Row{
-			Cells: []string{row, title(f.Limit.Quantity) + ":\n" + demand + b.share(f), limit + "\n" + f.Limit.Authority, b.outcome(f)},
+			Cells: []string{row, b.title(f.Limit.Quantity) + ":\n" + demand + b.share(f), limit + "\n" + flat(f.Limit.Authority), b.outcome(f)},
 			Loud:  f.Outcome == limits.Exceeded,
 		})
 		for _, text := range b.further(i) {
@@ -40,12 +41,12 @@ func (b *builder) limitBlocks() []Block {
 func (b *builder) further(finding int) []string {
 	f := &b.asd().Findings[finding]
 	var list []string
-	rest := f.Reasons
+	rest, further := f.Reasons, false
 	if len(rest) > 0 && f.Outcome != limits.Exceeded && f.Outcome != limits.Within {
-		rest = rest[1:]
+		rest, further = rest[1:], true
 	}
 	for i := range rest {
-		list = append(list, b.reason(f, &rest[i]))
+		list = append(list, b.reasonOnRow(f, &rest[i], further || i > 0))
 	}
 	if f.Limit.AnyOf != "" {
 		list = append(list, b.say(alternative, f.Limit.AnyOf, outcomeWords[b.groupOutcomes()[finding]]))
@@ -61,7 +62,7 @@ func (b *builder) demandAndLimit(f *limits.Finding) (demand, limit string) {
 	units := b.d.pair(rec.Dimension, typed.Unit, typed.High)
 	round := demandRounding(f.Bound)
 	digits := make(map[quantity.Unit]int, len(units))
-	limit = senseWords[f.Limit.Sense] + " " + typed.Text
+	limit = senseWords[f.Limit.Sense] + " " + flat(typed.Text)
 	for _, u := range units {
 		digits[u] = digitsBeside(f.Demand, typed.High, u, round)
 		if u != typed.Unit {
@@ -72,7 +73,7 @@ func (b *builder) demandAndLimit(f *limits.Finding) (demand, limit string) {
 		limit += ", " + b.say(alsoPrintedNote, f.Limit.AlsoPrinted.Text)
 	}
 	if !isNumber(f.Demand) {
-		return noFigure, limit
+		return b.noDemand(f), limit
 	}
 	low, high := b.ends(f)
 	demand = join(units, f.Demand, func(u quantity.Unit) string {
@@ -85,7 +86,32 @@ func (b *builder) demandAndLimit(f *limits.Finding) (demand, limit string) {
 	if words := boundWords[f.Bound]; words != "" {
 		demand = words + " " + demand
 	}
-	return demand, limit
+	return demand + b.byModel(f), limit
+}
+
+// noDemand says why a row has no figure of demand.
+func (b *builder) noDemand(f *limits.Finding) string {
+	for _, i := range f.Used {
+		if e := &b.res().Estimates[i]; e.Evidence == arrest.Modelled && math.IsInf(e.High, 1) {
+			return endlessModel
+		}
+	}
+	return noFigure
+}
+
+// byModel says whether a demand comes from the model, and with which
+// allowance.
+func (b *builder) byModel(f *limits.Finding) string {
+	if f.Bound == "" || len(f.Used) == 0 {
+		return ""
+	}
+	switch e := &b.res().Estimates[f.Used[0]]; {
+	case e.Evidence != arrest.Modelled:
+		return ""
+	case widened(e):
+		return ", " + b.say(allowanceNote, percent(e.Allowance))
+	}
+	return ", " + bareRemark
 }
 
 // share returns a line with the demand as a share of the limit, or nothing

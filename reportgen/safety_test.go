@@ -1,41 +1,69 @@
 package reportgen
 
 import (
+	"go/ast"
+	"go/token"
 	"io/fs"
 	"os"
 	"path/filepath"
 	"regexp"
-	"slices"
+	"strconv"
 	"strings"
 	"testing"
 )
 
-// allStatements are the numbered statements of wording.go.
-func allStatements() map[string]statement {
+// allStatements returns the numbered statements by number. They are read from
+// the sources, so that none is forgotten: a statement is a literal that begins
+// with its number, S-nn.
+func allStatements(t *testing.T) map[string]statement {
+	t.Helper()
+	weights := map[string]weight{"quiet": quiet, "loud": loud, "loudest": loudest}
 	list := make(map[string]statement)
-	for _, st := range []statement{
-		whoDecides, limitsAreTheUsers, notLookedAt, hanging, floorsNotPeaks, notThisStop,
-		measureFirst, outsideData, thisLayoutOnly, anchorAndLine, noRescueEntered,
-	} {
-		list[st.number] = st
-	}
-	for _, st := range ofWarnings {
-		list[st.number] = st
+	for _, f := range parsed(t, token.NewFileSet(), ".") {
+		ast.Inspect(f, func(n ast.Node) bool {
+			lit, ok := n.(*ast.CompositeLit)
+			if !ok || len(lit.Elts) != 3 || !statementNumber.MatchString(literalText(lit.Elts[0])) {
+				return true
+			}
+			number := literalText(lit.Elts[0])
+			if _, twice := list[number]; twice {
+				t.Errorf("%s stands for two statements", number)
+			}
+			name, named := lit.Elts[1].(*ast.Ident)
+			words, worded := lit.Elts[2].(*ast.CompositeLit)
+			if !named || !worded || len(words.Elts) != 2 {
+				t.Fatalf("%s is written in a way that is not known here", number)
+			}
+			list[number] = statement{number, weights[name.Name], phrase{text: literalText(words.Elts[1])}}
+			return true
+		})
 	}
 	return list
 }
 
-// No two statements share a number: the literal S-nn stands once each in
-// wording.go.
-func TestNumbersAreNotReused(t *testing.T) {
-	source, err := os.ReadFile("wording.go")
-	if err != nil {
-		t.Fatal(err)
+var statementNumber = regexp.MustCompile(`^S-\d\d$`)
+
+// literalText returns the text of a string literal, empty where it is none.
+func literalText(e ast.Expr) string {
+	lit, ok := e.(*ast.BasicLit)
+	if !ok || lit.Kind != token.STRING {
+		return ""
 	}
-	found := regexp.MustCompile(`"S-\d\d"`).FindAllString(string(source), -1)
-	slices.Sort(found)
-	if unique := slices.Compact(slices.Clone(found)); len(unique) != len(found) || len(found) != len(allStatements()) {
-		t.Errorf("%d numbers, %d different, %d statements", len(found), len(unique), len(allStatements()))
+	s, _ := strconv.Unquote(lit.Value)
+	return s
+}
+
+// The statements that are read from the sources are those that are printed, and
+// no number stands for two.
+func TestAllStatements(t *testing.T) {
+	list := allStatements(t)
+	for _, st := range ofWarnings {
+		if read := list[st.number]; read.text != st.text || read.weight != st.weight {
+			t.Errorf("%s is read as %+v", st.number, read)
+		}
+	}
+	if len(list) < 52 {
+		t.Errorf("only %d statements", len(list))
 	}
 }
 
@@ -46,11 +74,12 @@ func TestSafetyPage(t *testing.T) {
 	if err != nil {
 		t.Fatal(err)
 	}
+	all := allStatements(t)
 	entry := regexp.MustCompile(`(?m)^\*\*(S-\d\d)\*\* (.+)\n\n- Printed: .+\.\n- Louder: (.+)\.$`)
 	written := make(map[string]bool)
 	for _, m := range entry.FindAllStringSubmatch(string(page), -1) {
 		number, text, louder := m[1], m[2], m[3]
-		st, ok := allStatements()[number]
+		st, ok := all[number]
 		switch {
 		case !ok:
 			t.Errorf("%s is in SAFETY.md only", number)
@@ -58,12 +87,12 @@ func TestSafetyPage(t *testing.T) {
 			t.Errorf("%s stands twice in SAFETY.md", number)
 		case st.text != text:
 			t.Errorf("%s:\nSAFETY.md  %s\nprinted    %s", number, text, st.text)
-		case st.loud != strings.HasPrefix(louder, "always marked"):
-			t.Errorf("%s: loud %t, and SAFETY.md says %q", number, st.loud, louder)
+		case (st.weight > quiet) != strings.HasPrefix(louder, "always marked"):
+			t.Errorf("%s: weight %d, and SAFETY.md says %q", number, st.weight, louder)
 		}
 		written[number] = true
 	}
-	for number := range allStatements() {
+	for number := range all {
 		if !written[number] {
 			t.Errorf("%s is not in SAFETY.md", number)
 		}
@@ -83,7 +112,7 @@ func TestEveryStatementIsCited(t *testing.T) {
 		}
 		tests.Write(source)
 	}
-	for number := range allStatements() {
+	for number := range allStatements(t) {
 		if !strings.Contains(tests.String(), number) {
 			t.Errorf("no test cites %s", number)
 		}

@@ -1,7 +1,9 @@
 package reportgen
 
 import (
+	"slices"
 	"strconv"
+	"strings"
 
 	"arrestcheck/arrest"
 	"arrestcheck/arrest/quantity"
@@ -10,31 +12,25 @@ import (
 // A said is a statement with its figures in place.
 type said struct {
 	number, text string
-	loud         bool
+	weight       weight
 }
 
-// statements returns the cautions of a sheet in print order: what is loud and
-// about this job, what else is about this job, and the standing ones.
+// statements returns the cautions of a sheet in print order: the loudest, what
+// else is loud and about this job, what else is about this job, and the
+// standing ones.
 func (d display) statements(s *Sheet) []said {
-	var loud, plain []said
+	var all []said
+	sub := s.subject()
 	add := func(st statement, args ...arrest.Arg) {
-		one := said{st.number, st.fill(d, quantity.Unit{}, args), st.loud}
-		if st.loud {
-			loud = append(loud, one)
-			return
-		}
-		plain = append(plain, one)
+		st = sub.about(st)
+		all = append(all, said{st.number, st.fill(d, quantity.Unit{}, args), st.weight})
 	}
 	d.aboutJob(s, add)
-	for _, st := range [...]statement{whoDecides, limitsAreTheUsers, notLookedAt} {
+	for _, st := range slices.Concat([]statement{whoDecides, limitsAreTheUsers, notLookedAt}, layoutOnly[sub]) {
 		add(st)
 	}
-	if s.Result.Persons > 0 {
-		add(hanging)
-		add(thisLayoutOnly)
-		add(anchorAndLine)
-	}
-	return append(loud, plain...)
+	slices.SortStableFunc(all, func(a, b said) int { return int(b.weight) - int(a.weight) })
+	return all
 }
 
 // aboutJob adds the statements that this job calls for.
@@ -50,11 +46,18 @@ func (d display) aboutJob(s *Sheet, add func(statement, ...arrest.Arg)) {
 	if s.isExample() {
 		tell(arrest.ExampleValues)
 	}
+	if changed := s.File.Overrides; len(changed) > 0 {
+		keys := make([]string, len(changed))
+		for i := range changed {
+			keys[i] = changed[i].Key
+		}
+		add(setOutside, arrest.Text(strings.Join(keys, ", ")))
+	}
 	for _, w := range res.Warnings {
 		if w.ID == arrest.ExampleValues || w.ID == arrest.MeansAreNotPeaks {
 			continue
 		}
-		tell(w.ID, w.Args...)
+		tell(w.ID, d.arguments(s, w)...)
 	}
 	has := survey(res.Estimates)
 	if has.outside {
@@ -77,6 +80,17 @@ func (d display) aboutJob(s *Sheet, add func(statement, ...arrest.Arg)) {
 	}
 }
 
+// arguments returns those of a warning, with what the report adds to them.
+func (d display) arguments(s *Sheet, w arrest.Warning) []arrest.Arg {
+	switch w.ID {
+	case arrest.LedgersClose:
+		return []arrest.Arg{shareLeft(w.Args[0]), shareLeft(w.Args[1])}
+	case arrest.NoAllowanceEntered:
+		return publishedArguments()
+	}
+	return w.Args
+}
+
 // A content says what kinds of estimates a result holds.
 type content struct{ floor, mean, promised, outside bool }
 
@@ -92,15 +106,22 @@ func survey(estimates []arrest.Estimate) content {
 	return has
 }
 
-// lines makes the lines of "WARNING: read first". Loud ones carry a mark, so
-// that they stand out without colour too.
+// marks stand before the number of a statement, so that what is loud stands out
+// without colour too.
+var marks = [...]string{quiet: "", loud: "! ", loudest: "!! "}
+
+// lines makes the lines of "WARNING: read first", the numbers one below the
+// other.
 func lines(all []said) []Line {
+	widest := len(marks[loud])
+	for _, s := range all {
+		widest = max(widest, len(marks[s.weight]))
+	}
 	list := make([]Line, len(all))
 	for i, s := range all {
-		list[i] = Line{Label: "  " + s.number, Text: s.text, Loud: s.loud}
-		if s.loud {
-			list[i].Label = "! " + s.number
-		}
+		mark := marks[s.weight]
+		mark += strings.Repeat(" ", widest-len(mark))
+		list[i] = Line{Label: mark + s.number, Text: s.text, Loud: s.weight > quiet, Loudest: s.weight == loudest}
 	}
 	return list
 }

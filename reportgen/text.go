@@ -18,8 +18,10 @@ type TextOptions struct {
 func Text(w io.Writer, r Report, o TextOptions) error {
 	p := page{ascii: o.ASCII, paint: newPaint(o.Color)}
 	for i := range r.Head {
-		p.gap()
-		p.block(&r.Head[i])
+		if b := &r.Head[i]; !b.empty() {
+			p.gap()
+			p.block(b)
+		}
 	}
 	p.warnings(r.Warnings)
 	for i := range r.Sections {
@@ -99,6 +101,9 @@ func (p *page) block(b *Block) {
 	if b.Table != nil {
 		p.table(b.Table)
 	}
+	if b.Figure != nil {
+		p.out.Write(b.Figure.Characters(figureCells(p.ascii)))
+	}
 }
 
 // widestLabel is the width beyond which a label stands on a line of its own.
@@ -108,9 +113,11 @@ const widestLabel = 18
 func (p *page) lines(list []Line) {
 	column := 0
 	for i := range list {
-		if w := width(p.printable(list[i].Label)); w <= widestLabel {
-			column = max(column, w)
+		w := width(p.printable(list[i].Label))
+		if w > widestLabel {
+			w = 2 // on a line of its own, the text below it
 		}
+		column = max(column, w)
 	}
 	indent := ""
 	if column > 0 {
@@ -134,7 +141,7 @@ func (p *page) labelled(l *Line, indent string) {
 		lead = p.emphasis(label, l.Loud) + indent[width(label):]
 	}
 	for _, t := range text {
-		p.line(lead + t)
+		p.line(lead + p.emphasis(t, l.Loudest))
 		lead = indent
 	}
 }

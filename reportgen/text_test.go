@@ -22,6 +22,7 @@ var hostile = map[string]string{
 	"right-to-left": "\u202egnp.exe\u202c " + strings.Repeat("אבג ", 100) + "\u2067\u200f",
 	"escapes":       "\x1b[31mred\x1b[0m \x1b]8;;http://x\x1b\\link \u009b31m \a\b\v\f\x7f\x00",
 	"markup":        "<b>|`*_[x](y)&amp;</b> %s %d {key} {{.}} \\ \t",
+	"addresses":     "@here http://x.y www.x.y a@b.c mailto:a@b.c =1+1 1. - # > +",
 	"lines":         "one\ntwo\r\nthree\u2028four\u0085five",
 	"looks like":    "\nWARNING: read first\n1  exceeded",
 }
@@ -54,11 +55,29 @@ func defile(t *testing.T, s string) *Sheet {
 	return sh
 }
 
+// defilePath puts s into every place of a job with a connector path, and of an
+// override, that the fixture has not.
+func defilePath(t *testing.T, s string) *Sheet {
+	t.Helper()
+	sh := workedWith(t, "job.toml", []byte(pieces{rest: tailRope + tearAbsorber("0.40 m") + peakLimit}.toml()), "worker.mass", "101 kg")
+	plan := sh.File.Job.Point.Path
+	for i := range plan.Parts {
+		plan.Parts[i].Name = s
+	}
+	o := &sh.File.Overrides[0]
+	o.Value, o.Former = s, s
+	for i := range sh.Result.Inputs {
+		sh.Result.Inputs[i].Band.Text = s
+	}
+	return sh
+}
+
 func TestHostileText(t *testing.T) {
 	for name, s := range hostile {
 		for _, ascii := range []bool{false, true} {
-			out := asText(t, defile(t, s), BothUnits, TextOptions{ASCII: ascii})
-			checkLines(t, name, out, ascii)
+			for _, sh := range []*Sheet{defile(t, s), defilePath(t, s)} {
+				checkLines(t, name, asText(t, sh, BothUnits, TextOptions{ASCII: ascii}), ascii)
+			}
 		}
 	}
 }
@@ -66,9 +85,11 @@ func TestHostileText(t *testing.T) {
 // No user text can pretend to be a line of the program: line breaks in it do
 // not reach the left edge as lines of their own.
 func TestUserTextBreaksNoLine(t *testing.T) {
-	out := asText(t, defile(t, hostile["looks like"]), BothUnits, TextOptions{})
-	if n := strings.Count(out, "\n"+warningHeading+"\n"); n != 1 {
-		t.Errorf("%d headings of the warnings", n)
+	for _, sh := range []*Sheet{defile(t, hostile["looks like"]), defilePath(t, hostile["looks like"])} {
+		out := asText(t, sh, BothUnits, TextOptions{})
+		if n := strings.Count(out, "\n"+warningHeading+"\n"); n != 1 {
+			t.Errorf("%d headings of the warnings", n)
+		}
 	}
 }
 

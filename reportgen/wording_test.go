@@ -50,10 +50,11 @@ func TestNoForbiddenWord(t *testing.T) {
 	}
 }
 
-// Sentences are in wording.go: a literal elsewhere has fewer than four words.
+// Sentences are in the files named wording: a literal elsewhere has fewer than
+// four words. The schema describes the form of the JSON and no job.
 func TestSentencesAreInOnePlace(t *testing.T) {
 	eachLiteral(t, ".", func(where, s string) {
-		if strings.HasPrefix(where, "wording.go") || strings.HasPrefix(s, "reportgen: ") || strings.Contains(s, `json:"`) {
+		if strings.HasPrefix(where, "wording") || strings.HasPrefix(where, "schema.go") || strings.HasPrefix(s, "reportgen: ") || strings.Contains(s, `json:"`) {
 			return
 		}
 		if len(strings.Fields(s)) > 3 {
@@ -139,6 +140,10 @@ var warningArguments = map[arrest.WarningID]int{
 	arrest.RatedAgainstModel: 4, arrest.LedgersClose: 2, arrest.NoMiddle: 1,
 }
 
+// addedArguments counts what the report itself puts into the sentence of a
+// warning: what its comparison with published drops came to.
+var addedArguments = map[arrest.WarningID]int{arrest.NoAllowanceEntered: 4}
+
 func TestEveryWarningHasWords(t *testing.T) {
 	for _, id := range arrest.WarningIDs() {
 		want, counted := warningArguments[id]
@@ -147,7 +152,7 @@ func TestEveryWarningHasWords(t *testing.T) {
 			t.Errorf("%s: counted %t, worded %t", id, counted, ok)
 			continue
 		}
-		usesAll(t, string(id), st.phrase, want)
+		usesAll(t, string(id), st.phrase, want+addedArguments[id])
 	}
 }
 

@@ -111,7 +111,7 @@ func (b *builder) forgottenBlocks() []Block {
 		list = append(list,
 			Line{Label: right.Method, Text: b.say(wrongSum, rightSide(wrong.Formula), b.force(wrong.Result.SI), string(wrong.Corner)), Loud: true},
 			Line{Text: b.say(rightSum, rightSide(right.Formula), b.force(right.Result.SI))},
-			Line{Text: b.say(wrongBy, b.force(weight), share)})
+			Line{Text: b.say(wrongBy[b.sub], b.force(weight), share)})
 	}
 	if len(list) == 0 {
 		return nil

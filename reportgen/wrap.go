@@ -61,17 +61,27 @@ func words(s string) []string {
 	return strings.FieldsFunc(s, func(r rune) bool { return r == ' ' })
 }
 
-// split cuts a word into full lines of at most columns, as few as can be, and
-// the rest.
+// split cuts a word that is longer than a line into full lines of at most
+// columns, after a joint of a name or path where there is one, and the rest.
 func split(word string, columns int) (full []string, rest string) {
-	from, used := 0, 0
+	from, used, joint := 0, 0, 0
 	for i, r := range word {
 		w := runeWidth(r)
 		if used+w > columns && used > 0 {
-			full = append(full, word[from:i])
-			from, used = i, 0
+			cut := i
+			if joint > from {
+				cut = joint
+			}
+			full = append(full, word[from:cut])
+			from, used = cut, width(word[cut:i])
 		}
 		used += w
+		if strings.ContainsRune(joints, r) {
+			joint = i + 1
+		}
 	}
 	return full, word[from:]
 }
+
+// joints are where keys, paths and the like may be broken after.
+const joints = "._/-"

@@ -21,6 +21,8 @@ func TestWrap(t *testing.T) {
 		{"abcdefghij k", 4, []string{"abcd", "efgh", "ij k"}},
 		{"a 3.42" + noBreak + "kN", 7, []string{"a", "3.42" + noBreak + "kN"}},
 		{"安全安全", 5, []string{"安全", "安全"}}, // each takes two columns
+		{"moving_load.time", 12, []string{"moving_load.", "time"}},
+		{"a/bcdefghijkl", 6, []string{"a/", "bcdefg", "hijkl"}},
 		{"\u0301 a", 5, []string{"\u0301 a"}},
 	} {
 		if diff := cmp.Diff(c.out, wrap(c.in, c.columns)); diff != "" {
