@@ -59,6 +59,12 @@ type Estimate struct {
 	// share: NaN where none was entered and for all other evidence.
 	Allowance float64
 
+	// Harder is the upper end with every travel under a held force shortened by
+	// the allowance: where the model nearly uses a travel up, its error may use
+	// it up, and the stop then ends in the stiff parts. NaN where no travel comes
+	// near its end.
+	Harder float64
+
 	// Exhausted is true for a modelled figure when, somewhere in the entries, a
 	// travel is used up; Beyond when a loading curve is left, or a run ends in
 	// nothing or in a rigid stop.
@@ -70,12 +76,17 @@ type Estimate struct {
 }
 
 // Ends returns the figures that a limit is compared with: Low and High, for a
-// modelled estimate widened by the allowance where there is one.
+// modelled estimate widened by the allowance where there is one: on the figure
+// itself, and on the travel that was counted on.
 func (e *Estimate) Ends() (low, high float64) {
 	if e.Evidence != Modelled || math.IsNaN(e.Allowance) {
 		return e.Low, e.High
 	}
-	return e.Low - float64(e.Allowance*e.Low), e.High + float64(e.Allowance*e.High)
+	high = e.High
+	if e.Harder > high {
+		high = e.Harder
+	}
+	return e.Low - float64(e.Allowance*e.Low), high + float64(e.Allowance*high)
 }
 
 // Conditional reports whether the estimate holds only under an assumption of

@@ -13,6 +13,7 @@ type evaluation struct {
 	lo, hi  Case // every input at its low and at its high end
 	res     Result
 	spans   *spans
+	short   *spans             // of the path with its travels shortened by the allowance, when asked for
 	written Point              // at the figures as written, where they have middles
 	uses    [places][]int      // inputs by place
 	resting [1 << places][]int // inputs by set of places, made when first asked for
@@ -125,7 +126,7 @@ func (ev *evaluation) closedForms() {
 		if ev.allWritten(e.Uses) && !(stopped && ev.written.Impossible) {
 			e.Value = o.of(&ev.written)
 		}
-		e.Allowance = nan
+		e.Allowance, e.Harder = nan, nan
 		if o.evidence == Modelled {
 			ev.modelled(&e)
 		}
@@ -199,7 +200,7 @@ func (ev *evaluation) entered() {
 func (ev *evaluation) add(q Quantity, bound Bound, b *quantity.Band, input int) {
 	e := Estimate{
 		Quantity: q, Evidence: Given, Method: Entered, Bound: bound,
-		Low: b.Low, Value: b.Value, High: b.High, Reach: nan, Allowance: nan,
+		Low: b.Low, Value: b.Value, High: b.High, Reach: nan, Allowance: nan, Harder: nan,
 		Typed: b.Unit, Uses: []int{input},
 	}
 	if bound == AtMost {

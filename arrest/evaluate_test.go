@@ -273,6 +273,9 @@ func TestEveryWarningIsReached(t *testing.T) {
 			}
 		})
 	}
+	take(base, func(j *Job) {
+		withAllowance(t, onPath(t, j, FromLabel, absorber("4 kN", "0.60 m")), "25 %")
+	})
 	take(base, func(j *Job) { j.Notes = []Warning{{ID: Unusual}} })
 	for _, id := range WarningIDs() {
 		if !reached[id] {

@@ -67,13 +67,16 @@ func Series(c *Case) ([]connector.State, error) {
 
 // pathNotes are what the runs over the bands came to that no estimate tells.
 type pathNotes struct {
-	exhausted bool
-	part      int     // the part that is exhausted with the most energy left
-	left      float64 // that energy, J
-	peak      float64 // the peak then, N
-	rigid     bool    // a blow on something rigid, or nothing that stops the body
-	beyond    uint64  // parts that went beyond their last loading point
-	failed    error
+	exhausted      bool
+	part           int     // the part that is exhausted with the most energy left
+	left           float64 // that energy, J
+	peak           float64 // the peak then, N
+	rigid          bool    // a blow on something rigid, or nothing that stops the body
+	beyond         uint64  // parts that went beyond their last loading point
+	used           float64 // the greatest share of a travel that is used, 0..1
+	usedBy         int     // the part that uses it
+	usedUp, usedOf float64 // that travel and the most that the part has, m
+	failed         error
 }
 
 // note takes one run into the notes.
@@ -85,6 +88,12 @@ func (n *pathNotes) note(m *PathRun) {
 	r := &m.Run
 	n.rigid = n.rigid || r.Status == connector.Rigid || r.Status == connector.Endless
 	n.beyond |= r.BeyondPoints
+	for i := range r.Parts {
+		most := m.parts[i].Plateau.Travel
+		if share := r.Parts[i].Permanent / most; most > 0 && share > n.used {
+			n.used, n.usedBy, n.usedUp, n.usedOf = share, i, r.Parts[i].Permanent, most
+		}
+	}
 	if r.FirstExhausted >= 0 && (!n.exhausted || r.EnergyLeft > n.left) {
 		n.exhausted, n.part, n.left, n.peak = true, r.FirstExhausted, r.EnergyLeft, r.Peak
 	}

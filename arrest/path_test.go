@@ -192,3 +192,41 @@ func TestCheckNamesThePart(t *testing.T) {
 		t.Errorf("no part at all: %v", err)
 	}
 }
+
+// 0.5846 m of travel, 0.60 m at hand: within 25 % for the error of the model the
+// absorber may be used up, and the stop then ends in the rope; the greatest
+// figure compared is that of a travel shortened by the allowance.
+func TestExhaustedWithinTheAllowance(t *testing.T) {
+	for _, c := range []struct {
+		allowance string
+		want      bool
+	}{{"25 %", true}, {"4 %", true}, {"3 %", false}} {
+		res := Evaluate(withAllowance(t, onPath(t, fall100(t), FromLabel, ropePart, absorber("4 kN", "0.45 m")), c.allowance))
+		e := find(t, &res, PeakForce, Modelled)
+		if e.Exhausted || hasWarning(&res, PathExhausted) || hasWarning(&res, PathExhaustedInAllowance) != c.want {
+			t.Errorf("allowance %s: %+v", c.allowance, e)
+		}
+		if !c.want {
+			continue
+		}
+		short := fmt.Sprintf("%.12g m", 0.45/(1+e.Allowance))
+		alone := Evaluate(onPath(t, fall100(t), FromLabel, ropePart, absorber("4 kN", short)))
+		hard := find(t, &alone, PeakForce, Modelled).High
+		_, high := e.Ends()
+		near(t, "compared", high, hard*(1+e.Allowance), 1e-9)
+		if !(high > e.High*(1+e.Allowance)) {
+			t.Errorf("allowance %s: the shortened travel changes nothing", c.allowance)
+		}
+	}
+}
+
+// Where the peak is the same all over a band the longest stop is shown too.
+func TestLongestStopIsKept(t *testing.T) {
+	j := onPath(t, figures{mass: "80 kg .. 120 kg", fall: "1.0 m .. 1.8 m"}.job(t), FromLabel, absorber("4 kN", "2 m"))
+	res := Evaluate(j)
+	e := find(t, &res, StoppingDistance, Modelled)
+	last := res.Runs[len(res.Runs)-1]
+	if last.Corner != AtLongest || last.Run.StoppingDistance != e.High || last.Case.Mass != 120 || last.Case.FreeFall != 1.8 {
+		t.Errorf("%s: %g, want %g", last.Corner, last.Run.StoppingDistance, e.High)
+	}
+}

@@ -22,17 +22,42 @@ func (j *Job) AllowanceInput() *Input {
 // modelled adds to an estimate what belongs to the model as a whole.
 func (ev *evaluation) modelled(e *Estimate) {
 	n := &ev.spans.path
-	e.Exhausted = n.exhausted
+	e.Exhausted, e.Harder = n.exhausted, nan
 	e.Beyond = n.beyond != 0 || n.rigid
 	for i := range ev.job.Inputs {
 		if ev.job.Inputs[i].Role == OfModel {
 			e.Allowance = ev.job.Inputs[i].Band.High
+			e.Harder = ev.harder(e)
 			e.Uses = append(e.Uses[:len(e.Uses):len(e.Uses)], i)
 		}
 	}
 }
 
-// runs keeps the modelled arrest as written and at the greatest peak.
+// exhaustedInAllowance reports whether a travel that the model alone does not
+// use up may be used up within the user's allowance.
+func (ev *evaluation) exhaustedInAllowance() bool {
+	n, in := &ev.spans.path, ev.job.AllowanceInput()
+	return in != nil && !n.exhausted && n.used*(1+in.Band.High) > 1
+}
+
+// harder returns the upper end of a modelled estimate with every travel
+// shortened by the allowance, NaN where that changes nothing.
+func (ev *evaluation) harder(e *Estimate) float64 {
+	if !ev.exhaustedInAllowance() {
+		return nan
+	}
+	if ev.short == nil {
+		j := *ev.job
+		plan := *j.Point.Path
+		plan.shorter = 1 / (1 + ev.job.AllowanceInput().Band.High)
+		j.Point.Path = &plan
+		ev.short, _ = overCorners(&j)
+	}
+	return ev.short.of[indexOf(e.Quantity, Modelled)].high.value
+}
+
+// runs keeps the modelled arrest as written, at the greatest peak and at the
+// longest stop: the peak may be the same all over a band, and the room is not.
 func (ev *evaluation) runs() {
 	if ev.job.Point.Path == nil {
 		return
@@ -52,6 +77,10 @@ func (ev *evaluation) runs() {
 	if peak.known() && !(written && peak.low.value == peak.high.value) {
 		add(AtHigh, ev.spans.caseAt(peak.high))
 	}
+	long := &ev.spans.of[indexOf(StoppingDistance, Modelled)]
+	if long.known() && long.low.value != long.high.value && ev.spans.caseAt(long.high) != ev.spans.caseAt(peak.high) {
+		add(AtLongest, ev.spans.caseAt(long.high))
+	}
 }
 
 // warnPath says what the model has to say, the loudest first.
@@ -64,6 +93,10 @@ func (ev *evaluation) warnPath() {
 	if n.exhausted {
 		ev.tell(PathExhausted, Text(plan.Parts[n.part].Name),
 			Figure(quantity.Energy, n.left, quantity.Nearest), Figure(quantity.Force, n.peak, quantity.Nearest))
+	}
+	if ev.exhaustedInAllowance() {
+		needed := n.usedUp * (1 + ev.job.AllowanceInput().Band.High)
+		ev.tell(PathExhaustedInAllowance, Text(plan.Parts[n.usedBy].Name), Figure(quantity.Length, needed, quantity.Up), length(n.usedOf))
 	}
 	if n.rigid {
 		ev.tell(PathRigid)

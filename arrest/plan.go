@@ -46,14 +46,24 @@ type PlannedPart struct {
 
 // A PathPlan makes a connector path of the figures of a Case. It is never
 // changed once a job holds it.
-type PathPlan struct{ Parts []PlannedPart }
+type PathPlan struct {
+	Parts []PlannedPart
+
+	// shorter, when above 0, is the share of every travel under a held force
+	// that is counted on: less than 1 where the user's allowance takes the rest.
+	shorter float64
+}
 
 // fill makes the parts at one point. The travel before a retractable locks is
 // part of the free fall as entered, so that it is no slack here.
 func (pl *PathPlan) fill(c *Case, parts []connector.Part) []connector.Part {
 	parts = parts[:0]
 	for i := range pl.Parts {
-		parts = append(parts, pl.Parts[i].at(c))
+		p := pl.Parts[i].at(c)
+		if pl.shorter > 0 {
+			p.Plateau.Travel *= pl.shorter
+		}
+		parts = append(parts, p)
 	}
 	return parts
 }

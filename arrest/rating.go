@@ -20,7 +20,7 @@ func (ev *evaluation) rating(n int) {
 		}
 		e := Estimate{
 			Quantity: q, Evidence: Rated, Method: "M-09", Bound: AtMost,
-			Low: nan, Value: nan, High: b.High, Reach: nan, Allowance: nan,
+			Low: nan, Value: nan, High: b.High, Reach: nan, Allowance: nan, Harder: nan,
 			Typed: b.Unit, From: r.Document, Uses: uses, Outside: outside,
 		}
 		if outside {
@@ -82,7 +82,7 @@ func (ev *evaluation) ratedSeverity(r *Rating, uses []int) {
 	} {
 		ev.res.Estimates = append(ev.res.Estimates, Estimate{
 			Quantity: x.q, Evidence: Rated, Method: "M-08", Bound: AtMost,
-			Low: nan, Value: nan, High: x.v, Reach: nan, Allowance: nan, From: r.Document, Uses: uses,
+			Low: nan, Value: nan, High: x.v, Reach: nan, Allowance: nan, Harder: nan, From: r.Document, Uses: uses,
 		})
 	}
 }

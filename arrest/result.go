@@ -36,9 +36,10 @@ type Term struct {
 type Corner string
 
 const (
-	AtWritten Corner = "as written" // the middle figures, where all are written
-	AtLow     Corner = "low end"    // the least result the entries allow
-	AtHigh    Corner = "high end"   // the greatest
+	AtWritten Corner = "as written"   // the middle figures, where all are written
+	AtLow     Corner = "low end"      // the least result the entries allow
+	AtHigh    Corner = "high end"     // the greatest
+	AtLongest Corner = "longest stop" // of a ModelRun: the greatest stopping distance
 )
 
 // A WorkingLine is one formula with the figures put in and its result. The
@@ -70,7 +71,7 @@ type Result struct {
 	Warnings       []Warning
 	Working        []WorkingLine // empty until ShowWorking fills it
 	Contradictions []Contradiction
-	Runs           []ModelRun // of the connector path: as written, and at the greatest peak
+	Runs           []ModelRun // of the connector path: as written, at the greatest peak, at the longest stop
 	Persons        int
 	Example        bool
 }

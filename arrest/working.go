@@ -206,7 +206,13 @@ var passages = [...]passage{
 		{"M-06", "a = v/t", onlyTime},
 		{"M-06", "F_floor = m*(g + a)", falling},
 	}, 0},
-	{ForceOverWeight, Given, []line{{"M-08", "n = F_floor/W", nil}}, 0},
+	{ForceOverWeight, Given, []line{
+		{"M-06", "tau = (2*d - v*t)/(v + g*t)", shortStop},
+		{"M-06", "a = (v + g*tau)/(t - tau)", shortStop},
+		{"M-06", "a = v^2/(2*d)", overDistance},
+		{"M-06", "a = v/t", onlyTime},
+		{"M-08", "n = 1 + a/g", falling},
+	}, 0},
 	{PeakForce, Shape, []line{
 		{"M-07", "k = 1", shaped(Constant)},
 		{"M-07", "c = 1/2", shaped(Constant)},
