@@ -49,7 +49,7 @@ func (ev *evaluation) harder(e *Estimate) float64 {
 	if ev.short == nil {
 		j := *ev.job
 		plan := *j.Point.Path
-		plan.shorter = 1 / (1 + ev.job.AllowanceInput().Band.High)
+		plan.Shorter = 1 / (1 + ev.job.AllowanceInput().Band.High)
 		j.Point.Path = &plan
 		ev.short, _ = overCorners(&j)
 	}

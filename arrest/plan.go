@@ -49,9 +49,9 @@ type PlannedPart struct {
 type PathPlan struct {
 	Parts []PlannedPart
 
-	// shorter, when above 0, is the share of every travel under a held force
+	// Shorter, when above 0, is the share of every travel under a held force
 	// that is counted on: less than 1 where the user's allowance takes the rest.
-	shorter float64
+	Shorter float64
 }
 
 // fill makes the parts at one point. The travel before a retractable locks is
@@ -60,8 +60,8 @@ func (pl *PathPlan) fill(c *Case, parts []connector.Part) []connector.Part {
 	parts = parts[:0]
 	for i := range pl.Parts {
 		p := pl.Parts[i].at(c)
-		if pl.shorter > 0 {
-			p.Plateau.Travel *= pl.shorter
+		if pl.Shorter > 0 {
+			p.Plateau.Travel *= pl.Shorter
 		}
 		parts = append(parts, p)
 	}
