@@ -118,6 +118,15 @@ func TestFifthRoot(t *testing.T) {
 	}
 }
 
+// TestResize: the next step has the error that is wanted, with some reserve.
+func TestResize(t *testing.T) {
+	for err, want := range map[float64]float64{1: 0.9, 32: 0.45, 1. / 32: 1.8, 1e9: 0.2, 1e-4: 5, 0: 5} {
+		if got := resize(err); !closeTo(got, want, 2e-3) {
+			t.Errorf("error %g: step by %v, want %v", err, got, want)
+		}
+	}
+}
+
 // TestFirstZero finds zeros of quartics made of their zeros, also close
 // together, double, and at the ends.
 func TestFirstZero(t *testing.T) {

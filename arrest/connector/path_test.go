@@ -173,6 +173,10 @@ func TestBeyondPoints(t *testing.T) {
 	if r := one(t, fall18, Elastic(Webbing, 50000), rope); r.BeyondPoints != 2 || r.Peak <= 3000 {
 		t.Errorf("beyond points %b at a peak of %v, want part 2", r.BeyondPoints, r.Peak)
 	}
+	late := FromPoints([]Point{{0.3, 0}, {0.4, 1000}, {0.5, 3000}}, 0)
+	if r := one(t, Fall{Mass: 100, FreeFall: 0.5, Gravity: StandardGravity}, late); r.BeyondPoints != 1 || r.Peak <= 3000 || r.Parts[0].AtRest > 0.5 {
+		t.Errorf("after slack: beyond points %b at a peak of %v and a travel of %v", r.BeyondPoints, r.Peak, r.Parts[0].AtRest)
+	}
 	if r := one(t, Fall{Mass: 100, FreeFall: 0.01, Gravity: StandardGravity}, rope); r.BeyondPoints != 0 {
 		t.Errorf("beyond points %b at a peak of %v, want none", r.BeyondPoints, r.Peak)
 	}

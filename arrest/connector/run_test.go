@@ -106,6 +106,9 @@ func TestRebound(t *testing.T) {
 	lossy.Unloading = 30000
 	r := one(t, fall18, lossy)
 	for _, q := range []Result{elastic, r} {
+		if q.PeakTime != q.RestTime {
+			t.Errorf("the first of two equal peaks is at %v, not at %v", q.RestTime, q.PeakTime)
+		}
 		if !closeTo(q.SecondPeak, q.Peak, 1e-12) || q.Events.Slacks != 1 || q.Events.Tops != 1 {
 			t.Errorf("second peak %v after %v without a dashpot, %+v", q.SecondPeak, q.Peak, q.Events)
 		}

@@ -146,12 +146,12 @@ func (a *arc) early(t float64) moment {
 func (a *arc) overdamped(t float64) moment {
 	fast := a.sigma + a.root
 	slow := a.w2 / fast
-	x1, x2 := math.Expm1(-slow*t), math.Expm1(-fast*t)
+	e1, e2 := math.Exp(-slow*t), math.Exp(-fast*t)
 	h := t
 	if slow > 0 {
-		h = -x1 / slow
+		h = -math.Expm1(-slow*t) / slow
 	}
-	return moment{t, 1 + (x1+x2)/2, (x1 - x2) / (2 * a.root), (h + x2/fast) / (2 * a.root)}
+	return moment{t, (e1 + e2) / 2, (e1 - e2) / (2 * a.root), (h - (1-e2)/fast) / (2 * a.root)}
 }
 
 // at returns travel and speed at the moment b.
@@ -501,12 +501,12 @@ func (a *arc) topTime(st *stride) (moment, bool) {
 }
 
 // letsGo returns the first moment within (0, t] at which the force of an arc on
-// the way back is gone, that is the acceleration -g, or the moment t. It walks from turn to turn of
-// the force and looks at every one, so that no crossing is missed.
+// the way back is gone, that is the acceleration -g, or the moment t. The arc must
+// not go beyond a rest: then the force turns once at most, and it is looked at
+// before and after the turn, so that no crossing is missed.
 func (a *arc) letsGo(g, t float64) moment {
-	from, turn := 0.0, a.zero(a.j0, a.rj)
-	for {
-		to := min(turn, t)
+	from := 0.0
+	for _, to := range [...]float64{min(a.zero(a.j0, a.rj), t), t} {
 		if math.IsInf(to, 1) {
 			return moment{t: to}
 		}
@@ -518,11 +518,8 @@ func (a *arc) letsGo(g, t float64) moment {
 			return b
 		}
 		from = to
-		turn = math.Inf(1)
-		if a.d > 0 {
-			turn = from + math.Pi/a.root
-		}
 	}
+	panic("unreachable")
 }
 
 // gone returns the moment between the time lo and b, where the force is

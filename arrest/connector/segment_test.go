@@ -84,6 +84,47 @@ func (d dice) arcDamping() float64 {
 	return d.spread(0.01, 300)
 }
 
+// TestZero: what zero finds is a zero, and the first.
+func TestZero(t *testing.T) {
+	for i := range uint64(20000) {
+		d := newDice(43, i)
+		sigma := d.spread(0.01, 60)
+		w2 := sigma * sigma * d.spread(0.01, 100)
+		if d.chance(0.5) {
+			w2 = sigma * sigma * (1 + d.within(-1, 1)*d.spread(1e-9, 0.1))
+		}
+		a := newArc(1, 1, w2, sigma)
+		p, q := d.within(-9, 9), d.within(-900, 900)
+		at := a.zero(p, q)
+		if math.IsInf(at, 1) {
+			at = 9
+			if a.d > 0 {
+				t.Fatalf("%+v: no zero of %v C + %v S", a, p, q)
+			}
+		} else {
+			// A late zero lies where all has long decayed, and hangs on the last
+			// digits of D.
+			b := a.basis(at)
+			left, whole := p*b.e+q*b.s, math.Abs(p*b.e)+math.Abs(q*b.s)
+			if a.d > 0 {
+				whole += math.Abs(q) / a.root * math.Exp(-sigma*at)
+			}
+			if sigma*at < 20 && math.Abs(left) > 1e-13*(1+sigma*at)*(1+sigma*at)*whole {
+				t.Fatalf("%+v: %v C + %v S is %v of %v at %v", a, p, q, left, whole, at)
+			}
+		}
+		for j := 1; j < 10; j++ {
+			b := a.basis(at * float64(j) / 10)
+			if sigma*b.t > 20 {
+				break
+			}
+			if (p*b.e+q*b.s)*p <= 0 {
+				t.Fatalf("%+v: %v C + %v S has changed its sign before %v", a, p, q, at)
+			}
+		}
+	}
+}
+
 // TestMotion: every arc obeys its equation, at its beginning and further on, and
 // the work of its dashpot is the sum of the speed squared.
 func TestMotion(t *testing.T) {
