@@ -70,6 +70,10 @@ type Estimate struct {
 	// nothing or in a rigid stop.
 	Exhausted, Beyond bool
 
+	// Part is the number, from 1, of the connector part that the document of a
+	// rated estimate belongs to; 0 where it belongs to none.
+	Part int
+
 	// Outside is true for a rating some of whose conditions do not hold over
 	// the whole of the entries: then the figure is no number (all NaN).
 	Outside bool

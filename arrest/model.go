@@ -11,6 +11,7 @@ import (
 // the run did not come to it, +Inf where nothing stops the body.
 type PathRun struct {
 	Run        connector.Result
+	Absorber   float64 // deployed travel of the absorbers, m; NaN where the path has none
 	FallFactor float64 // free fall over the length of the parts that state one; NaN where none does
 	Failed     error   // a run that does not close: an internal error
 
@@ -35,6 +36,12 @@ func modelAt(c *Case, p *Point) {
 	}
 	fall := connector.Fall{Mass: p.TotalMass, FreeFall: c.FreeFall, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
 	m.Failed = connector.Run(&m.path, &fall, &m.Run)
+	m.Absorber = nan
+	for i := range m.parts {
+		if m.parts[i].Kind == connector.Absorber {
+			m.Absorber = m.Run.AbsorberTravel
+		}
+	}
 }
 
 // stopped returns x, or +Inf where the path never stops the body.
@@ -62,7 +69,11 @@ func Series(c *Case) ([]connector.State, error) {
 		return nil, p.Model.Failed
 	}
 	fall := connector.Fall{Mass: p.TotalMass, FreeFall: c.FreeFall, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
-	return connector.Trace(&p.Model.path, &fall, &p.Model.Run, nil)
+	series, err := connector.Trace(&p.Model.path, &fall, &p.Model.Run, nil)
+	for i := range series {
+		series[i].F = max(0, series[i].F) // the path never pushes; rounding may
+	}
+	return series, err
 }
 
 // pathNotes are what the runs over the bands came to that no estimate tells.
@@ -101,7 +112,10 @@ func (n *pathNotes) note(m *PathRun) {
 
 // searched are the modelled outputs whose ends are looked for between the
 // corners; every point tried widens all the others too.
-var searched = [...]Quantity{PeakForce, AbsorberTravel, StoppingDistance, StoppingTime, OnsetRate}
+var searched = [...]Quantity{
+	PeakForce, ForceOverWeight, PeakDeceleration, AbsorberTravel, StoppingDistance, DecelerationDistance,
+	StoppingTime, OnsetRate, MeanForceOverDistance, MeanForceOverTime, ShapeRatio,
+}
 
 const (
 	coarse = 8  // points tried along one input before the best is closed in on

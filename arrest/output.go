@@ -71,7 +71,7 @@ var outputs = [...]output{
 	{OnsetRate, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Onset) }, 0},
 	{StoppingDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.StoppingDistance) }, 0},
 	{DecelerationDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.DecelerationDistance) }, 0},
-	{AbsorberTravel, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.AbsorberTravel) }, 0},
+	{AbsorberTravel, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Absorber) }, 0},
 	{StoppingTime, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.StoppingTime) }, 0},
 	{MeanForceOverDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.MeanOverDistance) }, 0},
 	{MeanForceOverTime, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.MeanOverTime) }, 0},

@@ -21,7 +21,7 @@ func (ev *evaluation) rating(n int) {
 		e := Estimate{
 			Quantity: q, Evidence: Rated, Method: "M-09", Bound: AtMost,
 			Low: nan, Value: nan, High: b.High, Reach: nan, Allowance: nan, Harder: nan,
-			Typed: b.Unit, From: r.Document, Uses: uses, Outside: outside,
+			Typed: b.Unit, From: r.Document, Part: r.Part, Uses: uses, Outside: outside,
 		}
 		if outside {
 			e.High = nan

@@ -16,6 +16,15 @@ func words(id ReasonID, args ...string) Reason {
 	return reason
 }
 
+// addOnce adds a reason that does not stand in the list yet.
+func addOnce(list []Reason, reason Reason) []Reason {
+	same := func(o Reason) bool { return o.ID == reason.ID && slices.Equal(o.Args, reason.Args) }
+	if slices.ContainsFunc(list, same) {
+		return list
+	}
+	return append(list, reason)
+}
+
 // figure makes an argument of an SI figure, and "open" of a side on which
 // nothing bounds it.
 func figure(d quantity.Dimension, si float64, rounding quantity.Rounding) arrest.Arg {
@@ -56,7 +65,7 @@ func (r *row) pairReason() Reason {
 // against gives what speaks against a row being within although an estimate
 // would settle it.
 func (r *row) against() []Reason {
-	s, reasons := r.limit.Sense, slices.Clone(r.clash)
+	s, reasons := r.limit.Sense, slices.Concat(r.clash, r.partsOutside())
 	if r.goodEndInPair() {
 		reasons = append(reasons, r.pairReason())
 	}
@@ -151,4 +160,20 @@ func (r *row) pairDecides() bool {
 		return false
 	}
 	return r.goodEndInPair() || r.anySettles(laxly)
+}
+
+// partsOutside names the documents of parts of the path whose conditions do not
+// hold, where the row rests on the model of that path: what the model was made
+// of is then not known to be so.
+func (r *row) partsOutside() []Reason {
+	if !slices.ContainsFunc(r.facts, func(f fact) bool { return f.est.Evidence == arrest.Modelled }) {
+		return nil
+	}
+	var list []Reason
+	for i := range r.res.Estimates {
+		if e := &r.res.Estimates[i]; e.Outside && e.Part > 0 {
+			list = addOnce(list, words(OutsideRating, e.From))
+		}
+	}
+	return list
 }

@@ -48,10 +48,43 @@ func (r *row) gather(set *Set, l *Limit) {
 	}
 	for _, c := range r.res.Contradictions {
 		a, b := &r.res.Estimates[c.A], &r.res.Estimates[c.B]
-		if r.decides(a) && r.decides(b) {
-			r.clash = append(r.clash, words(Contradicted, string(a.Evidence), string(b.Evidence)))
+		if r.decides(a) && r.decides(b) || r.tainted(a) || r.tainted(b) {
+			r.clash = addOnce(r.clash, words(Contradicted, string(a.Evidence), string(b.Evidence)))
 		}
 	}
+}
+
+// tainted reports whether a figure of the row comes from the same source as one
+// that a contradiction touches, whatever its quantity: the same model, the same
+// document, the same entry about the stop. One of the two is wrong, and nobody
+// knows which: neither puts any row within.
+func (r *row) tainted(by *arrest.Estimate) bool {
+	for i := range r.res.Estimates {
+		e := &r.res.Estimates[i]
+		if e.Quantity != r.limit.Quantity || e.Evidence != by.Evidence {
+			continue
+		}
+		switch e.Evidence {
+		case arrest.Modelled:
+			return true
+		case arrest.Rated:
+			if e.From == by.From {
+				return true
+			}
+		case arrest.Given:
+			if r.sharesStop(e, by) {
+				return true
+			}
+		}
+	}
+	return false
+}
+
+// sharesStop reports whether two estimates rest on one entry about the stop.
+func (r *row) sharesStop(a, b *arrest.Estimate) bool {
+	return slices.ContainsFunc(a.Uses, func(i int) bool {
+		return r.res.Inputs[i].Role == arrest.OfStop && slices.Contains(b.Uses, i)
+	})
 }
 
 func (r *row) decides(e *arrest.Estimate) bool {

@@ -34,7 +34,10 @@ func (r *row) weigh(testedWith []int) verdict {
 	if len(reasons) == 0 {
 		return verdict{Within, r.outsideReasons(), g}
 	}
-	return verdict{Undecided, slices.Concat(reasons, r.outsideReasons(), r.assumedReasons()), g}
+	for _, reason := range r.outsideReasons() {
+		reasons = addOnce(reasons, reason)
+	}
+	return verdict{Undecided, slices.Concat(reasons, r.assumedReasons()), g}
 }
 
 // exceeding returns the estimate that shows the limit exceeded and prints the
