@@ -169,31 +169,50 @@ func (w *walkPath) try(in *Input, x float64) float64 {
 	return y
 }
 
-// along sets one input to where the function is least.
+// along sets one input to where the function is least. The golden section is
+// spared where the least lies at an end and the function still rises half a
+// step away from it.
 func (w *walkPath) along(in *Input) {
 	lo, hi := in.Band.Low, in.Band.High
-	best, least := 0, math.Inf(1)
-	for k := 0; k <= coarse; k++ {
-		if y := w.try(in, lo+(hi-lo)*float64(k)/coarse); y < least {
-			best, least = k, y
-		}
-	}
 	step := (hi - lo) / coarse
-	a, b := max(lo, lo+float64(best-1)*step), min(hi, lo+float64(best+1)*step)
-	const ratio = 0.6180339887498949 // of the golden section
-	for range fine {
-		x, y := b-ratio*(b-a), a+ratio*(b-a)
-		if w.try(in, x) < w.try(in, y) {
-			b = y
-		} else {
-			a = x
+	best, least := lo, math.Inf(1)
+	for k := range coarse + 1 {
+		x := min(hi, lo+float64(k)*step)
+		if y := w.try(in, x); y < least {
+			best, least = x, y
 		}
 	}
-	at := lo + (hi-lo)*float64(best)/coarse
-	if w.try(in, (a+b)/2) < least {
-		at = (a + b) / 2
+	a, b := max(lo, best-step), min(hi, best+step)
+	if a == best && w.try(in, best+step/2) >= least || b == best && w.try(in, best-step/2) >= least {
+		in.Set(&w.at, best)
+		return
 	}
-	in.Set(&w.at, at)
+	if x, y := w.golden(in, a, b); y < least {
+		best = x
+	}
+	in.Set(&w.at, best)
+}
+
+// golden closes in on the least of the function between a and b.
+func (w *walkPath) golden(in *Input, a, b float64) (x, y float64) {
+	const ratio = 0.6180339887498949
+	left, right := b-ratio*(b-a), a+ratio*(b-a)
+	yl, yr := w.try(in, left), w.try(in, right)
+	for range fine {
+		if yl < yr {
+			b, right, yr = right, left, yl
+			left = b - ratio*(b-a)
+			yl = w.try(in, left)
+		} else {
+			a, left, yl = left, right, yr
+			right = a + ratio*(b-a)
+			yr = w.try(in, right)
+		}
+	}
+	if yl < yr {
+		return left, yl
+	}
+	return right, yr
 }
 
 // beyondNames lists the parts whose bits are set.

@@ -4,7 +4,6 @@ import (
 	"errors"
 	"fmt"
 	"strconv"
-	"strings"
 
 	"arrestcheck/arrest"
 	"arrestcheck/arrest/connector"
@@ -78,10 +77,7 @@ func (p *connection) called(list []*table) {
 			number[name]++
 			p.names[i] += " " + strconv.Itoa(number[name])
 		}
-		if written, is := s.keys["name"].(string); is && strings.TrimSpace(written) == "" {
-			s.fault("name", "", "nothing is written in it", s.group.named["name"].hint())
-		}
-		if strings.TrimSpace(name) == "" {
+		if name == "" {
 			continue
 		}
 		if before, known := first[p.names[i]]; known {
@@ -283,7 +279,7 @@ func (in *inputs) checkPath(list []*table) {
 func (in *inputs) partNamed(t *table) int {
 	const name = "part"
 	word := t.text(name)
-	if _, isText := t.keys[name].(string); !isText {
+	if word == "" {
 		return 0
 	}
 	if in.path == nil {

@@ -153,7 +153,7 @@ func TestExamplesAreCapped(t *testing.T) {
 	schema := compiled(t, "limits")
 	for _, name := range jobfile.Examples() {
 		text, set := exampleSet(t, name)
-		if !set.Example || set.CheckedOn != "" || !strings.Contains(text, "\nchecked_on   = \"\"\n") || set.Title == "" || set.Jurisdiction == "" {
+		if !set.Example || set.CheckedOn != "" || !strings.Contains(text, "\n#checked_on  = \"\"\n") || set.Title == "" || set.Jurisdiction == "" {
 			t.Errorf("%s: %+v", name, set)
 		}
 		if _, err := held(schema, []byte(text)); err != nil {

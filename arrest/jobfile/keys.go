@@ -98,6 +98,7 @@ type Key struct {
 	Usual      Span // common practice: outside it a note, no fault
 	Possible   Span // of a Quantity, Velocity or Integer; outside it the figure is refused
 
+	Dated    bool      // of a Text: a date, with a year of four digits in it
 	Choices  []string  // of a Choice
 	Variants []Variant // of a Choice that decides over other keys: one for each word, in their order
 

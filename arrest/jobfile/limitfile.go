@@ -63,7 +63,7 @@ func (t *table) file(key string, v any) (f limitFile, given bool) {
 	case map[string]any:
 		in := t.page.open("limits", key, v)
 		f = limitFile{name: in.text("file"), key: key + ".file", pin: in.pin(), pins: key + ".sha256"}
-		if !in.has("file") {
+		if f.name == "" {
 			return f, false
 		}
 	default:
@@ -81,7 +81,7 @@ func (t *table) file(key string, v any) (f limitFile, given bool) {
 func (t *table) pin() string {
 	const name = "sha256"
 	text := t.text(name)
-	if !t.has(name) {
+	if text == "" {
 		return ""
 	}
 	low := strings.ToLower(text)

@@ -105,10 +105,38 @@ func (pg *page) readable() bool {
 	case crowded(pg.data):
 		pg.whole(0, "", "the file is nested too deeply to be a job or a limit set",
 			"write: sections, keys and one inline table for a figure, as in "+exampleLine)
+	case overfull(pg.data):
+		pg.whole(0, "", fmt.Sprintf("the file has more than %d sections or %d keys", mostSections, mostKeys),
+			"write: one job, or the limits of one document, in a file of its own")
 	default:
 		return true
 	}
 	return false
+}
+
+// No job and no limit set of one document comes near these: beyond them nobody
+// reads the report, and the faults of a spoiled file would fill hours.
+const (
+	mostSections = 400
+	mostKeys     = 6000
+)
+
+// overfull reports whether a file has more sections or keys than anybody can
+// read, by the lines that begin with a bracket and by the equal signs.
+func overfull(data []byte) bool {
+	if bytes.Count(data, []byte("=")) > mostKeys {
+		return true
+	}
+	if bytes.Count(data, []byte("[")) <= mostSections {
+		return false
+	}
+	sections := 0
+	for line := range bytes.Lines(data) {
+		if bytes.HasPrefix(bytes.TrimLeft(line, " \t"), []byte("[")) {
+			sections++
+		}
+	}
+	return sections > mostSections
 }
 
 // invalid returns the place of the first byte that is not UTF-8, or -1.

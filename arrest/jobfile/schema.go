@@ -160,12 +160,12 @@ func choiceOf(k *Key) keywords {
 	return keywords{"enum": k.Choices}
 }
 
-// textOf is text; where it is required something has to stand in it.
+// textOf is text with something in it, in a date a year.
 func textOf(k *Key) keywords {
-	if k.Required {
-		return keywords{"type": "string", "pattern": `\S`}
+	if k.Dated {
+		return keywords{"type": "string", "pattern": yearPattern}
 	}
-	return keywords{"type": "string"}
+	return keywords{"type": "string", "pattern": `\S`}
 }
 
 // files is the list of limit files, each a name or a table.

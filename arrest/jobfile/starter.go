@@ -25,6 +25,7 @@ type shownSection struct {
 	off     bool              // may be left out: all of it stands behind #
 	brief   bool              // shown before: without help, and without what may be left out
 	instead map[string]string // right sides in place of the examples
+	remark  map[string]string // what is said of a key beside its help
 	also    []string          // keys that are written although they may be left out
 }
 
@@ -37,7 +38,7 @@ var starters = []starter{
 		{name: "document", instead: map[string]string{
 			"title": `"Trolley on its end stop"`, "purpose": `"choice of the bumper"`, "system": `"two bumpers at the end of the track"`}},
 		{name: "moving_load", also: []string{"driving_force"}},
-		{name: "limit", instead: map[string]string{
+		{name: "limit", remark: map[string]string{"quantity": meanRemark}, instead: map[string]string{
 			"id": `"end-stop"`, "quantity": `"stopping_force"`, "at_most": `"6 kN"`, "also_printed": `"1350 lbf"`,
 			"kind": `"structure"`, "authority": `"drawing of the end stop, note 4"`, "applies_when": `"both bumpers in place"`}},
 		{name: "elsewhere", off: true, instead: map[string]string{
@@ -96,8 +97,9 @@ const decides = "This sheet is arithmetic on the figures that were entered. It d
 const (
 	stamp = "Every figure and word in it is an example. Put in your own, and take out the line example = true last: " +
 		"as long as it stands, the report says EXAMPLE VALUES and no limit comes out as within."
-	howToRead = "A line with # and a space explains the key below it. A line with # and no space is a key that may be left out: take the # away to use it."
-	sources   = "A figure may stand with its source and a note, { value = ..., source = ..., note = ... }:"
+	meanRemark = "stopping_force is a mean over the stop, and the peak lies above it: a limit that is written for a peak belongs to peak_force."
+	howToRead  = "A line with # and a space explains the key below it. A line with # and no space is a key that may be left out: take the # away to use it."
+	sources    = "A figure may stand with its source and a note, { value = ..., source = ..., note = ... }:"
 )
 
 // width is the greatest width of a line of comment.
@@ -172,6 +174,9 @@ func (w *starterWriter) keys(g *group, s *shownSection) {
 		default:
 			w.WriteString("\n")
 			w.comment(g.explained(k))
+			if words, is := s.remark[k.Name]; is {
+				w.comment(words)
+			}
 			w.line(s.typed(k), off)
 		}
 	}

@@ -262,3 +262,12 @@ func has(section, name string) bool {
 			k.Section == "" && k.Name == section && len(k.AnyOf) > 0 && k.AnyOf[0] == name
 	})
 }
+
+// Whoever limits the mean stopping force is told that it is no peak.
+func TestStarterOfALoadTellsMeanFromPeak(t *testing.T) {
+	text := strings.Join(strings.Fields(strings.ReplaceAll(starter(t, "moving-load"), "\n#", " ")), " ")
+	i := strings.Index(text, "stopping_force is a mean over the stop, and the peak lies above it: a limit that is written for a peak belongs to peak_force.")
+	if j := strings.Index(text, `quantity = "stopping_force"`); i < 0 || j < i {
+		t.Errorf("the remark stands at %d, the key at %d", i, j)
+	}
+}

@@ -2,6 +2,7 @@ package jobfile
 
 import (
 	"fmt"
+	"regexp"
 	"slices"
 	"strconv"
 	"strings"
@@ -79,12 +80,35 @@ func (t *table) text(name string) string {
 		return ""
 	}
 	s, isText := v.(string)
-	if !isText {
+	switch {
+	case !isText:
 		t.wrongKind(k, v)
-	} else if k.Required && strings.TrimSpace(s) == "" {
-		t.fault(name, "", "nothing is written in it: "+k.Help, k.hint())
+	case strings.TrimSpace(s) == "":
+		hint := k.hint()
+		if !k.Required {
+			hint = "take out: " + t.key(name) + or + "write: what is so here, in the form of " + k.line()
+		}
+		t.fault(name, "", "nothing is written in it: "+k.Help, hint)
+		return ""
+	case k.Dated && !year.MatchString(s):
+		t.fault(name, s, "this is no date: it holds no year of four digits",
+			"take out: "+t.key(name)+", "+k.undated()+or+"write: the day, with its year, in the form of "+k.line())
+		return ""
 	}
 	return s
+}
+
+// year finds a year of four digits.
+var year = regexp.MustCompile(yearPattern)
+
+const yearPattern = `(?:^|[^0-9])[0-9]{4}(?:[^0-9]|$)`
+
+// undated says when a date is left out.
+func (k *Key) undated() string {
+	if k.Name == "superseded_on" {
+		return "as long as the limit holds"
+	}
+	return "until somebody has checked"
 }
 
 // choice returns one word of the closed set, empty where none is written or it

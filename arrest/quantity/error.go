@@ -17,6 +17,10 @@ type Error struct {
 	// was written can be meant in two ways. It is what was written, put right,
 	// where that can be guessed, else a figure of the dimension.
 	Example string
+	// Rough is true where the text says that the figure is rough, and not how
+	// rough. Example is then the figure alone: its tolerance is for the user to
+	// measure, and none is made up.
+	Rough bool
 }
 
 // Error returns the text, quoted and shortened, and the reason.
@@ -47,6 +51,8 @@ type fault struct {
 	better []string
 	// span asks for a range where an example of the dimension is shown.
 	span bool
+	// rough says that a tolerance is missing that nobody else can know.
+	rough bool
 	// readings asks for the examples behind the reason.
 	readings bool
 }
@@ -56,7 +62,7 @@ type fault struct {
 // person sees a range.
 func explain(d Dimension, text string, f *fault) *Error {
 	f = recognised(d, text, f)
-	e := &Error{Text: text, Reason: f.reason, Example: f.example(d, 0)}
+	e := &Error{Text: text, Reason: f.reason, Example: f.example(d, 0), Rough: f.rough}
 	if f.readings && strings.Contains(e.Example, either) {
 		e.Reason += ": " + e.Example
 	}

@@ -225,8 +225,9 @@ func approximate(_ Dimension, text string) *fault {
 		"circa ", "ca. ", "ca ", "some "} {
 		if rest, ok := after(text, word); ok {
 			return &fault{
-				reason: quoted(strings.TrimSpace(word)) + " does not say how far off the figure may be; write its tolerance, such as 10 %, or a range",
-				better: []string{rest + " ± 10 %"},
+				reason: quoted(strings.TrimSpace(word)) + " does not say how far off the figure may be; measure it, and write it with your own measured tolerance, or as a range",
+				better: []string{rest},
+				rough:  true,
 			}
 		}
 	}

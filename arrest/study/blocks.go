@@ -10,6 +10,18 @@ import (
 // within a block does not depend on who works on it or when.
 const blockSize = 4096
 
+// dearBlock is blockSize where a point is a whole check, which takes
+// milliseconds over a connector path.
+const dearBlock = 8
+
+// pointsAtOnce returns how many points of a probe a worker takes at a time.
+func pointsAtOnce(p probe) int {
+	if _, dear := p.(*checks); dear {
+		return dearBlock
+	}
+	return blockSize
+}
+
 // blocks calls work for every block of n points, on the given number of
 // workers (below 1: one). begin is called once for each worker and returns its
 // work. The error is that of the context.

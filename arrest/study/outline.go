@@ -66,6 +66,7 @@ func (o *outline) evaluate() error {
 	const size = 16
 	n := len(o.Across.Values)
 	got := make([]string, len(o.wave))
+	tell := progress(o.ctx)
 	err := blocks(o.ctx, len(o.wave), size, o.workers, func() func(int, int, int) {
 		t := o.trial()
 		return func(_, from, to int) {
@@ -73,6 +74,7 @@ func (o *outline) evaluate() error {
 				p := o.wave[i]
 				got[i] = o.check(t, o.Across.Values[p%n], o.Up.Values[p/n])
 			}
+			tell(to - from)
 		}
 	})
 	if err != nil {

@@ -158,7 +158,8 @@ func (s *Swept) fill(ctx context.Context, workers int) error {
 		}
 	}
 	var note sync.Mutex
-	err := blocks(ctx, n, blockSize, workers, func() func(int, int, int) {
+	tell := progress(ctx)
+	err := blocks(ctx, n, pointsAtOnce(s.probe()), workers, func() func(int, int, int) {
 		p := s.probe()
 		to, x := make([]arrest.Ends, len(s.Series)), make([]float64, len(s.Axes))
 		return func(_, from, until int) {
@@ -167,6 +168,7 @@ func (s *Swept) fill(ctx context.Context, workers int) error {
 				s.Impossible[i] = !p.At(x, to)
 				s.store(i, to, exact)
 			}
+			tell(until - from)
 			note.Lock()
 			defer note.Unlock()
 			for k := range s.Series {
