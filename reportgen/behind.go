@@ -10,7 +10,8 @@ import (
 
 // behind is what page 1 rests on.
 func (b *builder) behind() []Section {
-	sections := []Section{{Heading: behindHeading}, {inputsHeading, []Block{{Table: b.inputTable()}}}}
+	sections := append([]Section{{Heading: behindHeading}}, b.longTexts()...)
+	sections = append(sections, Section{inputsHeading, []Block{{Table: b.inputTable()}}})
 	sections = append(append(sections, b.pathSections()...), b.comparedSection(false)...)
 	if len(b.asd().Findings) > 0 {
 		sections = append(sections, Section{limitTextsHeading, b.limitTexts()})
@@ -22,6 +23,7 @@ func (b *builder) behind() []Section {
 	if wrong := b.forgottenBlocks(); len(wrong) > 0 {
 		sections = append(sections, Section{forgottenHeading[b.sub], wrong})
 	}
+	sections = append(sections, b.sensitivitySections()...)
 	return append(sections,
 		Section{notCheckedHeading, []Block{{Lines: bullets(notChecked[b.sub])}}},
 		Section{referencesHeading, []Block{{Lines: b.references()}}},
@@ -223,8 +225,9 @@ func (b *builder) references() []Line {
 	for i := range b.res().Working {
 		used[b.res().Working[i].Method] = true
 	}
+	used[measuringMethod] = b.s.File.Job.Point.Path == nil && b.anyBand()
 	var list []Line
-	for _, m := range arrest.Methods() {
+	for _, m := range everyMethod() {
 		if used[m.ID] {
 			list = append(list, Line{Label: m.ID, Text: m.Title + ". " + sourceWord + ": " + m.Source + "."})
 		}

@@ -113,7 +113,7 @@ func (b *builder) nameBlocks() []Block {
 	doc := &b.s.File.Document
 	for _, l := range []Line{{Label: preparedLabel, Text: doc.PreparedBy}, {Label: checkedLabel, Text: doc.CheckedBy}} {
 		if l.Text != "" {
-			l.Text += " (" + namedInFile + ")"
+			l.Text = quote(l.Text) + " (" + namedInFile + ")"
 			named = append(named, l)
 		}
 	}

@@ -14,15 +14,10 @@ func newDocument(s *Sheet) document {
 	b := newBuilder(s, SIUnits)
 	n := s.Assessment.Counts()
 	return document{
-		Format: JSONFormat,
-		Tool:   jsonTool{s.Tool, arrest.ModelVersion},
-		Job:    b.jsonJob(),
-		LimitSets: each(s.File.Sets, func(set *limits.Set) jsonSet {
-			return jsonSet{
-				text(set.Name), text(set.Title), text(set.Jurisdiction), text(set.EnteredBy), text(set.EnteredOn),
-				text(set.CheckedOn), text(set.Note), set.Example, text(set.SHA256),
-			}
-		}),
+		Format:        JSONFormat,
+		Tool:          jsonTool{s.Tool, arrest.ModelVersion},
+		Job:           b.jsonJob(),
+		LimitSets:     each(s.File.Sets, newSet),
 		Inputs:        each(s.Result.Inputs, newInput),
 		Estimates:     each(s.Result.Estimates, b.jsonEstimate),
 		Findings:      each(s.Assessment.Findings, b.jsonFinding),
@@ -33,10 +28,18 @@ func newDocument(s *Sheet) document {
 		Cautions: each(b.d.statements(s), func(one *said) jsonCaution {
 			return jsonCaution{one.number, breakable(one.text)}
 		}),
-		NotChecked: notChecked[b.sub],
-		ModelRuns:  each(s.Result.Runs, b.jsonRun),
-		Vectors:    b.jsonVectors(),
-		Overrides:  each(s.File.Overrides, newOverride),
+		NotChecked:  notChecked[b.sub],
+		ModelRuns:   each(s.Result.Runs, b.jsonRun),
+		Vectors:     b.jsonVectors(),
+		Overrides:   each(s.File.Overrides, newOverride),
+		Sensitivity: b.jsonSensitivity(),
+	}
+}
+
+func newSet(set *limits.Set) jsonSet {
+	return jsonSet{
+		text(set.Name), text(set.Title), text(set.Jurisdiction), text(set.EnteredBy), text(set.EnteredOn),
+		text(set.CheckedOn), text(set.Note), set.Example, text(set.SHA256),
 	}
 }
 

@@ -90,7 +90,7 @@ func (b *builder) from(e *arrest.Estimate) string {
 	case arrest.Shape:
 		return b.say(shapeRemark, e.From) + ", " + e.Method
 	case arrest.Rated:
-		return b.say(ratedRemark, e.From) + ", " + e.Method
+		return b.say(ratedRemark, cut(e.From)) + ", " + e.Method
 	case arrest.Modelled:
 		return b.fromModel(e)
 	case arrest.Measured:

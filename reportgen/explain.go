@@ -39,13 +39,13 @@ func (b *builder) explainHead(finding int) []Block {
 	f := &b.asd().Findings[finding]
 	demand, limit := b.demandAndLimit(f)
 	list := []Line{
-		{Label: jobLabel, Text: orNothing(b.s.File.Document.Title)},
-		{Label: explainLimitLabel, Text: b.say(explainLimit, f.Limit.ID, b.title(f.Limit.Quantity), limit, f.Limit.Authority)},
+		{Label: jobLabel, Text: quote(b.s.File.Document.Title)},
+		{Label: explainLimitLabel, Text: b.say(explainLimit, f.Limit.ID, b.title(f.Limit.Quantity), limit, cut(f.Limit.Authority))},
 		{Label: explainDemandLabel, Text: demand},
 		{Label: explainOutcomeLabel, Text: b.outcome(f), Loud: f.Outcome == limits.Exceeded},
 	}
 	if f.Limit.AnyOf != "" {
-		list = append(list, Line{Label: explainGroupLabel, Text: b.say(alternative, f.Limit.AnyOf, outcomeWords[b.groupOutcomes()[finding]])})
+		list = append(list, Line{Label: explainGroupLabel, Text: b.say(alternative, cut(f.Limit.AnyOf), outcomeWords[b.groupOutcomes()[finding]])})
 	}
 	head := append([]Block{{Text: notAPermission, Loud: true}}, b.banner()...)
 	return append(head, Block{Lines: append(list, b.overrides()...)})
@@ -96,22 +96,49 @@ func (b *builder) settling(f *limits.Finding, r *limits.Reason) string {
 		case b.sub == aLoad && isPeak(f.Limit.Quantity):
 			return peakOfLoadWanted
 		}
-		return b.say(words, entryWanted(f.Limit.Quantity))
+		return b.say(words, upperFirst(b.entryWanted(f.Limit.Quantity)))
 	case limits.OpenInput:
 		return b.say(words, b.howToSettle(b.input(r.Args[0].Text)))
 	case limits.Contradicted, limits.OutsideRating:
+		if r.ID == limits.Contradicted && r.Args[0] == r.Args[1] {
+			return itselfWanted.fill(b.d, f.Limit.Bound.Unit, r.Args[:1])
+		}
 		return words.fill(b.d, f.Limit.Bound.Unit, r.Args)
 	}
 	return words.text
 }
 
+// ways are what would give a bound for a quantity on both sides, each empty
+// where it does not lead there.
+type ways struct{ other, rating, path string }
+
 // entryWanted says which entries would give a bound for the quantity on both
-// sides.
-func entryWanted(q arrest.Quantity) string {
-	if words, ok := entriesFor[q]; ok {
-		return words
+// sides; what is entered already is not asked for again.
+func (b *builder) entryWanted(q arrest.Quantity) string {
+	w, known := waysTo[q]
+	if !known {
+		return otherWay
 	}
-	return entriesForOthers
+	if b.hasEstimate(q, arrest.Rated) {
+		w.rating = ""
+	}
+	if b.plan() != nil {
+		w.path = ""
+	}
+	var list []string
+	for _, way := range []string{w.other, w.rating, w.path} {
+		if way != "" {
+			list = append(list, way)
+		}
+	}
+	if len(list) == 0 {
+		return nothingMissing
+	}
+	return strings.Join(list, orWord)
+}
+
+func (b *builder) hasEstimate(q arrest.Quantity, ev arrest.Evidence) bool {
+	return slices.ContainsFunc(b.res().Estimates, func(e arrest.Estimate) bool { return e.Quantity == q && e.Evidence == ev })
 }
 
 func upperFirst(s string) string {
@@ -135,22 +162,35 @@ func (b *builder) input(key string) *arrest.Input {
 func (b *builder) howToSettle(in *arrest.Input) string {
 	sources := settlingSources(in)
 	words := b.say(settleBySource, strings.Join(sources, ", "))
-	if in.Source != arrest.NoSource && slices.Contains(sources, string(in.Source)) {
+	switch {
+	case len(sources) == 0:
+		return settleInFile
+	case in.Overridden:
+		words = b.say(settleInFileFrom, strings.Join(sources, ", "))
+	case slices.Contains(sources, string(in.Source)):
 		words = b.say(settleKeepSource, string(in.Source))
 	}
 	with := *in
-	if with.Source = arrest.Source(sources[0]); with.Open() == arrest.OpenNoTolerance {
+	with.Overridden, with.Source = false, arrest.Source(sources[0])
+	if with.Open() == arrest.OpenNoTolerance {
 		words += toleranceToo
 	}
 	return words
 }
 
 // settlingSources lists the sources that settle an input of this role, given a
-// tolerance.
+// tolerance; none where the role asks for no source, as its figure stands in
+// the file with what it comes from. A figure set on the command line has no
+// source: what settles it is the same figure in the file.
 func settlingSources(in *arrest.Input) []string {
+	bare := *in
+	bare.Overridden, bare.Source = false, arrest.NoSource
+	if bare.Open() == arrest.Settled {
+		return nil
+	}
 	var list []string
 	for _, source := range arrest.Sources() {
-		with := *in
+		with := bare
 		with.Source = source
 		if why := with.Open(); why == arrest.Settled || why == arrest.OpenNoTolerance {
 			list = append(list, string(source))

@@ -52,7 +52,7 @@ func TestExplain(t *testing.T) {
 		want []string
 	}{
 		"floor": {overDistance + peakLimit, []string{
-			"Only a floor is known, 2.63 kN; the true figure may lie beyond the limit. A floor never settles this. Enter a rating with peak_force_at_most",
+			"Only a floor is known, 2.63 kN; the true figure may lie beyond the limit. A floor never settles this. Enter from its document a rating with peak_force_at_most",
 		}},
 		"open input": {strings.Replace(overDistance, "measured", "label", 1) + strings.Replace(peakLimit, "peak_force", "mean_force_over_distance", 1), []string{
 			"To settle it enter it from a source that settles it (measured).",
@@ -64,7 +64,7 @@ func TestExplain(t *testing.T) {
 		"no allowance": {tailRope + tearAbsorber("0.40 m") + peakLimit, []string{
 			"Somewhere in the entries a device is exhausted. Change the system", "Enter model.allowance, your own figure",
 		}},
-		"not checked": {lanyard + strings.Replace(peakLimit, "checked_on = \"in May\"\n", "", 1), []string{"write when that was done as checked_on"}},
+		"not checked": {lanyard + strings.Replace(peakLimit, "checked_on = \"5 May 2025\"\n", "", 1), []string{"write when that was done as checked_on"}},
 		"outside":     {strings.Replace(lanyard, "1.8 m", "1.5 m", 1) + peakLimit, []string{"within the conditions of \"label\" over the whole of the entries"}},
 		"condition": {overDistance + peakLimit + "total_mass_at_most = \"90 kg\"\n", []string{
 			"The limit was not compared.", "The limit does not speak of this case.",
@@ -147,6 +147,58 @@ func TestSettlingSources(t *testing.T) {
 	} {
 		if got := strings.Join(settlingSources(&arrest.Input{Role: role}), " "); got != want {
 			t.Errorf("role %d: %s, want %s", role, got, want)
+		}
+	}
+}
+
+// A row that rests on an entry set on the command line is explained: no source
+// can be given there, so the way out is the same figure in the file.
+func TestExplainOverride(t *testing.T) {
+	job := []byte(pieces{rest: overDistance + lanyard + peakLimit}.toml())
+	for set, want := range map[[2]string]string{
+		{"fall.free_fall", "1.7 m"}:               "To settle it enter it in the file, from a source that settles it (measured, drawing, plan), and with a tolerance",
+		{"fall.free_fall", "1.7 m ± 0 m"}:         "To settle it enter it in the file, from a source that settles it (measured, drawing, plan).",
+		{"rated[1].peak_force_at_most", "7 kN"}:   "as its document states it",
+		{"rated[1].total_mass", "50 kg .. 60 kg"}: "within the conditions of \"label\"",
+	} {
+		if out := explained(t, workedWith(t, "job.toml", job, set[0], set[1]), "peak"); !strings.Contains(out, want) {
+			t.Errorf("%s: no %q in\n%s", set[0], want, out)
+		}
+	}
+}
+
+// No input of any role is left without words for what settles it.
+func TestEveryRoleIsSettled(t *testing.T) {
+	b := builder{}
+	for role := arrest.OfWorker; role <= arrest.OfModel; role++ {
+		for _, set := range []bool{false, true} {
+			if words := b.howToSettle(&arrest.Input{Role: role, Overridden: set}); !strings.HasPrefix(words, "enter it") {
+				t.Errorf("role %d, overridden %t: %q", role, set, words)
+			}
+		}
+	}
+}
+
+// What can be measured is to be measured, and what is entered already is not
+// asked for again.
+func TestWaysToAnEntry(t *testing.T) {
+	floor := pathSheet(t, overDistance)
+	rated := pathSheet(t, overDistance+strings.Replace(lanyard, "1.8 m", "1.5 m", 1))
+	both := pathSheet(t, tearAbsorber("1.75 m")+strings.Replace(lanyard, "1.8 m", "1.5 m", 1))
+	for _, c := range []struct {
+		s    *Sheet
+		q    arrest.Quantity
+		want string
+	}{
+		{floor, arrest.PeakForce, peakRating + ", or " + pathWay},
+		{rated, arrest.PeakForce, pathWay},
+		{both, arrest.PeakForce, nothingMissing},
+		{floor, arrest.DecelerationDistance, measureDistance + ", or " + travelRating + ", or " + pathWay},
+		{floor, arrest.SwingDrop, otherWay},
+	} {
+		b := newBuilder(c.s, SIUnits)
+		if got := b.entryWanted(c.q); got != c.want {
+			t.Errorf("%s: %q, want %q", c.q, got, c.want)
 		}
 	}
 }

@@ -13,6 +13,7 @@ import (
 func (b *builder) head() []Block {
 	return append(append([]Block{{Text: notAPermission, Loud: true}}, b.banner()...),
 		Block{Lines: append(b.identity(), b.overrides()...)},
+		Block{Lines: b.usedUp()},
 		Block{Lines: b.coverage()},
 		Block{Lines: b.worst()},
 	)
@@ -20,27 +21,65 @@ func (b *builder) head() []Block {
 
 // identity says which question and job the sheet is about.
 func (b *builder) identity() []Line {
-	doc := &b.s.File.Document
-	all := []Line{
-		{Label: questionLabel, Text: orNothing(doc.Purpose)},
-		{Label: jobLabel, Text: orNothing(doc.Title)},
-		{Label: siteLabel, Text: doc.Site},
-		{Label: referenceLabel, Text: doc.Reference},
-		{Label: revisionLabel, Text: orNothing(doc.Revision)},
-		{Label: dateLabel, Text: doc.Date},
-		{Label: reviewLabel, Text: doc.ReviewDate},
-		{Label: sheetLabel, Text: b.say(sheetOf, strconv.Itoa(b.s.Number), strconv.Itoa(b.s.Of))},
-		{Label: datumLabel, Text: holdsFor[b.sub]},
-		{Label: systemLabel, Text: orNothing(doc.System)},
-		{Label: rescueLabel, Text: b.rescue()},
-	}
-	kept := all[:0]
-	for _, l := range all {
-		if l.Text != "" {
-			kept = append(kept, l)
+	var list []Line
+	for _, l := range b.userTexts() {
+		if l.Label == systemLabel {
+			list = append(list,
+				Line{Label: sheetLabel, Text: b.say(sheetOf, strconv.Itoa(b.s.Number), strconv.Itoa(b.s.Of))},
+				Line{Label: datumLabel, Text: holdsFor[b.sub]})
+		}
+		if l.Text = b.onPageOne(l); l.Text != "" {
+			list = append(list, l)
 		}
 	}
-	return kept
+	return list
+}
+
+// onPageOne returns a text of the document as page 1 shows it, empty where the
+// line is left out.
+func (b *builder) onPageOne(l Line) string {
+	switch {
+	case l.Label == rescueLabel:
+		return b.rescue()
+	case l.Text == "" && slices.Contains(alwaysShown, l.Label):
+		return nothingEntered
+	}
+	return quote(l.Text)
+}
+
+// userTexts are what the document of the job says of itself, as typed, in the
+// order of page 1.
+func (b *builder) userTexts() []Line {
+	doc := &b.s.File.Document
+	return []Line{
+		{Label: questionLabel, Text: doc.Purpose},
+		{Label: jobLabel, Text: doc.Title},
+		{Label: siteLabel, Text: doc.Site},
+		{Label: referenceLabel, Text: doc.Reference},
+		{Label: revisionLabel, Text: doc.Revision},
+		{Label: dateLabel, Text: doc.Date},
+		{Label: reviewLabel, Text: doc.ReviewDate},
+		{Label: systemLabel, Text: doc.System},
+		{Label: rescueLabel, Text: doc.Rescue},
+	}
+}
+
+// alwaysShown are the labels that stand on page 1 with nothing beside them too.
+var alwaysShown = []string{questionLabel, jobLabel, revisionLabel, systemLabel}
+
+// usedUp says above everything else that a device is used up, or may be within
+// the user's allowance.
+func (b *builder) usedUp() []Line {
+	var list []Line
+	for _, w := range b.res().Warnings {
+		switch w.ID {
+		case arrest.PathExhausted:
+			list = append(list, Line{Label: usedUpLabel, Text: b.say(usedUpHead, cut(w.Args[0].Text)), Loud: true, Loudest: true})
+		case arrest.PathExhaustedInAllowance:
+			list = append(list, Line{Label: nearlyLabel, Text: b.say(usedUpInAllowanceHead, cut(w.Args[0].Text)), Loud: true, Loudest: true})
+		}
+	}
+	return list
 }
 
 // overrides are the entries that were set on the command line: the job file
@@ -61,10 +100,14 @@ func (b *builder) overrides() []Line {
 // rescue is what is entered about it; where no person is part of the job, only
 // what somebody did enter.
 func (b *builder) rescue() string {
-	if b.sub != aPerson {
-		return b.s.File.Document.Rescue
+	text := b.s.File.Document.Rescue
+	switch {
+	case text == "" && b.sub == aPerson:
+		return nothingEntered
+	case text != "" && b.sub == aPerson && !isRescue(text):
+		return b.say(noRescueText, cut(text))
 	}
-	return orNothing(b.s.File.Document.Rescue)
+	return quote(text)
 }
 
 func orNothing(s string) string {
@@ -85,6 +128,7 @@ func (b *builder) coverage() []Line {
 			strconv.Itoa(n[limits.Undecided]), strconv.Itoa(n[limits.NotCompared]), strconv.Itoa(n[limits.Within]))
 	}
 	list := []Line{{Label: limitsLabel, Text: text, Loud: a.Counts()[limits.Exceeded] > 0}}
+	list = append(list, b.insideLines()...)
 	var missing []string
 	for _, e := range a.NotEntered {
 		missing = append(missing, b.expected(e))
@@ -93,7 +137,7 @@ func (b *builder) coverage() []Line {
 		list = append(list, Line{Label: missingLabel, Text: strings.Join(missing, ", ")})
 	}
 	for _, e := range a.Elsewhere {
-		list = append(list, Line{Label: elsewhereLabel, Text: b.say(elsewhereLine, b.title(e.Quantity), e.Where)})
+		list = append(list, Line{Label: elsewhereLabel, Text: b.say(elsewhereLine, b.title(e.Quantity), cut(e.Where))})
 	}
 	return list
 }
@@ -137,14 +181,30 @@ func (b *builder) worst() []Line {
 	if worst < 0 {
 		return nil
 	}
-	place := slices.Index(b.rowOrder(), worst)
 	f := &b.asd().Findings[worst]
-	demand, limit := b.demandAndLimit(f)
-	text := b.say(worstSentence, strconv.Itoa(place+1), outcomeWords[f.Outcome], b.title(f.Limit.Quantity), demand, limit, f.Limit.Authority)
-	if len(f.Reasons) > 0 {
-		text = b.say(worstReason, text, b.reason(f, &f.Reasons[0]))
+	list := []Line{{Label: worstLabel, Text: b.rowInWords(worst), Loud: f.Outcome == limits.Exceeded}}
+	for _, i := range b.hidden() {
+		if i != worst {
+			list = append(list, Line{Label: insideLabel, Text: b.rowInWords(i), Loud: true})
+		}
 	}
-	return []Line{{Label: worstLabel, Text: text, Loud: f.Outcome == limits.Exceeded}}
+	return list
+}
+
+// rowInWords puts a row with its main reason into a sentence. Reasons beside a
+// row that is exceeded or within are not why it is so.
+func (b *builder) rowInWords(finding int) string {
+	f := &b.asd().Findings[finding]
+	demand, limit := b.demandAndLimit(f)
+	place := slices.Index(b.rowOrder(), finding)
+	text := b.say(worstSentence, strconv.Itoa(place+1), outcomeWords[f.Outcome], b.title(f.Limit.Quantity), demand, limit, cut(f.Limit.Authority))
+	switch {
+	case len(f.Reasons) == 0:
+		return text
+	case f.Outcome == limits.Exceeded || f.Outcome == limits.Within:
+		return b.say(worstBeside, text, b.reason(f, &f.Reasons[0]))
+	}
+	return b.say(worstReason, text, b.reason(f, &f.Reasons[0]))
 }
 
 // groupOutcomes returns the outcome that each finding counts with.
@@ -201,6 +261,8 @@ func (b *builder) reasonOnRow(f *limits.Finding, r *limits.Reason, further bool)
 		p = untestedCondition
 	case r.ID == limits.AssumedShape && further:
 		p = shapeBeside
+	case r.ID == limits.Contradicted && r.Args[0] == r.Args[1]:
+		return contradictsItself.fill(b.d, f.Limit.Bound.Unit, r.Args[:1])
 	}
 	if !ok {
 		panic("reportgen: no words for the reason " + string(r.ID))

@@ -86,6 +86,7 @@ type document struct {
 	ModelRuns     []jsonRun      `json:"model_runs"`
 	Vectors       []jsonVector   `json:"vectors"`
 	Overrides     []jsonOverride `json:"overrides"`
+	Sensitivity   []jsonRanking  `json:"sensitivity"`
 }
 
 type jsonTool struct {

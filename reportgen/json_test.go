@@ -28,7 +28,7 @@ func asJSON(t testing.TB, s *Sheet) string {
 // place is a new format.
 func TestJSONKeys(t *testing.T) {
 	keys := map[string]string{
-		"":               "format tool job limit_sets inputs estimates findings outcome_counts not_entered elsewhere working cautions not_checked model_runs vectors overrides",
+		"":               "format tool job limit_sets inputs estimates findings outcome_counts not_entered elsewhere working cautions not_checked model_runs vectors overrides sensitivity",
 		"tool":           "version model",
 		"job":            "name title site reference revision date purpose system rescue prepared_by checked_by review_date persons example sha256 subject",
 		"limit_sets":     "name title jurisdiction entered_by entered_on checked_on note example sha256",

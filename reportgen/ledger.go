@@ -18,7 +18,7 @@ type entry struct {
 // and what is left over.
 func (b *builder) ledgerBlocks(r *arrest.ModelRun) []Block {
 	l := &r.Run.Ledger
-	momentum, energy := quantity.Impulse.SI(), quantity.Energy.SI()
+	momentum, energy := b.ledgerUnit(quantity.Impulse), b.ledgerUnit(quantity.Energy)
 	return []Block{
 		{Table: account(momentumHead, momentum, l.MomentumLeft, entry{weightEntry, l.Weight}, entry{pullEntry, l.Impulse}, entry{motionEntry, l.Motion})},
 		{Table: account(energyHead, energy, l.EnergyLeft, entry{beforeEntry, l.Before}, entry{fallenEntry, l.Fallen},
@@ -26,6 +26,15 @@ func (b *builder) ledgerBlocks(r *arrest.ModelRun) []Block {
 		{Table: account(partsEnergyHead, energy, l.PartsLeft, entry{workOnParts, l.Work}, entry{storedEntry, l.Stored}, entry{lostEntry, l.Lost})},
 		{Text: ledgerRemark},
 	}
+}
+
+// ledgerUnit returns the unit of an account: the customary one where the sheet
+// shows those first, else that of the SI.
+func (b *builder) ledgerUnit(d quantity.Dimension) quantity.Unit {
+	if u := b.d.pair(d, quantity.Unit{}, 1)[0]; u.System == quantity.Customary {
+		return u
+	}
+	return d.SI()
 }
 
 // account is the table of one account.
@@ -45,7 +54,7 @@ const noise = 1e-9
 // leftText returns what is left over, as a power of ten that it stays below:
 // nobody needs the digits of a rounding error.
 func leftText(x float64, u quantity.Unit) string {
-	return lessThan + noBreak + powerAbove(math.Abs(x), noise) + noBreak + u.Symbol
+	return lessThan + noBreak + powerAbove(math.Abs(u.From(x)), noise) + noBreak + u.Symbol
 }
 
 // powerAbove returns the least power of ten above x, and at least that of

@@ -19,7 +19,7 @@ import (
 const (
 	tailRope = "[[connector]]\npart = \"rope\"\nname = \"tail rope\"\nlength = { value = \"2.5 m ± 0 m\", source = \"measured\" }\nmodulus = { value = \"22.5 kN ± 0 kN\", source = \"label\" }\n"
 
-	peakLimit = "[[limit]]\nid = \"peak\"\nquantity = \"peak_force\"\nat_most = \"8 kN\"\nauthority = \"site rule 4\"\nedition = \"second\"\nkind = \"person\"\nchecked_on = \"in May\"\n"
+	peakLimit = "[[limit]]\nid = \"peak\"\nquantity = \"peak_force\"\nat_most = \"8 kN\"\nauthority = \"site rule 4\"\nedition = \"second\"\nkind = \"person\"\nchecked_on = \"5 May 2025\"\n"
 
 	quarter = "[model]\nallowance = { value = \"25 %\", source = \"measured\", note = \"drop tests\" }\n"
 )
@@ -113,7 +113,9 @@ func TestAllowanceAndExhaustion(t *testing.T) {
 	}{
 		{tailRope + tearAbsorber("0.40 m") + peakLimit, limits.Undecided, limits.NoAllowance, 4296.7},
 		{tailRope + tearAbsorber("0.40 m") + quarter + peakLimit, limits.Undecided, limits.DeviceExhausted, 1.25 * 4296.7},
-		{tailRope + tearAbsorber("0.45 m") + quarter + peakLimit, limits.Within, "", 1.25 * 4000},
+		// The allowance is taken on the travel too: 0.45 m less a fifth is used up,
+		// and m*g*(h + 0.36 m + F/k) = 4 kN*0.36 m + F^2/(2*k) gives 4609.7 N.
+		{tailRope + tearAbsorber("0.45 m") + quarter + peakLimit, limits.Within, "", 1.25 * 4609.7},
 	} {
 		f := readModel(t, pathSheet(t, c.rest)).Findings[0]
 		if f.Outcome != c.outcome || !quantity.Close(*f.Demand, c.demand, 2e-5) || (f.Reason == nil) != (c.reason == "") || f.Reason != nil && *f.Reason != c.reason {
@@ -154,7 +156,7 @@ func TestExhaustedIsLoudest(t *testing.T) {
 	s := worked(t, "job.toml", []byte(pieces{top: "example = true", rest: tailRope + tearAbsorber("0.40 m")}.toml()))
 	r := Build(s, BothUnits)
 	first := r.Warnings[0]
-	if first.Label != "!! S-35" || !first.Loudest || !strings.HasPrefix(first.Text, "EXHAUSTED: the travel of tear absorber") {
+	if first.Label != "!! S-35" || !first.Loudest || !strings.HasPrefix(first.Text, "EXHAUSTED: the travel of \"tear absorber\"") {
 		t.Errorf("first: %+v", first)
 	}
 	for _, l := range r.Warnings[1:] {
@@ -230,7 +232,7 @@ func TestPathSections(t *testing.T) {
 	for _, section := range sections[1:] {
 		headings = append(headings, section.Heading)
 	}
-	if got := strings.Join(headings, "|"); got != "The arrest in time, as written|The arrest in time, at the greatest peak" {
+	if got := strings.Join(headings, "|"); got != "The arrest in time, as written|The arrest in time, at the greatest peak|The arrest in time, at the longest stop" {
 		t.Errorf("runs: %s", got)
 	}
 	// The rope is stretched by the force over its stiffness: 4296.7 N over 9 kN/m.
@@ -296,7 +298,7 @@ func TestPathWords(t *testing.T) {
 			t.Errorf("no words for basis %d", basis)
 		}
 	}
-	for _, c := range []arrest.Corner{arrest.AtWritten, arrest.AtLow, arrest.AtHigh} {
+	for _, c := range []arrest.Corner{arrest.AtWritten, arrest.AtLow, arrest.AtHigh, arrest.AtLongest} {
 		if cornerWords[c] == "" {
 			t.Errorf("no words for the corner %s", c)
 		}
@@ -376,6 +378,27 @@ func TestRegisterOfTheModel(t *testing.T) {
 		out := strings.Join(all, "\n")
 		if got := [2]bool{strings.Contains(out, pathAssumption), strings.Contains(out, "the allowance entered, 25 %")}; got != want {
 			t.Errorf("%v, want %v", got, want)
+		}
+	}
+}
+
+// The accounts stand in lbf*s and ft*lbf on a sheet in customary units: 594.17
+// N*s are 133.57 lbf*s, 1765.197 J are 1301.94 ft*lbf (NIST SP 811, B.8).
+func TestLedgersInCustomaryUnits(t *testing.T) {
+	s := pathSheet(t, tailRope+tearAbsorber("1.75 m"))
+	for units, want := range map[UnitChoice][2]string{
+		SIUnits: {"N*s", "1765.2 J"}, USUnits: {"lbf*s", "1301.9 ft*lbf"},
+	} {
+		b := newBuilder(s, units)
+		blocks := b.ledgerBlocks(&s.Result.Runs[0])
+		momentum, energy := blocks[0].Table.Rows, blocks[1].Table.Rows
+		if got := breakable(energy[0].Cells[1]); got != want[1] {
+			t.Errorf("energy %q, want %q", got, want[1])
+		}
+		for _, row := range momentum {
+			if !strings.HasSuffix(row.Cells[1], noBreak+want[0]) {
+				t.Errorf("momentum %q, want %s", row.Cells[1], want[0])
+			}
 		}
 	}
 }

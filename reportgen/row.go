@@ -21,7 +21,7 @@ func (b *builder) limitBlocks() []Block {
 		demand, limit := b.demandAndLimit(f)
 		row := strconv.Itoa(place + 1)
 		t.Rows = append(t.Rows, Row{
-			Cells: []string{row, b.title(f.Limit.Quantity) + ":\n" + demand + b.share(f), limit + "\n" + flat(f.Limit.Authority), b.outcome(f)},
+			Cells: []string{row, b.title(f.Limit.Quantity) + ":\n" + demand + b.share(f), limit + "\n" + quote(f.Limit.Authority), b.outcome(f)},
 			Loud:  f.Outcome == limits.Exceeded,
 		})
 		for _, text := range b.further(i) {
@@ -49,7 +49,7 @@ func (b *builder) further(finding int) []string {
 		list = append(list, b.reasonOnRow(f, &rest[i], further || i > 0))
 	}
 	if f.Limit.AnyOf != "" {
-		list = append(list, b.say(alternative, f.Limit.AnyOf, outcomeWords[b.groupOutcomes()[finding]]))
+		list = append(list, b.say(alternative, cut(f.Limit.AnyOf), outcomeWords[b.groupOutcomes()[finding]]))
 	}
 	return list
 }

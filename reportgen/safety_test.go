@@ -142,3 +142,18 @@ func goFiles(t *testing.T, folder string) []string {
 	}
 	return list
 }
+
+// README, SAFETY.md and the sheet count the published drops alike.
+func TestPagesCountTheSameDrops(t *testing.T) {
+	args := publishedArguments()
+	want := args[0].Text + " published drops of " + args[1].Text + " types of lanyard"
+	for _, page := range []string{"../README.md", "../SAFETY.md"} {
+		text, err := os.ReadFile(page)
+		if err != nil {
+			t.Fatal(err)
+		}
+		if !strings.Contains(strings.Join(strings.Fields(string(text)), " "), want) {
+			t.Errorf("%s does not say %q", page, want)
+		}
+	}
+}

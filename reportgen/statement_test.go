@@ -68,7 +68,7 @@ func TestWhenStatementsArePrinted(t *testing.T) {
 		{"S-22", pieces{fall: `free_fall = { value = "2 m ± 0 m", source = "drawing" }`, rest: lanyard}, "2.00 m (6.56 ft)"},
 		{"S-23", pieces{fall: `initial_speed = { value = "6 m/s ± 0 m/s", source = "measured" }`, rest: overDistance}, "6.00 m/s"},
 		{"S-24", pieces{rest: lanyard + "travel_at_most = \"0.1 m\"\ntravel_is = \"deceleration distance\"\n"}, "label"},
-		{"S-25", pieces{rest: overDistance + strings.Replace(lanyard, "6 kN", "2 kN", 1)}, "2.00 kN"},
+		{"S-25", pieces{rest: overDistance + strings.Replace(lanyard, "6 kN", "2 kN", 1)}, "peak force on the body is not less than 2.63 kN (591 lbf) by the entries for fall and stop, and at most 2.00 kN"},
 		{"S-26", pieces{rest: "[stop]\ndistance = { value = \"0.5 m .. 1.5 m\", source = \"measured\" }\n" + strings.Replace(lanyard, "6 kN", "3 kN", 1)}, "3.00 kN"},
 		{"S-27", pieces{worker: "mass = { value = \"210 kg ± 0 kg\", source = \"measured\" }\ntools = { value = \"0 kg\", source = \"plan\" }", rest: overDistance}, "210 kg"},
 		{"S-28", pieces{worker: "mass = { value = \"100 kg ± 0 kg\", source = \"measured\" }\ntools = { value = \"0 kg\", source = \"plan\" }\npersons = 2", rest: overDistance}, "2 persons"},
@@ -106,11 +106,12 @@ func TestStatementsOfTheModel(t *testing.T) {
 		holds  string
 	}{
 		{"S-35", arrest.PathExhausted, []arrest.Arg{part, arrest.Figure(quantity.Energy, 420, quantity.Nearest), force}, "then left, 420 J (310 ft*lbf), goes into the stiff parts, and in the model the force rises to 6.00 kN"},
+		{"S-53", arrest.PathExhaustedInAllowance, []arrest.Arg{part, arrest.Figure(quantity.Length, 1.0701, quantity.Up), arrest.Figure(quantity.Length, 1.07, quantity.Nearest)}, "of \"the rope\", but within your allowance for its error it may: then 1.08 m (3.52 ft) is needed, and there are at most 1.07 m"},
 		{"S-36", arrest.PathRigid, nil, "rigid"},
-		{"S-37", arrest.PathBeyondCurve, []arrest.Arg{part}, "for the rope."},
-		{"S-38", arrest.StaticStretchOnly, []arrest.Arg{part}, "of the rope"},
-		{"S-39", arrest.SeveralAbsorbers, []arrest.Arg{part}, "(the rope)"},
-		{"S-40", arrest.AbsorberOnRetractable, []arrest.Arg{part}, "(the rope)"},
+		{"S-37", arrest.PathBeyondCurve, []arrest.Arg{part}, "for \"the rope\"."},
+		{"S-38", arrest.StaticStretchOnly, []arrest.Arg{part}, "of \"the rope\""},
+		{"S-39", arrest.SeveralAbsorbers, []arrest.Arg{part}, "(\"the rope\")"},
+		{"S-40", arrest.AbsorberOnRetractable, []arrest.Arg{part}, "(\"the rope\")"},
 		{"S-41", arrest.NothingAbsorbs, []arrest.Arg{force}, "6.00 kN"},
 		{"S-42", arrest.NoAllowanceEntered, nil, "gave peaks -32.4 % to +26.7 % off"},
 		{"S-43", arrest.RatedAgainstModel, []arrest.Arg{part, arrest.Text("peak"), force, arrest.Figure(quantity.Force, 6001, quantity.Nearest)}, "at most 6.000 kN (1349 lbf) by the document, up to 6.001 kN"},
@@ -166,5 +167,31 @@ func TestLoudStatementsFirst(t *testing.T) {
 			}
 			quiet = quiet || !l.Loud
 		}
+	}
+}
+
+// Of what is not marked, rescue comes first, then who decides; what is about
+// the arithmetic alone comes last.
+func TestOrderOfQuietStatements(t *testing.T) {
+	s := pathSheet(t, strings.Replace(tailRope, "± 0 m", "± 0.1 m", 1)+tearAbsorber("1.75 m")+quarter)
+	var quietOnes []string
+	for _, one := range (display{}).statements(s) {
+		if one.weight == quiet {
+			quietOnes = append(quietOnes, one.number)
+		}
+	}
+	n := len(quietOnes)
+	if n < 5 || quietOnes[0] != "S-04" || quietOnes[1] != "S-01" || quietOnes[n-1] != "S-44" {
+		t.Errorf("order: %q", quietOnes)
+	}
+}
+
+// A figure that was typed in per cent is called unusual in per cent.
+func TestUnusualInTheUnitTyped(t *testing.T) {
+	rope := strings.Replace(tailRope, `modulus = { value = "22.5 kN ± 0 kN"`, `static_stretch = { value = "20 % ± 0"`, 1)
+	list := display{}.statements(pathSheet(t, rope+tearAbsorber("1.75 m")))
+	i := slices.IndexFunc(list, func(one said) bool { return one.number == "S-27" })
+	if i < 0 || !strings.Contains(breakable(list[i].text), `"20 % ± 0", which is unusual: 1.00 to 12.0 % is`) {
+		t.Errorf("got %+v", list)
 	}
 }

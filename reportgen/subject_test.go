@@ -56,7 +56,7 @@ at_most = "8 kN"
 authority = "drawing of the post"
 edition = "second"
 kind = "structure"
-checked_on = "in May"
+checked_on = "5 May 2025"
 `
 )
 

@@ -1,10 +1,11 @@
 package reportgen
 
 import (
-	"bytes"
+	"reflect"
 	"strings"
 
 	"github.com/olekukonko/tablewriter"
+	"github.com/olekukonko/tablewriter/pkg/twcache"
 	"github.com/olekukonko/tablewriter/renderer"
 	"github.com/olekukonko/tablewriter/tw"
 )
@@ -12,19 +13,7 @@ import (
 // table writes a table. Cells are wrapped here, to the widths of the table:
 // the table writer would break words, and count more than 80.
 func (p *page) table(t *Table) {
-	var out bytes.Buffer
-	table := tablewriter.NewTable(&out,
-		tablewriter.WithEastAsian(tw.Off),
-		tablewriter.WithHeaderAutoFormat(tw.Off),
-		tablewriter.WithTrimSpace(tw.Off),
-		tablewriter.WithHeaderAutoWrap(tw.WrapNone),
-		tablewriter.WithRowAutoWrap(tw.WrapNone),
-		tablewriter.WithHeaderAlignment(tw.AlignLeft),
-		tablewriter.WithRowAlignment(tw.AlignLeft),
-		tablewriter.WithHeaderPaddingPerColumn(betweenColumns(len(t.Header))),
-		tablewriter.WithRowPaddingPerColumn(betweenColumns(len(t.Header))),
-		tablewriter.WithRenderer(renderer.NewBlueprint(p.rendition(t.Rules))),
-	)
+	table := p.tableWriter(t)
 	table.Header(p.cells(t.Header, t.Widths, p.paint.strong))
 	for i := range t.Rows {
 		paint := plainText
@@ -34,9 +23,34 @@ func (p *page) table(t *Table) {
 		p.must(table.Append(p.cells(t.Rows[i].Cells, t.Widths, paint)))
 	}
 	p.must(table.Render())
-	for l := range strings.Lines(out.String()) {
+	for l := range strings.Lines(p.tabled.String()) {
 		p.line(strings.TrimSuffix(l, "\n"))
 	}
+}
+
+// tableWriter returns the writer of the tables of the page, empty and set for t.
+// It is made once, and its cache of how types are printed, of which only texts
+// are, is kept small: both would take longer than the tables.
+func (p *page) tableWriter(t *Table) *tablewriter.Table {
+	p.tabled.Reset()
+	if p.tables == nil {
+		p.tables = tablewriter.NewTable(&p.tabled,
+			tablewriter.WithStringerCacheCustom(twcache.NewLRU[reflect.Type, reflect.Value](1)),
+			tablewriter.WithEastAsian(tw.Off),
+			tablewriter.WithHeaderAutoFormat(tw.Off),
+			tablewriter.WithTrimSpace(tw.Off),
+			tablewriter.WithHeaderAutoWrap(tw.WrapNone),
+			tablewriter.WithRowAutoWrap(tw.WrapNone),
+			tablewriter.WithHeaderAlignment(tw.AlignLeft),
+			tablewriter.WithRowAlignment(tw.AlignLeft),
+		)
+	}
+	p.tables.Reset()
+	return p.tables.Options(
+		tablewriter.WithHeaderPaddingPerColumn(betweenColumns(len(t.Header))),
+		tablewriter.WithRowPaddingPerColumn(betweenColumns(len(t.Header))),
+		tablewriter.WithRenderer(renderer.NewBlueprint(p.rendition(t.Rules))),
+	)
 }
 
 // betweenColumns leaves two blanks after each of n columns but the last.

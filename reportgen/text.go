@@ -4,6 +4,8 @@ import (
 	"bytes"
 	"io"
 	"strings"
+
+	"github.com/olekukonko/tablewriter"
 )
 
 // TextOptions say what the place can show that a text report goes to.
@@ -36,6 +38,9 @@ type page struct {
 	out   bytes.Buffer
 	ascii bool
 	paint paint
+
+	tables *tablewriter.Table // nil before the first table
+	tabled bytes.Buffer       // what it has written
 }
 
 // gap leaves a blank line, except at the very top.

@@ -67,6 +67,10 @@ var (
 		"No rescue method is entered in this job. Do not begin before there is one that works for a person who cannot help."}}
 )
 
+// meanOnRow is added to S-32 and S-48 for each limit on a mean that protects
+// something which feels the peak.
+var meanOnRow = phrase{[]string{"row", "quantity", "limit", "kind"}, " Row {row} holds a mean, {quantity}, against {limit}, a limit for kind \"{kind}\": the peak is above the mean."}
+
 // ofWarnings holds the statement of each warning.
 var ofWarnings = map[arrest.WarningID]statement{
 	arrest.NothingAboutStop: {"S-11", loud, phrase{nil,
@@ -97,8 +101,8 @@ var ofWarnings = map[arrest.WarningID]statement{
 		"The fall begins with a speed of up to {speed}. Limits and conditions on free fall were tested with the height that gives the same speed from rest, up to {fall}."}},
 	arrest.RatingContradicted: {"S-24", loud, phrase{[]string{"document", "floor", "rated"},
 		"The document \"{document}\" contradicts this job: over the travel it states, no stop of this fall has a peak below {floor}, and it promises at most {rated}. One of the entries is wrong, or the device cannot hold this fall."}},
-	arrest.EstimatesDisjoint: {"S-25", loud, phrase{[]string{"quantity", "evidence A", "figure A", "evidence B", "figure B"},
-		"Two figures for one thing cannot both be right: {quantity} is {figure A} {evidence A} and {figure B} {evidence B}. Neither is averaged away. Find out which entry is wrong."}},
+	arrest.EstimatesDisjoint: {"S-25", loud, phrase{[]string{"quantity", "evidence A", "figure A", "evidence B", "figure B", "bound A", "bound B"},
+		"Two figures for one thing cannot both be right: {quantity} is {bound A} {figure A} {evidence A}, and {bound B} {figure B} {evidence B}. Neither is averaged away. Find out which entry is wrong."}},
 	arrest.CeilingBelowFloor: {"S-26", loud, phrase{[]string{"document", "rated", "floor"},
 		"Part of the entries contradicts \"{document}\": it promises at most {rated}, and the floor from the entries goes up to {floor}. Measure the stop more closely."}},
 	arrest.Unusual: {"S-27", loud, phrase{[]string{"key", "as written", "usual low", "usual high"},
@@ -112,17 +116,19 @@ var ofWarnings = map[arrest.WarningID]statement{
 	arrest.ExampleValues: {"S-31", loud, phrase{nil,
 		"This job or one of its limit sets holds example values. They describe no real place, user or device, and nothing here may be used for work."}},
 	arrest.PathExhausted: {"S-35", loudest, phrase{[]string{"part", "energy", "peak"},
-		"EXHAUSTED: the travel of {part} is used up before the body is at rest. The energy then left, {energy}, goes into the stiff parts, and in the model the force rises to {peak}. Change the system, or shorten the fall."}},
+		"EXHAUSTED: the travel of \"{part}\" is used up before the body is at rest. The energy then left, {energy}, goes into the stiff parts, and in the model the force rises to {peak}. Change the system, or shorten the fall."}},
+	arrest.PathExhaustedInAllowance: {"S-53", loud, phrase{[]string{"part", "needed", "travel"},
+		"NEARLY EXHAUSTED: the model alone does not use up the travel of \"{part}\", but within your allowance for its error it may: then {needed} is needed, and there are at most {travel}. The stop would end in the stiff parts. Change the system, or shorten the fall."}},
 	arrest.PathRigid: {"S-36", loud, phrase{nil,
 		"Somewhere in the entries nothing stops the body, or it ends in a blow on something rigid. What follows then has no upper end by anything that was entered."}},
 	arrest.PathBeyondCurve: {"S-37", loud, phrase{[]string{"parts"},
-		"The model leaves the loading points that were entered for {parts}. Beyond the last point nobody knows the force: measure further, or keep the part below it."}},
+		"The model leaves the loading points that were entered for \"{parts}\". Beyond the last point nobody knows the force: measure further, or keep the part below it."}},
 	arrest.StaticStretchOnly: {"S-38", loud, phrase{[]string{"part"},
-		"The stiffness of {part} comes from a static stretch alone. In a fall a rope is about twice as stiff as that, and the peak is higher than the model says."}},
+		"The stiffness of \"{part}\" comes from a static stretch alone. In a fall a rope is about twice as stiff as that, and the peak is higher than the model says."}},
 	arrest.SeveralAbsorbers: {"S-39", loud, phrase{[]string{"parts"},
-		"Several absorbers are in one path ({parts}). The one that gives at the lower force is used up first, and their documents do not say how they behave together."}},
+		"Several absorbers are in one path (\"{parts}\"). The one that gives at the lower force is used up first, and their documents do not say how they behave together."}},
 	arrest.AbsorberOnRetractable: {"S-40", loud, phrase{[]string{"parts"},
-		"A lanyard with an absorber and a retractable are in one path ({parts}). That lengthens the fall, and the retractable may not lock. Ask the makers of both whether the two may go together at all."}},
+		"A lanyard with an absorber and a retractable are in one path (\"{parts}\"). That lengthens the fall, and the retractable may not lock. Ask the makers of both whether the two may go together at all."}},
 	arrest.NothingAbsorbs: nothingAbsorbs,
 	arrest.NoAllowanceEntered: {"S-42", loud, phrase{[]string{"tests", "types", "low", "high"},
 		"No allowance for the error of the model is entered, so modelled figures decide no limit. Enter your own, with where it comes from. For comparison: of {tests} published drops of {types} types of lanyard the simplest model, told of the other drops of a type, gave peaks {low} to {high} off the measured ones. The table below the warnings has every type, the worst first."}},
@@ -150,7 +156,7 @@ var reasons = map[limits.ReasonID]phrase{
 	limits.SeveralPersons:       {[]string{"persons"}, "{persons} persons on one system"},
 	limits.ExampleValues:        {nil, "example values"},
 	limits.NotChecked:           {nil, "nobody has checked this limit against its current text (no checked_on)"},
-	limits.Superseded:           {[]string{"date"}, "the limit is superseded since {date}"},
+	limits.Superseded:           {[]string{"date"}, "the limit is superseded since \"{date}\""},
 	limits.IsProductTest:        {nil, "a figure of a product test is no limit for a site"},
 	limits.ConditionUnfulfilled: {[]string{"condition", "demand", "bound"}, "the limit holds for {condition} {bound}, and here it is {demand}"},
 	limits.ConditionStraddles:   {[]string{"condition", "least", "greatest", "bound"}, "the limit holds for {condition} {bound}, and here it is {least .. greatest}"},
@@ -160,6 +166,9 @@ var reasons = map[limits.ReasonID]phrase{
 	limits.BeyondModel:          {nil, "somewhere in the entries a part is loaded beyond what is known of it, or the stop is a blow on something rigid"},
 	limits.NotComputed:          {nil, "nothing entered gives this figure"},
 }
+
+// contradictsItself is Contradicted where both figures come from one thing.
+var contradictsItself = phrase{[]string{"evidence A"}, "the figures {evidence A} contradict each other in this job"}
 
 // reasonsAtLeast holds the words of reasons that read otherwise where a limit
 // is one from below.
@@ -189,6 +198,9 @@ var (
 		string(arrest.Modelled): "by the model",
 		string(arrest.Measured): "by the record",
 	}
+	// namedEnd says what end of a figure a contradiction names.
+	namedEnd = map[string]string{string(arrest.AtLeast): "not less than", string(arrest.AtMost): "at most", string(arrest.Between): "up to"}
+
 	conditionWords = map[string]string{
 		"total_mass_at_most": "a total mass of at most",
 		"free_fall_at_most":  "a free fall of at most",
@@ -197,7 +209,7 @@ var (
 	reachWords = map[string]string{openEnd.Text: noUpperEnd}
 
 	idArguments = map[string]map[string]string{
-		"why": openWords, "evidence A": evidenceWords, "evidence B": evidenceWords,
+		"why": openWords, "evidence A": evidenceWords, "evidence B": evidenceWords, "bound A": namedEnd, "bound B": namedEnd,
 		"condition": conditionWords, "reach": reachWords,
 	}
 )
@@ -208,6 +220,13 @@ var outcomeWords = map[limits.Outcome]string{
 	limits.Undecided:   "undecided",
 	limits.NotCompared: "not compared",
 	limits.Within:      "within as entered",
+}
+
+// noRescueWords are what people write who have no rescue method.
+var noRescueWords = []string{
+	"none", "no", "nil", "n/a", "na", "n.a", "not applicable", "not available", "tbd", "tba", "tbc", "to do", "todo",
+	"to be decided", "to be determined", "to be defined", "to be confirmed", "to be planned", "to be arranged",
+	"not yet", "none yet", "not yet decided", "not known", "unknown", "not decided", "not planned", "nothing", "later", "pending", "open",
 }
 
 // expectedWords says what a job with a fall is expected to be held against.
@@ -254,6 +273,7 @@ const (
 	datumLabel, limitsLabel, missingLabel       = "Datum", "Limits", "Nobody entered"
 	setLabel, reviewLabel                       = "Set by hand", "Review"
 	elsewhereLabel, worstLabel, nothingEntered  = "Elsewhere", "Worst row", "(not entered)"
+	insideLabel, usedUpLabel, nearlyLabel       = "Inside a group", "EXHAUSTED", "NEARLY EXHAUSTED"
 	preparedLabel, checkedLabel, signLabel      = "Prepared by", "Checked by", "Signatures"
 	verificationLabel, validationLabel          = "Verification", "Validation"
 	rowHead, demandHead, limitHead, outcomeHead = "row", "what, and how much", "limit, and where it stands", "outcome"
@@ -270,6 +290,7 @@ var signHead = []string{"role", "name", "date", "signature"}
 // What stands behind page 1.
 const (
 	behindHeading     = "Behind page 1: what it rests on"
+	longTextsHeading  = "Texts that page 1 cuts, whole"
 	inputsHeading     = "Inputs"
 	limitTextsHeading = "The limits in full"
 	registerHeading   = "Assumptions: each needs confirmation"
@@ -313,31 +334,39 @@ const (
 
 // Sentences of page 1 with figures in them.
 var (
-	shapeRemark     = phrase{[]string{"shape"}, "if the stop were a pulse \"{shape}\""}
-	shareOfLimit    = phrase{[]string{"share"}, "{share} of the limit"}
-	setInPlace      = phrase{[]string{"key", "value", "former"}, "{key} = \"{value}\", in place of \"{former}\" in the file"}
-	setAnew         = phrase{[]string{"key", "value"}, "{key} = \"{value}\", of which the file says nothing"}
-	setByHand       = phrase{nil, "(set on the command line)"}
-	setByHandFor    = phrase{[]string{"former"}, "(set on the command line; \"{former}\" in the file)"}
-	openAbove       = phrase{[]string{"low"}, "{low} and more, no upper end"}
-	openBelow       = phrase{[]string{"high"}, "up to {high}, no lower end"}
-	withAllowance   = phrase{[]string{"figure", "share", "wider"}, "{figure}, with the allowance of {share}: {wider}"}
-	allowanceNote   = phrase{[]string{"share"}, "with the allowance of {share}"}
-	quoted          = phrase{[]string{"text"}, "\"{text}\""}
-	settledBy       = phrase{[]string{"source"}, "settled ({source})"}
-	openFrom        = phrase{[]string{"source", "why"}, "open ({source}): {why}"}
-	openWhy         = phrase{[]string{"why"}, "open: {why}"}
-	ratedRemark     = phrase{[]string{"document"}, "by \"{document}\" while its conditions hold"}
-	countSentence   = phrase{[]string{"all", "exceeded", "undecided", "not compared", "within"}, "{all} in all: {exceeded} exceeded, {undecided} undecided, {not compared} not compared, {within} within as entered."}
-	worstSentence   = phrase{[]string{"row", "outcome", "quantity", "demand", "limit", "clause"}, "{outcome} in row {row}, {quantity}: {demand}, against the limit {limit}, by \"{clause}\"."}
-	worstReason     = phrase{[]string{"sentence", "reason"}, "{sentence} Reason: {reason}."}
-	alternative     = phrase{[]string{"group", "outcome"}, "one of several ways to fulfil \"{group}\", which counts once: {outcome}"}
-	openSentence    = phrase{[]string{"open", "all"}, "Open: {open} of {all} inputs. Measure these first:"}
-	sheetOf         = phrase{[]string{"number", "of"}, "{number} of {of}"}
-	alsoPrintedNote = phrase{[]string{"text"}, "also printed as {text}"}
-	elsewhereLine   = phrase{[]string{"quantity", "where"}, "{quantity}: handled in \"{where}\", not looked at here"}
-	wrongSum        = phrase{[]string{"formula", "figure", "corner"}, "WRONG: {formula} = {figure}, {corner}"}
-	rightSum        = phrase{[]string{"formula", "figure"}, "Right: {formula} = {figure}"}
+	shapeRemark           = phrase{[]string{"shape"}, "if the stop were a pulse \"{shape}\""}
+	shareOfLimit          = phrase{[]string{"share"}, "{share} of the limit"}
+	setInPlace            = phrase{[]string{"key", "value", "former"}, "{key} = \"{value}\", in place of \"{former}\" in the file"}
+	setAnew               = phrase{[]string{"key", "value"}, "{key} = \"{value}\", of which the file says nothing"}
+	setByHand             = phrase{nil, "(set on the command line)"}
+	setByHandFor          = phrase{[]string{"former"}, "(set on the command line; \"{former}\" in the file)"}
+	openAbove             = phrase{[]string{"low"}, "{low} and more, no upper end"}
+	openBelow             = phrase{[]string{"high"}, "up to {high}, no lower end"}
+	withAllowance         = phrase{[]string{"figure", "share", "wider"}, "{figure}, with the allowance of {share}: {wider}"}
+	allowanceNote         = phrase{[]string{"share"}, "with the allowance of {share}"}
+	quoted                = phrase{[]string{"text"}, "\"{text}\""}
+	settledBy             = phrase{[]string{"source"}, "settled ({source})"}
+	openFrom              = phrase{[]string{"source", "why"}, "open ({source}): {why}"}
+	openWhy               = phrase{[]string{"why"}, "open: {why}"}
+	ratedRemark           = phrase{[]string{"document"}, "by \"{document}\" while its conditions hold"}
+	countSentence         = phrase{[]string{"all", "exceeded", "undecided", "not compared", "within"}, "{all} in all: {exceeded} exceeded, {undecided} undecided, {not compared} not compared, {within} within as entered."}
+	worstSentence         = phrase{[]string{"row", "outcome", "quantity", "demand", "limit", "clause"}, "{outcome} in row {row}, {quantity}: {demand}, against the limit {limit}, by \"{clause}\"."}
+	worstBeside           = phrase{[]string{"sentence", "reason"}, "{sentence} Beside it stands: {reason}."}
+	insideRow             = phrase{[]string{"rows", "outcome"}, "row {rows} is {outcome}"}
+	insideRows            = phrase{[]string{"rows", "outcome"}, "rows {rows} are {outcome}"}
+	insideWithin          = phrase{[]string{"group", "rows"}, "Inside the group \"{group}\" {rows}; by its rule one row within is enough."}
+	insideOpen            = phrase{[]string{"group", "rows"}, "Inside the group \"{group}\" {rows}; by its rule one row within is enough, and none is."}
+	usedUpHead            = phrase{[]string{"part"}, "the travel of \"{part}\" is used up before the body is at rest (S-35)."}
+	noRescueText          = phrase{[]string{"text"}, "\"{text}\": that is no rescue method (S-34)"}
+	worstReason           = phrase{[]string{"sentence", "reason"}, "{sentence} Reason: {reason}."}
+	alternative           = phrase{[]string{"group", "outcome"}, "one of several ways to fulfil \"{group}\", which counts once: {outcome}"}
+	usedUpInAllowanceHead = phrase{[]string{"part"}, "the travel of \"{part}\" may be used up within the allowance (S-53)."}
+	openSentence          = phrase{[]string{"open", "all"}, "Open: {open} of {all} inputs. Measure these first:"}
+	sheetOf               = phrase{[]string{"number", "of"}, "{number} of {of}"}
+	alsoPrintedNote       = phrase{[]string{"text"}, "also printed as {text}"}
+	elsewhereLine         = phrase{[]string{"quantity", "where"}, "{quantity}: handled in \"{where}\", not looked at here"}
+	wrongSum              = phrase{[]string{"formula", "figure", "corner"}, "WRONG: {formula} = {figure}, {corner}"}
+	rightSum              = phrase{[]string{"formula", "figure"}, "Right: {formula} = {figure}"}
 )
 
 // Labels of limits and sets behind page 1.

@@ -70,6 +70,7 @@ var cornerWords = map[arrest.Corner]string{
 	arrest.AtWritten: "as written",
 	arrest.AtLow:     "at the least peak",
 	arrest.AtHigh:    "at the greatest peak",
+	arrest.AtLongest: "at the longest stop",
 }
 
 var basisWords = map[arrest.Basis]string{

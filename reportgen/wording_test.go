@@ -137,12 +137,13 @@ var warningArguments = map[arrest.WarningID]int{
 	arrest.ExampleValues: 0, arrest.MeansAreNotPeaks: 0,
 	arrest.PathExhausted: 3, arrest.PathRigid: 0, arrest.PathBeyondCurve: 1, arrest.StaticStretchOnly: 1,
 	arrest.SeveralAbsorbers: 1, arrest.AbsorberOnRetractable: 1, arrest.NothingAbsorbs: 1, arrest.NoAllowanceEntered: 0,
-	arrest.RatedAgainstModel: 4, arrest.LedgersClose: 2, arrest.NoMiddle: 1,
+	arrest.RatedAgainstModel: 4, arrest.LedgersClose: 2, arrest.NoMiddle: 1, arrest.PathExhaustedInAllowance: 3,
 }
 
 // addedArguments counts what the report itself puts into the sentence of a
-// warning: what its comparison with published drops came to.
-var addedArguments = map[arrest.WarningID]int{arrest.NoAllowanceEntered: 4}
+// warning: what its comparison with published drops came to, and which ends of
+// two figures contradict each other.
+var addedArguments = map[arrest.WarningID]int{arrest.NoAllowanceEntered: 4, arrest.EstimatesDisjoint: 2}
 
 func TestEveryWarningHasWords(t *testing.T) {
 	for _, id := range arrest.WarningIDs() {

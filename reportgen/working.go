@@ -1,6 +1,7 @@
 package reportgen
 
 import (
+	"slices"
 	"strings"
 
 	"arrestcheck/arrest"
@@ -16,7 +17,7 @@ func (b *builder) workingBlocks() []Block {
 	var blocks []Block
 	printed := make(map[arrest.Term]string) // figures keep the digits of the line that gave them
 	for i := range b.res().Working {
-		w := &b.res().Working[i]
+		w := b.sub.working(&b.res().Working[i])
 		if strings.HasSuffix(w.Result.Symbol, wrongMark) {
 			continue
 		}
@@ -34,6 +35,26 @@ func (b *builder) workingBlocks() []Block {
 	}
 	return blocks
 }
+
+// working returns a line of working as it reads on a sheet about this subject:
+// nobody works with a tool that falls by itself, and nothing hangs on it.
+func (sub subject) working(w *arrest.WorkingLine) *arrest.WorkingLine {
+	if sub != aTool || !strings.Contains(w.Formula, workerSymbol) {
+		return w
+	}
+	read := *w
+	read.Formula = strings.ReplaceAll(strings.ReplaceAll(w.Formula, toolsTerm, ""), workerSymbol, toolSymbol)
+	read.Terms = slices.Clone(w.Terms)
+	for i := range read.Terms {
+		if read.Terms[i].Symbol == workerSymbol {
+			read.Terms[i].Symbol = toolSymbol
+		}
+	}
+	return &read
+}
+
+// The symbols of masses in the methods, and that of a tool.
+const workerSymbol, toolsTerm, toolSymbol = "m_worker", " + m_tools", "m_tool"
 
 // workingResult returns the result of a line in SI, and in US customary units
 // where the sheet shows those.

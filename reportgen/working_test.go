@@ -66,3 +66,11 @@ func TestForgottenWeight(t *testing.T) {
 		t.Errorf("got\n%s", strings.Join(got, "\n"))
 	}
 }
+
+// Nobody works with a tool that falls by itself: its mass is m_tool.
+func TestWorkingOfATool(t *testing.T) {
+	out := asText(t, sheet(t, "tool-tether.toml"), SIUnits, TextOptions{})
+	if strings.Contains(out, "m_worker") || strings.Contains(out, "m_tools") || !strings.Contains(out, "m = m_tool\n      m = (3.2000 kg)\n") {
+		t.Error("the working of a tool speaks of a worker")
+	}
+}

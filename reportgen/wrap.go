@@ -67,7 +67,7 @@ func split(word string, columns int) (full []string, rest string) {
 	from, used, joint := 0, 0, 0
 	for i, r := range word {
 		w := runeWidth(r)
-		if used+w > columns && used > 0 {
+		for used+w > columns && used > 0 { // twice where a joint leaves a wide letter no room
 			cut := i
 			if joint > from {
 				cut = joint

@@ -24,6 +24,7 @@ func TestWrap(t *testing.T) {
 		{"moving_load.time", 12, []string{"moving_load.", "time"}},
 		{"a/bcdefghijkl", 6, []string{"a/", "bcdefg", "hijkl"}},
 		{"\u0301 a", 5, []string{"\u0301 a"}},
+		{"_A安", 2, []string{"_", "A", "安"}}, // what stands behind a joint may need a line of its own
 	} {
 		if diff := cmp.Diff(c.out, wrap(c.in, c.columns)); diff != "" {
 			t.Errorf("wrap(%q, %d): %s", c.in, c.columns, diff)
