@@ -139,3 +139,14 @@ func TestEveryKindOfPartByEnergy(t *testing.T) {
 		}
 	}
 }
+
+// What a rope grab slips is no travel of the absorber beside it.
+func TestAbsorberTravelLeavesOtherTravelOut(t *testing.T) {
+	res := Evaluate(onPath(t, fall100(t), FromLabel,
+		testPart{kind: connector.RopeGrab, force: "2.5 kN", travel: "0.1 m"},
+		testPart{kind: connector.Webbing, basis: ByStiffness, give: "60 kN/m"},
+		testPart{kind: connector.Absorber, force: "4 kN", travel: "1 m"}))
+	v := math.Sqrt(2 * StandardGravity * 1.8)
+	_, distance := stopped(100, v, StandardGravity, []give{linear(60e3), held(2500, 2500, 0, 0.1), held(4000, 4000, 0, 1)})
+	near(t, "travel", find(t, &res, AbsorberTravel, Modelled).Value, distance-0.1-4000.0/60e3, 1e-9)
+}

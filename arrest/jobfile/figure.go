@@ -128,16 +128,51 @@ func (pg *page) parse(at spot, k *Key, d quantity.Dimension, text string) (quant
 		if !errors.As(err, &qe) {
 			qe = &quantity.Error{Text: text, Reason: err.Error(), Example: d.Example()}
 		}
-		// Where the text can be meant in two ways, the example holds both.
-		pg.fault(at.key, at.key, qe.Text, qe.Reason, at.write(strings.Split(qe.Example, " or ")...))
+		pg.fault(at.key, at.key, qe.Text, qe.Reason, at.right(k, qe))
 		return b, false
 	}
 	if reason := k.refuses(b); reason != "" {
-		pg.fault(at.key, at.key, text, reason, at.write(k.example(d)))
+		hint := at.write(k.example(d))
+		switch {
+		case k.Spread == MustSpread && b.Tolerance == quantity.Untold:
+			hint = "write: the range on the label, such as " + k.line() + "; copy it from the document, do not guess"
+		case strings.HasPrefix(reason, oneFigure):
+			hint = at.write(single(d, b)...)
+		}
+		pg.fault(at.key, at.key, text, reason, hint)
 		return b, false
 	}
 	return b, true
 }
+
+// right is the next action for a figure that is not read. Where the text can be
+// meant in two ways, it holds both; a tolerance that nobody has measured is left
+// to be measured.
+func (at spot) right(k *Key, qe *quantity.Error) string {
+	if !qe.Rough || k.Spread == NoSpread || k.Spread == NoWidth || k.Dimension == quantity.Ratio {
+		return at.write(strings.Split(qe.Example, " or ")...)
+	}
+	return "measure: it, and " + at.write(qe.Example+" ± ...") + " with your own measured tolerance in place of the dots" +
+		or + at.write(qe.Example) + ", which leaves the input open"
+}
+
+// single returns what a figure with a range or a ± can be meant as where one
+// figure is asked for, in the unit in which it is typed.
+func single(d quantity.Dimension, b quantity.Band) []string {
+	middle, _, isRange := strings.Cut(b.Text, "..")
+	if !isRange {
+		middle, _, _ = strings.Cut(strings.ReplaceAll(b.Text, "+/-", "±"), "±")
+		return []string{strings.TrimSpace(middle)}
+	}
+	low, high := strings.TrimSpace(middle), strings.TrimSpace(b.Text[len(middle)+len(".."):])
+	if _, err := quantity.Parse(d, low); err != nil {
+		low += " " + b.Unit.Symbol
+	}
+	return []string{low, high}
+}
+
+// oneFigure begins the reason of a figure that is not single.
+const oneFigure = "one figure is asked for"
 
 // example is a figure of the key as it is typed, without quotes.
 func (k *Key) example(d quantity.Dimension) string {
@@ -152,7 +187,7 @@ func (k *Key) refuses(b quantity.Band) string {
 	u := b.Unit
 	switch {
 	case k.Spread == NoSpread && b.Tolerance != quantity.Untold, k.Spread == NoWidth && b.Low != b.High:
-		return "one figure is asked for, without a range or a ±"
+		return oneFigure + ", without a range or a ±"
 	case k.Spread == MustSpread && b.Tolerance == quantity.Untold:
 		return "a rating without a mass range: a single figure does not say from which mass to which; a range or a ± is asked for"
 	case k.Sign == Positive && b.Low <= 0 && b.High <= 0:

@@ -188,12 +188,42 @@ func (pg *page) noSuchKey(g *group, path string, steps []step) (reason, hint str
 	if ok {
 		return "no such key", "write: --set '" + join(path, near) + rest + "=...'   (if that is what was meant)"
 	}
-	if path == "" {
-		if in := pg.groups.find(name); len(in) > 0 && in[0] != Entry && in[0] != Polar {
-			return "no such key at the top of the file", "write: --set '" + in[0] + "." + name + "=...'"
-		}
+	if right := pg.settable(name, rest); len(right) > 0 {
+		return pg.noPlace(path), "write: " + strings.Join(right, or)
 	}
 	return "no such key", "write: one of " + strings.Join(names, ", ")
+}
+
+// settable lists the overrides of a name in the sections of the file in which
+// it has a place, or in all there are where the file has none of them.
+func (pg *page) settable(name, rest string) []string {
+	var right, here []string
+	for _, section := range pg.groups.find(name) {
+		k := pg.groups[section].named[name]
+		if section == "" || section == Entry || section == Polar || k.Fixed {
+			continue
+		}
+		place := section
+		if pg.groups[""].named[section].Kind == Sections {
+			place = element(section, 0)
+		}
+		right = append(right, "--set '"+place+"."+name+rest+"=...'")
+		if pg.line(place) > 0 {
+			here = append(here, right[len(right)-1])
+		}
+	}
+	if len(here) > 0 {
+		return here
+	}
+	return right
+}
+
+// noPlace says that a name has its place elsewhere.
+func (pg *page) noPlace(path string) string {
+	if path == "" {
+		return "no such key at the top of the file"
+	}
+	return "no such key in " + path + "; it belongs in another section"
 }
 
 // former is what the file says in the place of an override, figures without

@@ -129,6 +129,13 @@ func TestRefusedOverrides(t *testing.T) {
 		{"metric-basic.toml", "mass=95 kg", `--set mass=95 kg: no such key at the top of the file
     write: --set 'worker.mass=...'
 `},
+		{"metric-basic.toml", "fall.distance=0.8 m", `--set fall.distance=0.8 m: no such key in fall; it belongs in another section
+    write: --set 'stop.distance=...'
+`},
+		{"metric-basic.toml", "fall.free_fall=about 6 ft", `--set fall.free_fall=about 6 ft: "about 6 ft": "about" does not say how far off the figure may be; measure it, and write it with your own measured tolerance, or as a range
+    measure: it, and write: --set 'fall.free_fall=6 ft ± ...' with your own measured tolerance in place of the dots
+       or: write: --set 'fall.free_fall=6 ft', which leaves the input open
+`},
 		{"metric-basic.toml", "worker.colour=red", `--set worker.colour=red: no such key
     write: one of name, mass, tools, persons
 `},

@@ -3,6 +3,8 @@ package jobfile
 import (
 	"errors"
 	"fmt"
+	"regexp"
+	"strconv"
 	"strings"
 
 	"github.com/BurntSushi/toml"
@@ -50,6 +52,8 @@ func (pg *page) syntaxWords(message, line string) (reason, hint string) {
 		return `in double quotes a \ begins an escape`, `write: \\ for one \, or the text in single quotes`
 	case says("cannot contain newlines"):
 		return "a quote is opened and not closed on the line", `write: ` + name + ` = "..." with both quotes`
+	case isPair && footMarks.MatchString(right):
+		return `feet and inches are written ft and in, not ' and "`, "write: " + name + " = " + strconv.Quote(spelledFeet(right))
 	case isPair && right == "":
 		return "nothing stands after the =", pg.example(name, "...") + ", or take the line out"
 	case isPair && !strings.ContainsAny(right[:1], `"'[{`):
@@ -61,6 +65,18 @@ func (pg *page) syntaxWords(message, line string) (reason, hint string) {
 		return "a key is followed by = and its value: " + firstLine(message), tomlHint
 	}
 	return "not read as TOML: " + firstLine(message), tomlHint
+}
+
+// footMarks finds feet and inches as they are written by hand: 5'6", 6', 5'-6".
+var footMarks = regexp.MustCompile(`^["']?\s*([0-9]+)\s*'\s*-?\s*(?:([0-9]+(?:\.[0-9]+)?)\s*(?:"|'')?)?["']*\s*(?:#.*)?$`)
+
+// spelledFeet spells a figure that footMarks finds.
+func spelledFeet(right string) string {
+	m := footMarks.FindStringSubmatch(right)
+	if m[2] == "" {
+		return m[1] + " ft"
+	}
+	return m[1] + " ft " + m[2] + " in"
 }
 
 // example returns a line put right: with the example of the key where that

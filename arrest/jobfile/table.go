@@ -135,6 +135,8 @@ func (t *table) unknownWord(k *Key, word string) {
 	hint := "write: one of " + listed(k.Choices)
 	if near, ok := nearest(word, k.Choices); ok {
 		hint = "write: " + k.Name + " = " + strconv.Quote(near)
+	} else if meant := shortFor(word, k.Choices); len(meant) > 0 {
+		hint = "did you mean: " + k.Name + " = " + enumerate(meant, " or ") + "?"
 	} else if len(k.Choices) == 1 {
 		hint = k.hint()
 	}

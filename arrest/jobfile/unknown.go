@@ -131,6 +131,32 @@ func (t *table) renamed(name, right string) string {
 	return right + " = ..."
 }
 
+// shortWords holds what people call a quantity for short, with the words of the
+// closed set that can be meant.
+var shortWords = map[string][]string{
+	"clearance": {"clearance_left", "clearance_needed"}, "anchor": {"anchor_strength_per_person", "anchor_force"},
+	"anchorstrength": {"anchor_strength_per_person"}, "peak": {"peak_force"}, "force": {"peak_force"},
+	"arrestforce": {"peak_force"}, "arrestingforce": {"peak_force"}, "maximumarrestforce": {"peak_force"},
+	"maximumarrestingforce": {"peak_force"}, "maf": {"peak_force"}, "fall": {"free_fall"}, "fallheight": {"free_fall"},
+	"falldistance": {"free_fall", "total_fall_distance"}, "totalfall": {"total_fall_distance"},
+	"mass": {"total_mass"}, "weight": {"total_mass"}, "capacity": {"total_mass"},
+	"deceleration": {"deceleration_distance", "peak_deceleration"}, "distance": {"stopping_distance", "deceleration_distance"},
+	"swing": {"swing_drop", "swing_speed"}, "sag": {"line_sag"}, "tension": {"line_tension"},
+	"energy": {"fall_energy"}, "speed": {"fall_speed"}, "factor": {"fall_factor"}, "meanforce": {"mean_force_over_distance", "mean_force_over_time"},
+}
+
+// shortFor returns the words of a closed set that a short one can stand for,
+// quoted.
+func shortFor(word string, choices []string) []string {
+	var meant []string
+	for _, w := range shortWords[letters(word)] {
+		if slices.Contains(choices, w) {
+			meant = append(meant, strconv.Quote(w))
+		}
+	}
+	return meant
+}
+
 // sameLetters finds the name that differs from s in case, or in what joins its
 // words, only.
 func sameLetters(s string, names []string) (string, bool) {

@@ -227,7 +227,7 @@ func approximate(_ Dimension, text string) *fault {
 			return &fault{
 				reason: quoted(strings.TrimSpace(word)) + " does not say how far off the figure may be; measure it, and write it with your own measured tolerance, or as a range",
 				better: []string{rest},
-				rough:  true,
+				rough:  strings.ContainsFunc(rest, func(r rune) bool { return r < utf8.RuneSelf && isDigit(byte(r)) }),
 			}
 		}
 	}

@@ -18,11 +18,23 @@ import (
 const checkLong = `Checks one or more job files and prints a report of each. A job names its own
 limit files; --limits adds others to every job. All files are read and all
 faults told before anything is printed; one refused file refuses the run.
+
+--set puts a figure or word in the place of one in every job file given. The
+report says so, and the figure is open: it has lost its source. --explain
+prints, in place of the report, what keeps one row from being settled and what
+would settle it. --series writes the modelled arrest of a job with a connector
+path as CSV: time, force, speed and travel.
 `
 
+// checkFlags are the flags of check that are not those of a report.
+type checkFlags struct {
+	limits, sets []string
+	explain      string
+}
+
 func newCheck(o *outcome, in surroundings) *cobra.Command {
-	var limitFiles []string
 	var flags reportFlags
+	var more checkFlags
 	cmd := &cobra.Command{
 		Use:   "check FILE... [flags]",
 		Short: "check job files and print their reports",
@@ -30,30 +42,72 @@ func newCheck(o *outcome, in surroundings) *cobra.Command {
 		Example: `  arrestcheck check job.toml
   arrestcheck check --limits site.toml --units us job.toml
   arrestcheck check --format json --out result.json job.toml
+  arrestcheck check --set 'worker.mass=104 kg ± 1 kg' job.toml
+  arrestcheck check --explain peak-on-body job.toml
+  arrestcheck check --series arrest.csv path.toml
   generate-job | arrestcheck check -`,
 		DisableFlagsInUseLine: true,
 		Args:                  filesAndStdin,
-		RunE: func(_ *cobra.Command, names []string) error {
-			if err := flags.conflict(); err != nil {
-				return err
-			}
-			sheets, inputs, err := read(names, limitFiles, in, o)
-			dest, taken := flags.destination(inputs)
-			if err := errors.Join(err, taken); err != nil {
-				return flatten(err)
-			}
-			for i := range sheets {
-				assess(&sheets[i])
-				o.code = worst(o.code, codeOfAssessment(sheets[i].Assessment))
-			}
-			o.out = dest
-			o.result, err = flags.render(sheets, in)
-			return err
+		RunE: func(cmd *cobra.Command, names []string) error {
+			return check(cmd, names, &flags, &more, o, in)
 		},
 	}
-	cmd.Flags().StringArrayVar(&limitFiles, "limits", nil, "a limit `FILE` for every job; may be repeated")
 	flags.add(cmd)
+	flags.file(seriesFlag, "write the modelled arrest to this new `FILE`")
+	cmd.Flags().StringArrayVar(&more.limits, "limits", nil, "a limit `FILE` for every job; repeatable")
+	cmd.Flags().StringArrayVar(&more.sets, setFlag, nil, "put `KEY=VALUE` into every job; repeatable")
+	cmd.Flags().StringVar(&more.explain, explainFlag, "", "print what would settle the row of `LIMIT`")
 	return cmd
+}
+
+// check reads everything, works everything out and leaves the results in o.
+func check(cmd *cobra.Command, names []string, flags *reportFlags, more *checkFlags, o *outcome, in surroundings) error {
+	if err := errors.Join(flags.conflict(), more.conflict(cmd, flags, names)); err != nil {
+		return err
+	}
+	overrides, err := overrides(more.sets)
+	if err != nil {
+		return err
+	}
+	sheets, inputs, err := read(names, more.limits, overrides, in, o)
+	if err := errors.Join(err, flags.check(inputs)); err != nil {
+		return flatten(err)
+	}
+	for i := range sheets {
+		assess(&sheets[i])
+		o.code = worst(o.code, codeOfAssessment(sheets[i].Assessment))
+	}
+	if to := flags.destination(seriesFlag); to != nil {
+		data, remark, err := series(&sheets[0])
+		if err != nil {
+			return err
+		}
+		o.deliver(to, data)
+		o.remarks = append(o.remarks, remark)
+	}
+	result, err := more.result(cmd, sheets, flags, in)
+	o.deliver(flags.out(), result)
+	return err
+}
+
+// conflict refuses flags that contradict each other or the files.
+func (f *checkFlags) conflict(cmd *cobra.Command, flags *reportFlags, names []string) error {
+	var faults []error
+	if cmd.Flags().Changed(explainFlag) && flags.format.word == "json" {
+		faults = append(faults, &usageError{"--explain with --format json", "--explain writes text or markdown; the JSON without it holds the reasons of every row"})
+	}
+	if flags.destination(seriesFlag) != nil && len(names) > 1 {
+		faults = append(faults, &usageError{fmt.Sprintf("--series with %d job files", len(names)), "name one job"})
+	}
+	return errors.Join(faults...)
+}
+
+// result writes the reports, or in their place the explanations of one row.
+func (f *checkFlags) result(cmd *cobra.Command, sheets []reportgen.Sheet, flags *reportFlags, in surroundings) ([]byte, error) {
+	if cmd.Flags().Changed(explainFlag) {
+		return explain(sheets, f.explain, flags, in)
+	}
+	return flags.render(sheets, in)
 }
 
 // filesAndStdin wants at least one file, and standard input at most once.
@@ -76,7 +130,7 @@ func filesAndStdin(cmd *cobra.Command, names []string) error {
 
 // read reads the limit files of the command line and the jobs, every one of
 // them, and returns what is wrong with them all together.
-func read(names, limitFiles []string, in surroundings, o *outcome) ([]reportgen.Sheet, []fs.FileInfo, error) {
+func read(names, limitFiles []string, overrides []jobfile.Override, in surroundings, o *outcome) ([]reportgen.Sheet, []fs.FileInfo, error) {
 	var inputs []fs.FileInfo
 	var failures []error
 	sets, used, err := readLimitFiles(limitFiles)
@@ -84,7 +138,7 @@ func read(names, limitFiles []string, in surroundings, o *outcome) ([]reportgen.
 
 	sheets := make([]reportgen.Sheet, 0, len(names))
 	for i, name := range names {
-		file, used, err := readJob(name, in)
+		file, used, err := readJob(name, overrides, in)
 		inputs, failures = append(inputs, used...), append(failures, err)
 		if err == nil {
 			remarks, err := addSets(file, sets)
@@ -118,7 +172,7 @@ func readLimitFiles(names []string) ([]limits.Set, []fs.FileInfo, error) {
 
 // readJob reads a job and the limit files it names, and tells which files
 // those were.
-func readJob(name string, in surroundings) (*jobfile.File, []fs.FileInfo, error) {
+func readJob(name string, overrides []jobfile.Override, in surroundings) (*jobfile.File, []fs.FileInfo, error) {
 	job, err := readInput(name, in.stdin)
 	if err != nil {
 		return nil, nil, err
@@ -129,7 +183,7 @@ func readJob(name string, in surroundings) (*jobfile.File, []fs.FileInfo, error)
 		return nil, inputs, err
 	}
 	defer root.Close()
-	file, err := jobfile.Read(name, job.data, root.FS())
+	file, err := jobfile.Read(name, job.data, root.FS(), overrides...)
 	if err != nil {
 		return nil, inputs, err
 	}

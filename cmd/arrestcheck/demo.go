@@ -42,13 +42,12 @@ func newDemo(o *outcome, in surroundings) *cobra.Command {
 			if err := flags.conflict(); err != nil {
 				return err
 			}
-			dest, err := flags.destination(nil)
-			if err != nil {
+			if err := flags.check(nil); err != nil {
 				return err
 			}
-			o.out = dest
 			if input {
-				o.result, err = demoInput()
+				files, err := demoInput()
+				o.deliver(flags.out(), files)
 				return err
 			}
 			sheet, err := demoSheet()
@@ -57,7 +56,8 @@ func newDemo(o *outcome, in surroundings) *cobra.Command {
 			}
 			o.remarks = append(o.remarks, fmt.Sprintf("the demo ends with exit code %d; check would end with %d",
 				exitWithin, codeOfAssessment(sheet.Assessment)))
-			o.result, err = flags.render([]reportgen.Sheet{sheet}, in)
+			report, err := flags.render([]reportgen.Sheet{sheet}, in)
+			o.deliver(flags.out(), report)
 			return err
 		},
 	}

@@ -33,6 +33,65 @@ Of several files the worst counts, in the order 4, 3, 1, 2, 0.
 limits. The competent or qualified person and local code decide.
 `
 
+// exitHelps is what the help of each command says of exit codes; "" is the
+// program itself.
+var exitHelps = map[string]string{
+	"": exitHelp, "check": exitHelp, "register": registerExit, "archive": archiveExit, "reproduce": reproduceExit, "compare": compareExit,
+}
+
+const registerExit = `Exit codes: the worst of all jobs, in the order 4, 3, 1, 2, 0
+  0    of every job every limit within as entered and nothing left out
+  1    of some job a limit is exceeded
+  2    otherwise: something is undecided, not compared or not entered
+  3    a job or the command line is refused; the other jobs have their rows
+  4    a file cannot be read or written, or an internal error
+  130  interrupted; no file is written
+0 permits nothing: the competent or qualified person and local code decide.
+`
+
+const archiveExit = `Exit codes:
+  0    archived, whatever its limits came to
+  3    refused: the command line or a file has faults; nothing is written
+  4    a file cannot be read or written, or an internal error
+  130  interrupted; nothing is written
+`
+
+const reproduceExit = `Exit codes: the worst of all archives, in the order 4, 3, 1, 0
+  0    the same: every digest, every figure and outcome, every report; with
+       --limits every outcome too
+  1    something differs, or the archived job is no longer read
+  3    the command line is refused, or a folder is no whole archive
+  4    a file cannot be read or written, or an internal error
+  130  interrupted; no file is written
+0 permits nothing, and does not say that the figures are right.
+`
+
+const compareExit = `Exit codes:
+  0    no input, figure or outcome differs
+  1    something differs
+  3    refused: the command line, a job or an archive has faults
+  4    a file cannot be read or written, or an internal error
+  130  interrupted; no file is written
+`
+
+// The codes of what is held against what it was, or against another.
+const (
+	exitSame    = exitWithin
+	exitDiffers = exitExceeded
+)
+
+// codeOfSame returns what such a comparison comes to.
+func codeOfSame(same bool) exitCode {
+	if same {
+		return exitSame
+	}
+	return exitDiffers
+}
+
+// worseThan reports whether c counts before d. Codes that this program never
+// ends with count before none.
+func (c exitCode) worseThan(d exitCode) bool { return severity[c] > severity[d] }
+
 // severity orders the codes for the worst of several files.
 var severity = map[exitCode]int{
 	exitWithin: 0, exitOtherwise: 1, exitExceeded: 2, exitRefused: 3, exitFile: 4, exitInterrupted: 5,
@@ -49,14 +108,13 @@ func worst(a, b exitCode) exitCode {
 // codeOfAssessment returns what one checked job comes to. A job without a
 // single limit is never 0: nothing was compared.
 func codeOfAssessment(a *limits.Assessment) exitCode {
-	n := a.Counts()
 	switch {
-	case n[limits.Exceeded] > 0:
+	case a.Exceeded():
 		return exitExceeded
-	case len(a.Groups) == 0, n[limits.Within] != len(a.Groups), len(a.NotEntered) > 0:
-		return exitOtherwise
+	case a.Settled():
+		return exitWithin
 	}
-	return exitWithin
+	return exitOtherwise
 }
 
 // codeOfError returns what a failure comes to; of joined failures the worst.

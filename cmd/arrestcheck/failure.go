@@ -119,8 +119,8 @@ func flagFault(cmd *cobra.Command, err error) error {
 	name := unknown.GetSpecifiedName()
 	if near := nearestFlag(cmd, name); near != "" {
 		hint = "did you mean: --" + near
-	} else if c, _, err := cmd.Root().Find([]string{name}); err == nil && c != cmd.Root() {
-		hint = "did you mean: " + c.CommandPath()
+	} else if slices.ContainsFunc(commands(), func(c command) bool { return c.name == name }) {
+		hint = "did you mean: " + programName + " " + name
 	}
 	dashes := "--"
 	if unknown.GetSpecifiedShortnames() != "" {
@@ -129,14 +129,21 @@ func flagFault(cmd *cobra.Command, err error) error {
 	return &usageError{fmt.Sprintf("unknown flag %q", dashes+name), hint}
 }
 
-// nearestFlag asks the command library for the flag most like name: the same
-// measure of likeness as for commands.
+// nearestFlag returns the flag most like name.
 func nearestFlag(cmd *cobra.Command, name string) string {
+	var names []string
+	cmd.Flags().VisitAll(func(f *pflag.Flag) { names = append(names, f.Name) })
+	return nearest(name, names)
+}
+
+// nearest asks the command library for the word most like another: the same
+// measure of likeness as for commands.
+func nearest(word string, words []string) string {
 	probe := &cobra.Command{SuggestionsMinimumDistance: 2}
-	cmd.Flags().VisitAll(func(f *pflag.Flag) {
-		probe.AddCommand(&cobra.Command{Use: f.Name, Run: func(*cobra.Command, []string) {}})
-	})
-	if near := probe.SuggestionsFor(name); len(near) > 0 {
+	for _, w := range words {
+		probe.AddCommand(&cobra.Command{Use: w, Run: func(*cobra.Command, []string) {}})
+	}
+	if near := probe.SuggestionsFor(word); len(near) > 0 {
 		return near[0]
 	}
 	return ""

@@ -8,6 +8,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"arrestcheck/arrest"
+	"arrestcheck/arrest/study"
 	"arrestcheck/reportgen"
 )
 
@@ -46,9 +47,17 @@ func newMethods(o *outcome) *cobra.Command {
 	return cmd
 }
 
+// allMethods returns the methods of the evaluation and of the studies, in the
+// order of their ids.
+func allMethods() []arrest.Method {
+	all := append(arrest.Methods(), study.Methods()...)
+	slices.SortStableFunc(all, func(a, b arrest.Method) int { return strings.Compare(a.ID, b.ID) })
+	return all
+}
+
 func completeMethods(*cobra.Command, []string, string) ([]string, cobra.ShellCompDirective) {
 	var ids []string
-	for _, m := range arrest.Methods() {
+	for _, m := range allMethods() {
 		ids = append(ids, m.ID+"\t"+m.Title)
 	}
 	return ids, cobra.ShellCompDirectiveNoFileComp
@@ -56,10 +65,10 @@ func completeMethods(*cobra.Command, []string, string) ([]string, cobra.ShellCom
 
 // methodOf returns the method with the id, spelled exactly.
 func methodOf(id string) (arrest.Method, error) {
-	if m, ok := arrest.MethodByID(id); ok {
-		return m, nil
+	all := allMethods()
+	if i := slices.IndexFunc(all, func(m arrest.Method) bool { return m.ID == id }); i >= 0 {
+		return all[i], nil
 	}
-	all := arrest.Methods()
 	hint := "see: " + programName + " methods"
 	if near := slices.IndexFunc(all, func(m arrest.Method) bool { return strings.EqualFold(m.ID, id) }); near >= 0 {
 		hint = "did you mean: " + programName + " methods " + all[near].ID
@@ -69,7 +78,7 @@ func methodOf(id string) (arrest.Method, error) {
 
 func methodList() reportgen.Report {
 	var lines []reportgen.Line
-	for _, m := range arrest.Methods() {
+	for _, m := range allMethods() {
 		lines = append(lines, reportgen.Line{Label: m.ID, Text: m.Title})
 	}
 	return reportgen.Report{Sections: []reportgen.Section{{
@@ -91,11 +100,13 @@ func methodRecord(m arrest.Method) reportgen.Report {
 	section := func(heading string, b reportgen.Block) reportgen.Section {
 		return reportgen.Section{Heading: heading, Blocks: []reportgen.Block{b}}
 	}
-	return reportgen.Report{Sections: []reportgen.Section{
-		section(m.ID+"  "+m.Title, reportgen.Block{Lines: formulas}),
-		section("Symbols", reportgen.Block{Lines: symbols}),
+	sections := []reportgen.Section{section(m.ID+"  "+m.Title, reportgen.Block{Lines: formulas})}
+	if len(symbols) > 0 {
+		sections = append(sections, section("Symbols", reportgen.Block{Lines: symbols}))
+	}
+	return reportgen.Report{Sections: append(sections,
 		section("Holds when", reportgen.Block{Text: m.Valid}),
 		section("Errs", reportgen.Block{Text: m.Errs}),
 		section("Source", reportgen.Block{Text: m.Source}),
-	}}
+	)}
 }

@@ -17,8 +17,8 @@ var update = flag.Bool("update", false, "write what the program prints now into 
 func TestReadmeIsTrue(t *testing.T) {
 	readme := readText(t, "../../README.md")
 	toml, shown := blocks(readme, "toml"), blocks(readme, "text")
-	if len(toml) != 2 || len(shown) != 4 {
-		t.Fatalf("%d toml and %d text blocks, want 2 and 4", len(toml), len(shown))
+	if len(toml) != 3 || len(shown) != 4 {
+		t.Fatalf("%d toml and %d text blocks, want 3 and 4", len(toml), len(shown))
 	}
 	dir := t.TempDir()
 	job := filepath.Join(dir, "job.toml")
@@ -41,6 +41,14 @@ func TestReadmeIsTrue(t *testing.T) {
 	}
 	if *update {
 		writeText(t, "../../README.md", readme)
+	}
+
+	// The parts are added to the job, beside the stop.
+	path, series := filepath.Join(dir, "path.toml"), filepath.Join(dir, "arrest.csv")
+	writeText(t, path, toml[0]+toml[2])
+	code, stdout, _ = try("check", "--series", series, path)
+	if code != int(exitExceeded) || !strings.Contains(stdout, "absorber") || !strings.HasPrefix(readText(t, series), seriesHeader) {
+		t.Errorf("with a connector path: exit code %d", code)
 	}
 	for line := range strings.Lines(shown[3]) {
 		if !strings.Contains(exitHelp, "  "+line) {
@@ -71,16 +79,22 @@ func TestReadmeListsTheCommands(t *testing.T) {
 			t.Errorf("the list lacks the command %s", name[1])
 		}
 	}
-	_, help, _ = try("help", "check")
 	flags := regexp.MustCompile(`--([a-z]+)`)
-	for _, name := range flags.FindAllString(help, -1) {
+	all := ""
+	for _, command := range []string{"check", "new"} {
+		_, help, _ = try("help", command)
+		_, help, _ = strings.Cut(help, "\nFlags:\n")
+		help, _, _ = strings.Cut(help, "\nExamples:\n")
+		all += help
+	}
+	for _, name := range flags.FindAllString(all, -1) {
 		if name != "--help" && !strings.Contains(list, name+" ") {
 			t.Errorf("the list lacks the flag %s", name)
 		}
 	}
 	for _, name := range flags.FindAllString(list, -1) {
-		if !strings.Contains(help, name+" ") {
-			t.Errorf("check has no flag %s", name)
+		if !strings.Contains(all, name+" ") {
+			t.Errorf("no command has the flag %s", name)
 		}
 	}
 }
@@ -117,8 +131,7 @@ func writeText(t *testing.T, path, text string) {
 	}
 }
 
-// Every file and folder that DEVELOPERS.md names exists, save those it says
-// are to come.
+// Every file and folder that DEVELOPERS.md names exists.
 func TestDevelopersNamesWhatExists(t *testing.T) {
 	text := readText(t, "../../DEVELOPERS.md")
 	names := regexp.MustCompile("`([a-z_./-]*/[a-z_.-]+|[A-Z]+\\.md)`").FindAllStringSubmatch(text, -1)
@@ -126,11 +139,17 @@ func TestDevelopersNamesWhatExists(t *testing.T) {
 		t.Errorf("only %d names found", len(names))
 	}
 	for _, name := range names {
-		if name[1] == "testdata/validation" {
-			continue
-		}
 		if _, err := os.Stat(filepath.Join("../..", name[1])); err != nil {
 			t.Error(err)
 		}
+	}
+}
+
+// The comparison with published data stands in DEVELOPERS.md as its test prints
+// it.
+func TestDevelopersShowsTheComparison(t *testing.T) {
+	shown := blocks(readText(t, "../../DEVELOPERS.md"), "text")
+	if last := shown[len(shown)-1]; last != readText(t, "../../testdata/validation/published.txt") {
+		t.Errorf("DEVELOPERS.md shows another comparison than testdata/validation/published.txt:\n%s", last)
 	}
 }

@@ -3,7 +3,6 @@ package main
 import (
 	"bytes"
 	"fmt"
-	"io/fs"
 	"os"
 	"slices"
 	"strings"
@@ -37,51 +36,32 @@ func (c *choice) Set(word string) error {
 type reportFlags struct {
 	format, units, color choice
 	ascii                bool
-	out                  string
-	outGiven             func() bool
-	force                bool
+	fileFlags
 }
 
 func (f *reportFlags) add(cmd *cobra.Command) {
-	f.format, f.units, f.color = oneOf("text", "json"), oneOf("both", "si", "us"), oneOf("auto", "always", "never")
-	flags := cmd.Flags()
-	flags.Var(&f.format, "format", "what is written")
-	flags.Var(&f.units, "units", "units of the text")
-	flags.BoolVar(&f.ascii, "ascii", false, "plain ASCII text")
-	flags.Var(&f.color, "color", "colour; auto: on a terminal")
-	flags.StringVar(&f.out, "out", "", "write to this new `FILE`")
-	flags.BoolVar(&f.force, "force", false, "let --out replace an existing file")
-	f.outGiven = func() bool { return flags.Changed("out") }
-	for name, c := range map[string]*choice{"format": &f.format, "units": &f.units, "color": &f.color} {
-		_ = cmd.RegisterFlagCompletionFunc(name, cobra.FixedCompletions(c.words, cobra.ShellCompDirectiveNoFileComp))
-	}
+	f.addLayout(cmd)
+	f.units = oneOf("both", "si", "us")
+	f.units.flag(cmd, "units", "units of the text")
 }
 
-// conflict refuses flags that contradict each other.
-func (f *reportFlags) conflict() error {
-	switch {
-	case f.outGiven() && (f.out == "" || f.out == "-"):
-		return &usageError{fmt.Sprintf("--out %q names no file", f.out),
-			"without --out the report goes to standard output"}
-	case f.force && !f.outGiven():
-		return &usageError{"--force without --out", "--force lets --out FILE replace an existing file"}
-	}
-	return nil
+// addLayout adds the flags of a report in which every figure has one unit.
+func (f *reportFlags) addLayout(cmd *cobra.Command) {
+	f.format, f.color = oneOf("text", "json", "markdown"), oneOf("auto", "always", "never")
+	f.format.flag(cmd, "format", "what is written")
+	cmd.Flags().BoolVar(&f.ascii, "ascii", false, "plain ASCII text")
+	f.color.flag(cmd, "color", "colour; auto: on a terminal")
+	f.fileFlags.add(cmd)
 }
 
-// destination returns where the result goes, nil for standard output, and why
-// it must not go there.
-func (f *reportFlags) destination(inputs []fs.FileInfo) (*destination, error) {
-	if !f.outGiven() {
-		return nil, nil
-	}
-	d := &destination{f.out, f.force}
-	return d, d.check(inputs)
+// flag adds the flag of a choice, with its words to complete.
+func (c *choice) flag(cmd *cobra.Command, name, usage string) {
+	cmd.Flags().Var(c, name, usage)
+	_ = cmd.RegisterFlagCompletionFunc(name, cobra.FixedCompletions(c.words, cobra.ShellCompDirectiveNoFileComp))
 }
 
 // render writes the sheets in the chosen format.
 func (f *reportFlags) render(sheets []reportgen.Sheet, in surroundings) ([]byte, error) {
-	options := reportgen.TextOptions{ASCII: f.ascii, Color: f.colored(in)}
 	var b bytes.Buffer
 	for i := range sheets {
 		if f.format.word == "json" {
@@ -90,14 +70,25 @@ func (f *reportFlags) render(sheets []reportgen.Sheet, in surroundings) ([]byte,
 			}
 			continue
 		}
-		if i > 0 {
-			b.WriteString("\n\n")
-		}
-		if err := reportgen.Text(&b, reportgen.Build(&sheets[i], f.unitChoice()), options); err != nil {
+		if err := f.write(&b, reportgen.Build(&sheets[i], f.unitChoice()), in); err != nil {
 			return nil, err
 		}
 	}
 	return b.Bytes(), nil
+}
+
+// write adds one report to what is written already.
+func (f *reportFlags) write(b *bytes.Buffer, r reportgen.Report, in surroundings) error {
+	if f.format.word == "markdown" {
+		if b.Len() > 0 {
+			b.WriteString("\n")
+		}
+		return reportgen.Markdown(b, r, reportgen.MarkdownOptions{ASCII: f.ascii})
+	}
+	if b.Len() > 0 {
+		b.WriteString("\n\n")
+	}
+	return reportgen.Text(b, r, reportgen.TextOptions{ASCII: f.ascii, Color: f.colored(in)})
 }
 
 // print lays out a report of the program's own, the list of units and the
@@ -129,7 +120,7 @@ func (f *reportFlags) colored(in surroundings) bool {
 		return false
 	}
 	terminal, ok := in.stdout.(*os.File)
-	return ok && !f.outGiven() && isatty.IsTerminal(terminal.Fd()) &&
+	return ok && f.out() == nil && isatty.IsTerminal(terminal.Fd()) &&
 		in.lookUp("NO_COLOR") == "" && in.lookUp("TERM") != "dumb"
 }
 

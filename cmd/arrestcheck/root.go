@@ -2,6 +2,7 @@ package main
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"github.com/spf13/cobra"
@@ -15,9 +16,9 @@ figures show, what they leave open and what was not looked at.
 It is arithmetic. It holds no limit of its own and permits nothing.
 `
 
-// newRoot builds the command tree. The commands write what they come to into
-// o and everything else to the tree's own output.
-func newRoot(o *outcome, in surroundings) *cobra.Command {
+// newRoot builds the command tree for a command line. The commands write what
+// they come to into o and everything else to the tree's own output.
+func newRoot(args []string, o *outcome, in surroundings) *cobra.Command {
 	root := &cobra.Command{
 		Use:   programName,
 		Short: "holds a fall and its stop against the limits you enter",
@@ -37,9 +38,50 @@ func newRoot(o *outcome, in surroundings) *cobra.Command {
 		fmt.Fprint(cmd.OutOrStdout(), helpText(cmd))
 	})
 	root.SetHelpCommand(newHelp())
-	root.AddCommand(newCheck(o, in), newDemo(o, in), newMethods(o), newUnits(o), newVersion(o), newCompletion())
+	for _, c := range wanted(args) {
+		root.AddCommand(c.build(o, in))
+	}
 	return root
 }
+
+// A command is one of the program's, made when it is wanted: to make all of
+// them takes longer than to check a small job.
+type command struct {
+	name  string
+	build func(*outcome, surroundings) *cobra.Command
+}
+
+// alone leaves out the surroundings, which few commands look at.
+func alone(build func(*outcome) *cobra.Command) func(*outcome, surroundings) *cobra.Command {
+	return func(o *outcome, _ surroundings) *cobra.Command { return build(o) }
+}
+
+// commands returns every command but help and completion, which look at all the
+// others.
+func commands() []command {
+	return []command{
+		{"check", newCheck}, {"demo", newDemo}, {"new", alone(newNew)}, {"schema", alone(newSchema)},
+		{"register", newRegister}, {"archive", newArchive}, {"reproduce", newReproduce}, {"compare", newCompare},
+		{"sweep", newSweep}, {"solve", newSolve}, {"envelope", newEnvelope}, {"sensitivity", newSensitivity},
+		{"lesson", newLesson}, {"watch", newWatch},
+		{"methods", alone(newMethods)}, {"units", alone(newUnits)}, {"version", alone(newVersion)},
+	}
+}
+
+// wanted returns the one command that a command line begins with, and all of
+// them where it begins with anything else.
+func wanted(args []string) []command {
+	all := commands()
+	if len(args) > 0 {
+		if i := slices.IndexFunc(all, func(c command) bool { return c.name == args[0] }); i >= 0 {
+			return all[i : i+1]
+		}
+	}
+	return append(all, command{"completion", func(*outcome, surroundings) *cobra.Command { return newCompletion() }})
+}
+
+// pageWidth is the greatest width of what the program lays out itself.
+const pageWidth = 80
 
 // helpText lays out the help of one command.
 func helpText(cmd *cobra.Command) string {
@@ -55,12 +97,16 @@ func helpText(cmd *cobra.Command) string {
 			}
 		}
 	}
-	fmt.Fprintf(&b, "\nFlags:\n%s", cmd.LocalFlags().FlagUsages())
+	fmt.Fprintf(&b, "\nFlags:\n%s", cmd.LocalFlags().FlagUsagesWrapped(pageWidth))
 	if cmd.Example != "" {
 		fmt.Fprintf(&b, "\nExamples:\n%s\n", cmd.Example)
 	}
-	if !cmd.HasParent() || cmd.Name() == "check" {
-		b.WriteString("\n" + exitHelp)
+	name := cmd.Name()
+	if !cmd.HasParent() {
+		name = ""
+	}
+	if exits := exitHelps[name]; exits != "" {
+		b.WriteString("\n" + exits)
 	}
 	return b.String()
 }

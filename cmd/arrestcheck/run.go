@@ -15,9 +15,23 @@ import (
 // computed before the first byte is delivered.
 type outcome struct {
 	code    exitCode
-	result  []byte       // for standard output, or for the file of out
-	remarks []string     // for standard error, without the program's name
-	out     *destination // nil: standard output
+	result  []byte    // for standard output
+	files   []pending // for the files that the command line names
+	remarks []string  // for standard error, without the program's name
+
+	// last does what is left once all else is computed and nothing failed: what
+	// is written row by row, or is more than a file. nil where there is nothing.
+	last func(ctx context.Context, o *outcome, stdout io.Writer) error
+}
+
+// deliver hands a result over: to the file of to, or to standard output where
+// to is nil.
+func (o *outcome) deliver(to *destination, data []byte) {
+	if to == nil {
+		o.result = data
+		return
+	}
+	o.files = append(o.files, pending{destination: *to, data: data})
 }
 
 // run is the program: arguments in, exit code out. It writes results to
@@ -28,10 +42,10 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer, env ...string
 	ctx, stop := signal.NotifyContext(context.Background(), os.Interrupt, syscall.SIGTERM)
 	defer stop()
 
-	in := surroundings{stdin: stdin, stdout: stdout, env: env}
-	o, err := await(ctx, func() (outcome, error) { return execute(args, in) })
+	in := surroundings{stdin: stdin, stdout: stdout, stderr: stderr, env: env}
+	o, err := await(ctx, func() (outcome, error) { return execute(ctx, args, in) })
 	if err == nil {
-		err = deliver(ctx, o, stdout)
+		err = deliver(ctx, &o, stdout)
 	}
 	if err != nil {
 		fmt.Fprint(stderr, describe(err))
@@ -46,38 +60,50 @@ func run(args []string, stdin io.Reader, stdout, stderr io.Writer, env ...string
 // surroundings is what a command may know of the outside.
 type surroundings struct {
 	stdin  io.Reader
-	stdout io.Writer // looked at, never written to, by the commands
+	stdout io.Writer // looked at, never written to, by the commands but watch
+	stderr io.Writer // of a terminal, how far a long run is; nothing else by the commands
 	env    []string
 }
 
 // execute parses the command line and runs the command it names.
-func execute(args []string, in surroundings) (outcome, error) {
+func execute(ctx context.Context, args []string, in surroundings) (outcome, error) {
 	var o outcome
 	var printed bytes.Buffer
-	root := newRoot(&o, in)
+	root := newRoot(args, &o, in)
 	root.SetArgs(append([]string{}, args...))
 	root.SetIn(in.stdin)
 	root.SetOut(&printed)
 	root.SetErr(io.Discard)
-	if err := root.Execute(); err != nil {
+	if err := root.ExecuteContext(ctx); err != nil {
 		return outcome{}, asUsage(root, args, err)
 	}
-	if o.result == nil {
+	if printed.Len() > 0 {
 		o.result = printed.Bytes()
 	}
 	return o, nil
 }
 
-// deliver writes the result to where it belongs.
-func deliver(ctx context.Context, o outcome, stdout io.Writer) error {
-	if o.out != nil {
-		return o.out.write(ctx, o.result)
+// deliver writes the results to where they belong. What can fail comes first:
+// the files are filled, then standard output is written, then the files get
+// their names.
+func deliver(ctx context.Context, o *outcome, stdout io.Writer) error {
+	if o.last != nil {
+		return o.last(ctx, o, stdout)
 	}
-	_, err := await(ctx, func() (int, error) { return stdout.Write(o.result) })
-	if err != nil && ctx.Err() == nil {
-		return &fileError{"write", "standard output", err}
+	if err := prepare(o.files); err != nil {
+		return err
 	}
-	return err
+	if len(o.result) > 0 {
+		_, err := await(ctx, func() (int, error) { return stdout.Write(o.result) })
+		if err != nil {
+			abandon(o.files)
+			if ctx.Err() == nil {
+				err = &fileError{"write", "standard output", err}
+			}
+			return err
+		}
+	}
+	return place(ctx, o.files)
 }
 
 // await runs work and gives up waiting for it when ctx ends: a read from a

@@ -18,7 +18,7 @@ func TestNoReassuringWord(t *testing.T) {
 		{}, {"chek"}, {"check"}, {"check", "--nope"}, {"check", "--format", "xml", "x"}, {"check", "--force", "x"},
 		{"check", "-", "-"}, {"check", "nowhere.toml"}, {"check", "--out", "", "x"}, {"methods", "x"}, {"completion", "x"},
 	}
-	for _, c := range newRoot(&outcome{}, surroundings{}).Commands() {
+	for _, c := range newRoot(nil, &outcome{}, surroundings{}).Commands() {
 		calls = append(calls, []string{"help", c.Name()})
 	}
 	for _, m := range arrest.Methods() {
@@ -37,7 +37,7 @@ func TestNoReassuringWord(t *testing.T) {
 // Nothing that the program lays out itself is wider than a page.
 func TestHelpWidth(t *testing.T) {
 	calls := [][]string{{"help"}, {"methods"}, {"units"}}
-	for _, c := range newRoot(&outcome{}, surroundings{}).Commands() {
+	for _, c := range newRoot(nil, &outcome{}, surroundings{}).Commands() {
 		calls = append(calls, []string{"help", c.Name()})
 	}
 	for _, args := range calls {
