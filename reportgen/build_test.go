@@ -92,8 +92,8 @@ func TestOutcomeWords(t *testing.T) {
 func TestDemandAndLimit(t *testing.T) {
 	s := fixture(t)
 	for units, want := range map[UnitChoice][2]string{
-		BothUnits: {"not less than 768 lbf (3.41 kN)", "at most 1800 lbf (8.01 kN)"},
-		SIUnits:   {"not less than 3.41 kN", "at most 1800 lbf (8.01 kN)"},
+		BothUnits: {"not less than 768 lbf (3.419 kN)", "at most 1800 lbf (8.007 kN)"},
+		SIUnits:   {"not less than 3.419 kN", "at most 1800 lbf (8.007 kN)"},
 		USUnits:   {"not less than 768 lbf", "at most 1800 lbf"},
 	} {
 		b := builder{s: s, d: display{units, quantity.Metric}}
@@ -113,7 +113,7 @@ func TestDemandNextToTheLimit(t *testing.T) {
 	for demand, want := range map[float64]string{
 		8000:   "not less than 8.00 kN (1798 lbf)",
 		8000.1: "not less than 8.0001 kN (1798.49 lbf)",
-		7999:   "not less than 7.99 kN (1790 lbf)",
+		7999:   "not less than 7.99 kN (1798.2 lbf)",
 	} {
 		f.Demand = demand
 		if got, _ := b.demandAndLimit(f); breakable(got) != want {

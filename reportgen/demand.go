@@ -17,7 +17,7 @@ func DemandText(bound arrest.Bound, demand, limit float64, u quantity.Unit) stri
 		return noFigure
 	}
 	round := demandRounding(bound)
-	return strings.TrimSpace(boundWords[bound] + " " + format(demand, u, digitsBeside(demand, limit, u, round), round))
+	return strings.TrimSpace(boundWords[bound] + " " + format(demand, u, digitsBeside(demand, limit, u, round, pageDigits), round))
 }
 
 // FigureText returns what lies between two SI figures in one unit, with
@@ -40,10 +40,22 @@ func OutcomeWords(o limits.Outcome) string { return outcomeWords[o] }
 // SenseWords returns the side of a limit as it is printed.
 func SenseWords(s limits.Sense) string { return senseWords[s] }
 
-// SubjectWords returns a subject that a limit is expected for as it is printed.
-func SubjectWords(subject string) string {
-	if words, ok := expectedWords[subject]; ok {
+// QuantityTitle returns what a quantity is called in a job with that many
+// persons: where there are none, no word speaks of one.
+func QuantityTitle(q arrest.Quantity, persons int) string {
+	if words, ok := titlesWithoutPersons[q]; ok && persons == 0 {
 		return words
 	}
-	return subject
+	return title(q)
+}
+
+// SubjectWords returns what a subject that a limit is expected for is called in
+// a job with that many persons.
+func SubjectWords(subject string, persons int) string {
+	for _, e := range limits.Subjects() {
+		if words, ok := titlesWithoutPersons[e.Quantities[0]]; ok && e.Subject == subject && persons == 0 {
+			return words
+		}
+	}
+	return expectedWord(subject)
 }

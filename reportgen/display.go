@@ -130,6 +130,12 @@ func format(si float64, u quantity.Unit, digits int, r quantity.Rounding) string
 // lbf)"; one figure where both print alike; what is known where the upper end
 // is open.
 func (d display) span(dim quantity.Dimension, typed quantity.Unit, low, high float64, digits int) string {
+	return d.spanRounded(dim, typed, low, high, digits, quantity.Nearest, quantity.Nearest)
+}
+
+// spanRounded is span for ends that are rounded each their own way: a floor
+// down, a ceiling up.
+func (d display) spanRounded(dim quantity.Dimension, typed quantity.Unit, low, high float64, digits int, least, greatest quantity.Rounding) string {
 	switch {
 	case math.IsInf(low, 1):
 		return noUpperEnd
@@ -137,11 +143,11 @@ func (d display) span(dim quantity.Dimension, typed quantity.Unit, low, high flo
 		return d.say(openAbove, d.figureAs(dim, typed, low, digits, quantity.Down))
 	}
 	return join(d.pair(dim, typed, high), low+high, func(u quantity.Unit) string {
-		last := format(high, u, digits, quantity.Nearest)
-		if format(low, u, digits, quantity.Nearest) == last {
+		last := format(high, u, digits, greatest)
+		if format(low, u, digits, least) == last {
 			return last
 		}
-		return between(low, u, digits, quantity.Nearest, last)
+		return between(low, u, digits, least, last)
 	})
 }
 
@@ -161,11 +167,11 @@ func join(units []quantity.Unit, si float64, text func(quantity.Unit) string) st
 }
 
 // digitsBeside returns how many digits it takes, both in u, to see on which
-// side of a limit a demand lies: at least those of page 1. A demand of exactly
+// side of a limit a demand lies, and at least so many. A demand of exactly
 // the limit reads as the limit.
-func digitsBeside(demand, limit float64, u quantity.Unit, r quantity.Rounding) int {
+func digitsBeside(demand, limit float64, u quantity.Unit, r quantity.Rounding, least int) int {
 	want := side(quantity.Snap(u.From(demand)), quantity.Snap(u.From(limit)))
-	for digits := pageDigits; digits < mostDigits; digits++ {
+	for digits := least; digits < mostDigits; digits++ {
 		d, l := quantity.Number(demand, u, digits, r), quantity.Number(limit, u, digits, quantity.Nearest)
 		if side(number(d), number(l)) == want {
 			return digits

@@ -119,7 +119,7 @@ func TestDigitsBeside(t *testing.T) {
 		limit := rapid.Float64Range(1e-3, 1e6).Draw(t, "limit")
 		demand := limit * (1 + rapid.SampledFrom([]float64{0, 1, -1}).Draw(t, "side")*math.Pow(10, -rapid.Float64Range(0, 10).Draw(t, "gap")))
 		r := rapid.SampledFrom([]quantity.Rounding{quantity.Down, quantity.Up, quantity.Nearest}).Draw(t, "rounding")
-		digits := digitsBeside(demand, limit, u, r)
+		digits := digitsBeside(demand, limit, u, r, pageDigits)
 		d := number(quantity.Number(demand, u, digits, r))
 		l := number(quantity.Number(limit, u, digits, quantity.Nearest))
 		if got, want := side(d, l), side(quantity.Snap(u.From(demand)), quantity.Snap(u.From(limit))); got != want {

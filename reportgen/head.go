@@ -267,5 +267,9 @@ func (b *builder) reasonOnRow(f *limits.Finding, r *limits.Reason, further bool)
 	if !ok {
 		panic("reportgen: no words for the reason " + string(r.ID))
 	}
-	return p.fill(b.d, f.Limit.Bound.Unit, r.Args)
+	least := pageDigits
+	if r.ID == limits.ConditionUnfulfilled || r.ID == limits.ConditionStraddles {
+		least = workingDigits // the condition is printed as typed: the figure must not read like it
+	}
+	return p.fillTo(b.d, f.Limit.Bound.Unit, r.Args, least)
 }

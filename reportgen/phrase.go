@@ -25,10 +25,15 @@ type phrase struct {
 // dimension. It panics if the number of arguments is not the phrase's own or
 // the text names one that is not there.
 func (p phrase) fill(d display, typed quantity.Unit, args []arrest.Arg) string {
+	return p.fillTo(d, typed, args, pageDigits)
+}
+
+// fillTo is fill with at least so many digits.
+func (p phrase) fillTo(d display, typed quantity.Unit, args []arrest.Arg, least int) string {
 	if len(args) != len(p.args) {
 		panic("reportgen: " + strconv.Itoa(len(args)) + " arguments for: " + p.text)
 	}
-	digits := d.tellingDigits(typed, args)
+	digits := max(d.tellingDigits(typed, args), least)
 	var b strings.Builder
 	for rest := p.text; ; {
 		before, after, found := strings.Cut(rest, "{")
@@ -54,7 +59,7 @@ func (d display) place(p phrase, name string, typed quantity.Unit, args []arrest
 		case a.Dimension == 0 || b.Dimension == 0:
 			return d.argument(low, a, typed, digits) + " to " + d.argument(high, b, typed, digits)
 		}
-		return d.span(a.Dimension, rowUnit(typed, a.Dimension), a.SI, b.SI, digits)
+		return d.spanRounded(a.Dimension, rowUnit(typed, a.Dimension), a.SI, b.SI, digits, a.Rounding, b.Rounding)
 	}
 	return d.argument(name, args[p.index(name)], typed, digits)
 }

@@ -64,7 +64,11 @@ func (b *builder) demandAndLimit(f *limits.Finding) (demand, limit string) {
 	digits := make(map[quantity.Unit]int, len(units))
 	limit = senseWords[f.Limit.Sense] + " " + flat(typed.Text)
 	for _, u := range units {
-		digits[u] = digitsBeside(f.Demand, typed.High, u, round)
+		least := pageDigits
+		if u != typed.Unit {
+			least = otherDigits
+		}
+		digits[u] = digitsBeside(f.Demand, typed.High, u, round, least)
 		if u != typed.Unit {
 			limit += " (" + format(typed.High, u, digits[u], quantity.Nearest) + ")"
 		}
@@ -88,6 +92,10 @@ func (b *builder) demandAndLimit(f *limits.Finding) (demand, limit string) {
 	}
 	return demand + b.byModel(f), limit
 }
+
+// otherDigits are those of a row at least in a unit that the limit was not typed
+// in: with three of them 8 kN would read as 1800 lbf.
+const otherDigits = 4
 
 // noDemand says why a row has no figure of demand.
 func (b *builder) noDemand(f *limits.Finding) string {
@@ -125,7 +133,7 @@ func (b *builder) share(f *limits.Finding) string {
 	if f.Limit.Sense == limits.AtLeast {
 		round = quantity.Down
 	}
-	digits := digitsBeside(f.Ratio, 1, percent, round)
+	digits := digitsBeside(f.Ratio, 1, percent, round, pageDigits)
 	return "\n" + b.say(shareOfLimit, format(f.Ratio, percent, digits, round))
 }
 

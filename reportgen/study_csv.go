@@ -21,11 +21,7 @@ func newCSV(w io.Writer) *csv { return &csv{out: bufio.NewWriterSize(w, 1<<16)} 
 // text writes a cell of words.
 func (c *csv) text(s string) {
 	c.part()
-	// A blank before it does not keep a program from reading a formula.
-	if first := strings.TrimLeft(s, " \t\r\n"); strings.IndexAny(s, "\t\r") == 0 || first != "" && strings.IndexByte("=+-@", first[0]) >= 0 {
-		s = "'" + s
-	}
-	s = breakable(printable(s, false))
+	s = breakable(printable(GuardCell(s), false))
 	if strings.ContainsAny(s, `",`) {
 		s = `"` + strings.ReplaceAll(s, `"`, `""`) + `"`
 	}

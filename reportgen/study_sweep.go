@@ -109,7 +109,7 @@ func (s *sweeping) places() {
 	sw := s.w.Swept
 	for i := range sw.Crossings {
 		c := &sw.Crossings[i]
-		s.marks = append(s.marks, swept{row: c.Row, x: c.X, y: c.Y, column: c.Column, crossing: c})
+		s.marks = append(s.marks, swept{row: c.Row, x: c.X, y: s.bare(c), column: c.Column, crossing: c})
 	}
 	for i := range sw.Turns {
 		t := &sw.Turns[i]
@@ -121,6 +121,16 @@ func (s *sweeping) places() {
 	for i := range s.marks {
 		s.marks[i].letter = letterOf(i)
 	}
+}
+
+// bare is the figure of a column at a crossing, without the allowance with which
+// it is compared.
+func (s *sweeping) bare(c *study.Crossing) float64 {
+	wide := s.allowance(&s.w.Swept.Series[c.Column])
+	if c.End == study.TheLow {
+		wide = -wide
+	}
+	return c.Y / (1 + wide)
 }
 
 // letterOf returns a, b, ... z, aa, ab, ...
@@ -186,6 +196,9 @@ func (s *sweeping) what(column int, end study.End) string {
 func (s *sweeping) crossing(m *swept) string {
 	c := m.crossing
 	what, limit, side := s.what(c.Column, c.End), s.limitTitle(c.Limit, c.Printed), sideSmaller
+	if wide := s.allowance(&s.w.Swept.Series[c.Column]); wide > 0 {
+		what = s.say(withShare, what, percent(wide))
+	}
 	if c.Lower == quantity.Up {
 		side = sideGreater
 	}

@@ -288,6 +288,9 @@ func (s *sweeping) figureNotes(columns []int) []string {
 		mean = mean || isMean(c.Quantity)
 		shape = shape || c.Evidence == arrest.Shape
 	}
+	if slices.ContainsFunc(columns, func(i int) bool { return s.allowance(&s.w.Smooth.Series[i]) > 0 }) {
+		notes = append(notes, bareNote)
+	}
 	if s.banded(columns) {
 		notes = append(notes, twoLines)
 	}

@@ -196,6 +196,9 @@ func (s *sweeping) notes() []string {
 			}
 		}
 	}
+	if slices.ContainsFunc(s.w.Swept.Series, func(c study.Series) bool { return s.allowance(&c) > 0 }) {
+		notes = append(notes, bareNote)
+	}
 	impossible := func(point int) bool { return s.w.Swept.Impossible != nil && s.w.Swept.Impossible[point] }
 	add(bandNote, func(c *study.Series, point int) bool {
 		low, high, _ := seriesEnds(c, point)

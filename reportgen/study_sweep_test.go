@@ -294,3 +294,21 @@ func mustRead(t testing.TB, name string) []byte {
 	}
 	return data
 }
+
+// A modelled figure is compared with the allowance of 25 %: where it equals 8 kN
+// the column and the drawing have 6.4 kN.
+func TestSweepWithAnAllowance(t *testing.T) {
+	s := sheet(t, "path-rope-absorber-45.toml")
+	w := sweptOver(t, s, "fall.free_fall", "m", 1, 4, 7, arrest.PeakForce)
+	mustHold(t, written(t, w.Report), "peak force on the body, by the model (at its greatest over the entries), with the allowance of 25 % equals the limit peak-on-body",
+		"a 2.9947 9.8254 6.40 1440", bareNote)
+	scenes, err := w.Figures(BothUnits)
+	if err != nil || len(scenes) != 1 {
+		t.Fatal(len(scenes), err)
+	}
+	at := sweeping{builder: newBuilder(s, BothUnits), w: w}
+	at.places()
+	if got := at.marks[0].y; !quantity.Close(got, 6400, 1e-9) {
+		t.Errorf("the mark is drawn at %v N", got)
+	}
+}

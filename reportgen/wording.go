@@ -158,7 +158,7 @@ var reasons = map[limits.ReasonID]phrase{
 	limits.NotChecked:           {nil, "nobody has checked this limit against its current text (no checked_on)"},
 	limits.Superseded:           {[]string{"date"}, "the limit is superseded since \"{date}\""},
 	limits.IsProductTest:        {nil, "a figure of a product test is no limit for a site"},
-	limits.ConditionUnfulfilled: {[]string{"condition", "demand", "bound"}, "the limit holds for {condition} {bound}, and here it is {demand}"},
+	limits.ConditionUnfulfilled: {[]string{"condition", "demand", "bound"}, "the limit holds for {condition} {bound}, and here it is not less than {demand}"},
 	limits.ConditionStraddles:   {[]string{"condition", "least", "greatest", "bound"}, "the limit holds for {condition} {bound}, and here it is {least .. greatest}"},
 	limits.AlsoBeyond:           {nil, "also beyond the figure of the limit"},
 	limits.NoAllowance:          {nil, "the figure of the model needs the user's own allowance for its error (model.allowance), and none is entered"},

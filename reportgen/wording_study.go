@@ -53,6 +53,7 @@ const (
 	turnGreatest = "greatest"
 	turnLeast    = "least"
 	bandNote     = "Two figures in a cell: the least and the greatest over the bands of the other entries."
+	bareNote     = "Figures by the model stand as they are; with limits they are compared after the allowance for its error is added."
 	noneNote     = "-: nothing entered gives this figure at this point."
 	cannotNote   = "cannot be: with these figures no force that only pulls could stop the body."
 )

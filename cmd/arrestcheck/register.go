@@ -169,14 +169,18 @@ func (r *registrar) named(err error, name string) error {
 	return &fileError{"write", name, err}
 }
 
-// garbage is how much of the memory in use may come anew before it is cleaned
-// up, in percent. What is in use is little and soon done with: with the usual
-// 100 a fifth of the time goes into cleaning up.
-const garbage = 400
+// What may come anew before memory is cleaned up: garbage percent of what is in
+// use, but no more than to roomy bytes in all. What is in use is little and soon
+// done with: with the usual 100 percent a fifth of the time goes into it.
+const (
+	garbage = 400
+	roomy   = 26 << 20
+)
 
 // write writes the whole register to w.
 func (r *registrar) write(ctx context.Context, w io.Writer) error {
 	defer debug.SetGCPercent(debug.SetGCPercent(garbage))
+	defer debug.SetMemoryLimit(debug.SetMemoryLimit(roomy))
 	buffered := bufio.NewWriterSize(w, 64<<10)
 	register, err := archive.NewRegister(buffered, r.layout(), r.flags.ascii, r.earlier != nil)
 	if err != nil {

@@ -143,7 +143,7 @@ func (e *Earlier) readCSV(r io.Reader) error {
 		line, _ := rows.FieldPos(0)
 		row, err := earlierCells(func(name string) string {
 			if i, found := column[name]; found {
-				return unguard(cells[i])
+				return reportgen.UnguardCell(cells[i])
 			}
 			return ""
 		})

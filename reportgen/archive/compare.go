@@ -7,6 +7,7 @@ import (
 
 	"arrestcheck/arrest"
 	"arrestcheck/arrest/quantity"
+	"arrestcheck/reportgen"
 )
 
 // A Comparison sets the results of two jobs, or of two revisions of one, side
@@ -151,14 +152,10 @@ func (e *Estimate) unit() quantity.Unit {
 }
 
 // title is what is shown of an estimate: its quantity and where it is from.
-func (e *Estimate) title() string {
-	text := string(e.Quantity)
-	if record, known := e.Quantity.Record(); known {
-		text = record.Title
-	}
+func (e *Estimate) title(persons int) string {
 	rest := []string{string(e.Evidence), e.Method}
 	if e.From != "" {
 		rest = append(rest, e.From)
 	}
-	return text + "\n" + strings.Join(rest, ", ")
+	return reportgen.QuantityTitle(e.Quantity, persons) + "\n" + strings.Join(rest, ", ")
 }

@@ -40,7 +40,7 @@ func (c *Comparison) identity() []reportgen.Line {
 			reportgen.Line{Text: side.of.Job.Name},
 			reportgen.Line{Text: side.of.Counts.text()})
 		if len(side.of.NotEntered) > 0 {
-			lines = append(lines, reportgen.Line{Text: words.LeftOut.Say(leftOut(side.of.NotEntered))})
+			lines = append(lines, reportgen.Line{Text: words.LeftOut.Say(leftOut(side.of.NotEntered, side.of.Job.Persons))})
 		}
 		if side.of.Job.Example {
 			lines = append(lines, reportgen.Line{Text: words.ExampleLine.Say()})
@@ -76,7 +76,7 @@ func (c *Comparison) rowTable() *reportgen.Table {
 			f = p.B
 		}
 		t.Rows = append(t.Rows, reportgen.Row{
-			Cells: []string{titleOf(f) + "\n" + p.Limit, p.A.cell(), p.B.cell()},
+			Cells: []string{titleOf(f, c.A.Job.Persons) + "\n" + p.Limit, p.A.cell(), p.B.cell()},
 			Loud:  p.A == nil || p.B == nil || p.A.Outcome != p.B.Outcome,
 		})
 	}
@@ -118,7 +118,7 @@ func (c *Comparison) estimateTable() *reportgen.Table {
 		if e == nil {
 			e = p.B
 		}
-		t.Rows = append(t.Rows, reportgen.Row{Cells: []string{e.title(), p.A.cell(), p.B.cell(), p.by()}})
+		t.Rows = append(t.Rows, reportgen.Row{Cells: []string{e.title(c.A.Job.Persons), p.A.cell(), p.B.cell(), p.by()}})
 	}
 	return t
 }

@@ -173,7 +173,7 @@ func (r *Register) csvRow(row *Row) []string {
 		n(row.Job.Persons), strconv.FormatBool(row.Job.Example), row.Job.SHA256, row.Results, row.Tool, row.Model, strings.Join(row.Errors, "; "),
 	}
 	for i := range cells {
-		cells[i] = guard(r.printable(cells[i]))
+		cells[i] = reportgen.GuardCell(r.printable(cells[i]))
 	}
 	return cells
 }
@@ -183,29 +183,6 @@ func (r *Register) printable(s string) string {
 		return reportgen.PrintableASCII(s)
 	}
 	return reportgen.Printable(s)
-}
-
-// guard keeps a spreadsheet from taking a cell for a formula: an apostrophe
-// stands before a first character that begins one, also one behind blanks, and
-// before an apostrophe, so that unguard gives the cell back.
-func guard(cell string) string {
-	if dangerous(cell) {
-		return "'" + cell
-	}
-	return cell
-}
-
-// unguard takes the apostrophe away that guard put before a cell.
-func unguard(cell string) string {
-	if rest, found := strings.CutPrefix(cell, "'"); found && dangerous(rest) {
-		return rest
-	}
-	return cell
-}
-
-func dangerous(cell string) bool {
-	bare := strings.TrimLeft(cell, " \u00a0")
-	return bare != "" && strings.ContainsRune("=+-@\t\r\n'|%＝＋－＠", []rune(bare)[0])
 }
 
 // Columns of a register as text, 80 wide with two blanks between.
@@ -290,7 +267,7 @@ func (r *Row) limitsCell() string {
 		lines = append(lines, words.ExampleLine.Say())
 	}
 	if w := r.Worst; w != nil {
-		lines = append(lines, words.WorstLine.Say(titleOf(&w.Finding), w.demand(), w.limit()), w.Authority)
+		lines = append(lines, words.WorstLine.Say(titleOf(&w.Finding, r.Job.Persons), w.demand(), w.limit()), w.Authority)
 	}
 	return strings.Join(lines, "\n")
 }
@@ -318,7 +295,7 @@ func (r *Row) openCell() string {
 	lines := append([]string{}, r.Worse...)
 	lines = append(lines, words.OpenOf.Say(n(len(r.Open)), n(r.Inputs)))
 	if len(r.NotEntered) > 0 {
-		lines = append(lines, words.LeftOut.Say(leftOut(r.NotEntered)))
+		lines = append(lines, words.LeftOut.Say(leftOut(r.NotEntered, r.Job.Persons)))
 	}
 	switch {
 	case r.Job.Rescue != "":

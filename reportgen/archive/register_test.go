@@ -9,7 +9,6 @@ import (
 	"slices"
 	"strings"
 	"testing"
-	"testing/quick"
 
 	"arrestcheck/arrest/jobfile"
 	"arrestcheck/limits"
@@ -179,32 +178,13 @@ func TestRegisterPagesLineUp(t *testing.T) {
 	}
 }
 
-// The cells that spreadsheets take for formulas, or worse, come guarded, and
-// come back as they were.
-func TestGuard(t *testing.T) {
-	for _, cell := range []string{
-		"=1+1", "+1", "-1", "@SUM(A1)", "\tx", "\rx", "\n=1", "  =1", "\u00a0=cmd|' /C calc'!A0", "|x", "%x", "＝1", "－1", "'=1", "''", "'x",
-	} {
-		if got := guard(cell); got != "'"+cell {
-			t.Errorf("%q: %q", cell, got)
+// A register of jobs without a person speaks of none.
+func TestRegisterWithoutPersons(t *testing.T) {
+	page := register(t, Text, false, rowOf(t, "tool-tether.toml"), rowOf(t, "load-slope.toml"))
+	_, rows, _ := strings.Cut(page, "Register of jobs")
+	for _, word := range []string{"the body", "person", "rescue"} {
+		if strings.Contains(rows, word) {
+			t.Errorf("%q in\n%s", word, rows)
 		}
 	}
-	for _, cell := range []string{"", "RT-0417", "3.41", "a=b", " x", "ä"} {
-		if got := guard(cell); got != cell {
-			t.Errorf("%q: %q", cell, got)
-		}
-	}
-	if err := quick.Check(func(s string) bool { return unguard(guard(s)) == s }, nil); err != nil {
-		t.Error(err)
-	}
-}
-
-func FuzzGuard(f *testing.F) {
-	f.Add("=1+1")
-	f.Add(" '@x")
-	f.Fuzz(func(t *testing.T, s string) {
-		if got := unguard(guard(s)); got != s {
-			t.Errorf("%q comes back as %q", s, got)
-		}
-	})
 }

@@ -185,7 +185,9 @@ type Reassessment struct {
 	Was  Counts // as archived
 	Is   Counts // under the later limits
 	Sets []Set  // the later ones
-	Left []string
+
+	Left    []string // subjects that nobody entered a later limit for
+	Persons int
 }
 
 // A ReassessedRow is a limit as archived beside the later one of the same
@@ -200,7 +202,7 @@ func reassess(was *Results, sheet *reportgen.Sheet, later []limits.Set) *Reasses
 	assessment := limits.Assess(sheet.Result, later, file.Elsewhere)
 	again.File, again.Assessment = &file, &assessment
 	is := Of(&again)
-	r := &Reassessment{Is: is.Counts, Sets: is.Sets, Left: is.NotEntered}
+	r := &Reassessment{Is: is.Counts, Sets: is.Sets, Left: is.NotEntered, Persons: is.Job.Persons}
 	var before []Finding
 	if was != nil {
 		before, r.Was = was.Findings, was.Counts

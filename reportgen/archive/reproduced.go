@@ -269,7 +269,7 @@ func (a *Reassessment) blocks() []reportgen.Block {
 		if other {
 			differ++
 		}
-		t.Rows = append(t.Rows, reportgen.Row{Cells: []string{titleOf(f), row.Was.cell(), row.Is.cell()}, Loud: other})
+		t.Rows = append(t.Rows, reportgen.Row{Cells: []string{titleOf(f, a.Persons), row.Was.cell(), row.Is.cell()}, Loud: other})
 	}
 	lines := []reportgen.Line{
 		{Label: reportgen.ArchivedLabel, Text: a.Was.text()},
@@ -279,19 +279,13 @@ func (a *Reassessment) blocks() []reportgen.Block {
 		lines = append(lines, reportgen.Line{Label: reportgen.LaterSetLabel, Text: words.SetLine.Say(s.Title, s.Name)})
 	}
 	if len(a.Left) > 0 {
-		lines = append(lines, reportgen.Line{Label: reportgen.LeftOutHeading, Text: leftOut(a.Left)})
+		lines = append(lines, reportgen.Line{Label: reportgen.LeftOutHeading, Text: leftOut(a.Left, a.Persons)})
 	}
 	text := words.AgainLine.Say(strconv.Itoa(differ), strconv.Itoa(len(a.Rows)))
 	return []reportgen.Block{{Text: text, Lines: lines}, {Table: t}}
 }
 
-func titleOf(f *Finding) string {
-	record, known := f.Quantity.Record()
-	if !known {
-		return string(f.Quantity)
-	}
-	return record.Title
-}
+func titleOf(f *Finding, persons int) string { return reportgen.QuantityTitle(f.Quantity, persons) }
 
 // cell is a limit and what it came to, "-" where there is none.
 func (f *Finding) cell() string {
@@ -321,10 +315,10 @@ func (f *Finding) unit() quantity.Unit {
 	return record.Dimension.SI()
 }
 
-func leftOut(subjects []string) string {
+func leftOut(subjects []string, persons int) string {
 	list := make([]string, len(subjects))
 	for i, s := range subjects {
-		list[i] = reportgen.SubjectWords(s)
+		list[i] = reportgen.SubjectWords(s, persons)
 	}
 	return strings.Join(list, ", ")
 }
