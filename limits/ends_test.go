@@ -81,3 +81,16 @@ func TestBeyondNothingIsWorst(t *testing.T) {
 		t.Errorf("worst row %d, the second is %s", got, a.Findings[1].Outcome)
 	}
 }
+
+// Reasons that differ in their arguments alone, or in their id alone, are two; a
+// reason that is there already is one.
+func TestAddOnce(t *testing.T) {
+	var list []Reason
+	for _, r := range []Reason{{ID: NotChecked}, {ID: ExampleValues}, words(Superseded, "in May"), words(Superseded, "in June"), {ID: NotChecked}, words(Superseded, "in May")} {
+		list = addOnce(list, r)
+	}
+	want := []Reason{{ID: NotChecked}, {ID: ExampleValues}, words(Superseded, "in May"), words(Superseded, "in June")}
+	if diff := cmp.Diff(want, list); diff != "" {
+		t.Error(diff)
+	}
+}

@@ -35,9 +35,13 @@ type batch struct {
 	done       chan struct{}
 }
 
+// How much is on its way at once. With a bound the memory needed does not grow
+// with the number of jobs; it is wide enough that a worker that has to wait for
+// its processor does not keep the others waiting.
 const (
 	batchSize = 16
-	window    = 3 // batches per worker on their way: with a bound the memory needed does not grow with the number of jobs
+	window    = 24       // batches per worker
+	large     = 64 << 10 // bytes of a job whose row must not keep all of them in memory
 )
 
 // inOrder works the jobs out, several at a time, and hands their rows over in
@@ -224,6 +228,9 @@ func (r *registrar) row(c *candidate) (*archive.Row, error) {
 		return &row, nil
 	}
 	row := archive.RowOf(c.name, sheet, int(codeOfAssessment(sheet.Assessment)))
+	if len(data) > large {
+		row.Detach()
+	}
 	return &row, nil
 }
 

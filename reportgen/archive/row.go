@@ -85,6 +85,24 @@ func BrokenRow(name string, data []byte, err error, code int, tool string) Row {
 	return row
 }
 
+// Detach copies the texts of the row, which else are parts of the whole file of
+// the job and keep it in memory.
+func (r *Row) Detach() {
+	texts := []*string{
+		&r.Job.Title, &r.Job.Site, &r.Job.Reference, &r.Job.Revision, &r.Job.Date, &r.Job.PreparedBy, &r.Job.CheckedBy,
+		&r.Job.ReviewDate, &r.Job.Rescue,
+	}
+	if w := r.Worst; w != nil {
+		texts = append(texts, &w.Limit, &w.Group, &w.LimitAsWritten, &w.Authority)
+	}
+	for i := range r.Open {
+		texts = append(texts, &r.Open[i])
+	}
+	for _, t := range texts {
+		*t = strings.Clone(*t)
+	}
+}
+
 // Broken reports whether the job is refused or was not read.
 func (r *Row) Broken() bool { return len(r.Errors) > 0 }
 
