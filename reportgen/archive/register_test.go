@@ -9,6 +9,9 @@ import (
 	"slices"
 	"strings"
 	"testing"
+	"unsafe"
+
+	"github.com/google/go-cmp/cmp"
 
 	"arrestcheck/arrest/jobfile"
 	"arrestcheck/limits"
@@ -186,5 +189,18 @@ func TestRegisterWithoutPersons(t *testing.T) {
 		if strings.Contains(rows, word) {
 			t.Errorf("%q in\n%s", word, rows)
 		}
+	}
+}
+
+// A detached row says the same, in texts of its own.
+func TestDetach(t *testing.T) {
+	row, want := rowOf(t, "metric-basic.toml"), rowOf(t, "metric-basic.toml")
+	before := unsafe.StringData(row.Job.Title)
+	row.Detach()
+	if diff := cmp.Diff(want, row, absent); diff != "" {
+		t.Error(diff)
+	}
+	if unsafe.StringData(row.Job.Title) == before {
+		t.Error("the title is still part of the file")
 	}
 }
