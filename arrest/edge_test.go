@@ -94,3 +94,52 @@ func TestSourceOfAnAllowance(t *testing.T) {
 		}
 	}
 }
+
+// A constant force asks for d = v*t/2, 0.891257 m here; entries are read to half
+// a per cent. So 0.886800 m and 0.895713 m are the ends of what does not
+// contradict the shape, and the figures below lie a step on either side.
+func TestEdgeOfAShape(t *testing.T) {
+	for distance, contradicted := range map[string]bool{"0.8867 m": true, "0.8869 m": false, "0.8957 m": false, "0.8958 m": true,
+		"0.5 m .. 0.8867 m": true, "0.5 m .. 0.8869 m": false, "0.8957 m .. 2 m": false, "0.8958 m .. 2 m": true} {
+		res := Evaluate(figures{mass: "100 kg", fall: "1.8 m", distance: distance, time: "0.30 s", pulse: Constant}.job(t))
+		if hasWarning(&res, ShapeContradicted) != contradicted || res.estimate(PeakForce, Shape) >= 0 == contradicted {
+			t.Errorf("%s: contradicted %v", distance, !contradicted)
+		}
+	}
+}
+
+// Nothing about the stop is nothing: no distance, no time, no document, no path.
+// Means are told of wherever one of the first two is there, and with both.
+func TestNothingAboutTheStop(t *testing.T) {
+	peak := parse(t, quantity.Force, "6 kN")
+	rating := []Rating{{Document: "label", TotalMass: parse(t, quantity.Mass, "59 kg .. 140 kg"), FreeFallAtMost: parse(t, quantity.Length, "2 m"), PeakForceAtMost: &peak}}
+	for _, c := range []struct {
+		name           string
+		job            *Job
+		nothing, means bool
+	}{
+		{"nothing", fall100(t), true, false},
+		{"document", figures{mass: "100 kg", fall: "1.8 m", ratings: rating}.job(t), false, false},
+		{"path", onPath(t, fall100(t), FromLabel, ropePart), false, false},
+		{"distance", figures{mass: "100 kg", fall: "1.8 m", distance: "1 m"}.job(t), false, true},
+		{"time", figures{mass: "100 kg", fall: "1.8 m", time: "0.3 s"}.job(t), false, true},
+		{"both", figures{mass: "100 kg", fall: "1.8 m", distance: "1 m", time: "0.3 s"}.job(t), false, true},
+		{"both and a document", figures{mass: "100 kg", fall: "1.8 m", distance: "1 m", time: "0.3 s", ratings: rating}.job(t), false, true},
+	} {
+		res := Evaluate(c.job)
+		if hasWarning(&res, NothingAboutStop) != c.nothing || hasWarning(&res, MeansAreNotPeaks) != c.means {
+			t.Errorf("%s: nothing told %v, means told %v", c.name, hasWarning(&res, NothingAboutStop), hasWarning(&res, MeansAreNotPeaks))
+		}
+	}
+}
+
+// A narrow range about v*t/2, 0.891257 m here, agrees closely as one figure does;
+// the middle of the range decides.
+func TestRoutesThatAgreeOverARange(t *testing.T) {
+	for distance, told := range map[string]bool{"0.8900 m .. 0.8925 m": true, "0.8800 m .. 0.8820 m": false, "0.8913 m": true, "0.8800 m": false} {
+		res := Evaluate(figures{mass: "100 kg", fall: "1.8 m", distance: distance, time: "0.30 s"}.job(t))
+		if hasWarning(&res, RoutesAgreeClosely) != told {
+			t.Errorf("%s: told %v", distance, !told)
+		}
+	}
+}
