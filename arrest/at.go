@@ -9,23 +9,28 @@ var (
 
 // At works out one exact point. It allocates nothing (a connector path
 // makes room in p once) and never fails: what cannot happen is told by
-// Point.Impossible. c must hold a positive total mass
+// Point.Impossible; where a layout gives no free fall all that hangs on it is
+// NaN. c must hold a positive total mass
 // and gravity, and no negative figure; the readers of files see to that.
 func At(c *Case, p *Point) {
 	if c.Load.Mass > 0 {
 		loadAt(c, p)
 		return
 	}
+	h := c.FreeFall
+	if c.Layout != nil {
+		h = layoutAt(c, p)
+	}
 	m, lost := sum(c.Mass, c.Tools)
 	g := c.Gravity
-	fallen := float64(2 * g * c.FreeFall)
-	square, rest := sum(fallen, math.FMA(c.InitialSpeed, c.InitialSpeed, math.FMA(2*g, c.FreeFall, -fallen)))
+	fallen := float64(2 * g * h)
+	square, rest := sum(fallen, math.FMA(c.InitialSpeed, c.InitialSpeed, math.FMA(2*g, h, -fallen)))
 	v := math.Sqrt(square)
 	p.TotalMass = m
 	p.Weight = math.FMA(m, g, lost*g)
-	p.FreeFall = c.FreeFall
+	p.FreeFall = h
 	if c.InitialSpeed > 0 {
-		p.FreeFall = c.FreeFall + float64(c.InitialSpeed*c.InitialSpeed)/(2*g)
+		p.FreeFall = h + float64(c.InitialSpeed*c.InitialSpeed)/(2*g)
 	}
 	p.Speed = v
 	p.Energy = math.FMA(m, square, math.FMA(m, rest, lost*square)) / 2
@@ -35,7 +40,10 @@ func At(c *Case, p *Point) {
 	}
 	stopAt(p, g, c.Distance, c.Time)
 	if c.Path != nil {
-		modelAt(c, p)
+		modelAt(c, p, h)
+	}
+	if c.Layout != nil {
+		roomAt(c, p)
 	}
 	if c.Pulse == NoPulse {
 		p.Assumed = noShape

@@ -52,3 +52,39 @@ func randomCase(r *rand.Rand) Case {
 		Distance: 0.05 + 2*r.Float64(), Time: 0.02 + r.Float64(),
 	}
 }
+
+// Of a fall from rest weight, energy and momentum are rounded once, though each
+// is made of a sum and of products: what every step loses is put back. Against
+// 200-bit arithmetic half a unit in the last place is all that may be missing.
+func TestFallFromRestIsRoundedOnce(t *testing.T) {
+	r := rand.New(rand.NewPCG(41, 42))
+	var o oracle
+	var p Point
+	for range 5000 {
+		c := randomCase(r)
+		c.InitialSpeed, c.Tools = 0, c.Tools*r.Float64()
+		At(&c, &p)
+		o.at(&c)
+		weight, energy, momentum := ulps(p.Weight, o.weight(&c)), ulps(p.Energy, o.energy), ulps(p.Momentum, o.momentum)
+		if worst := max(weight, energy, momentum); worst > 0.501 {
+			t.Fatalf("weight, energy, momentum off by %.4f, %.4f, %.4f units in the last place: %+v", weight, energy, momentum, c)
+		}
+	}
+}
+
+// Where time and distance fit an even braking the least peak is that braking:
+// the mean over the distance, to the last bit (M-06, t >= 2*d/v). Figures with
+// few binary digits make v*t = 2*d exact.
+func TestFloorOfAnEvenBraking(t *testing.T) {
+	r := rand.New(rand.NewPCG(43, 44))
+	var p Point
+	for range 500 {
+		c := randomCase(r)
+		c.FreeFall, c.InitialSpeed, c.Time = 0, float64(20+r.IntN(180))/16, float64(4+r.IntN(60))/64
+		c.Distance = c.InitialSpeed * c.Time / 2
+		At(&c, &p)
+		if p.ShapeRatio != 1 || p.Floor != p.MeanOverDistance {
+			t.Fatalf("ratio %.17g, floor %.17g, mean over the distance %.17g: %+v", p.ShapeRatio, p.Floor, p.MeanOverDistance, c)
+		}
+	}
+}

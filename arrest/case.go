@@ -19,9 +19,13 @@ type Case struct {
 	Rise         float64 // rise fraction of RisePlateau, 0..1
 
 	// Path makes parts of Figures, the connector path from anchor to body; nil
-	// where none was entered.
-	Path    *PathPlan
-	Figures [MaxPathFigures]float64
+	// where none was entered. Layout makes the geometry of them, and the free fall
+	// is then its own: FreeFall is not read. Position, from 0, is the place of the
+	// layout that the fall begins at.
+	Path     *PathPlan
+	Layout   *LayoutPlan
+	Position int
+	Figures  [MaxFigures]float64
 
 	Load Load // a moving load in place of a fall; only Gravity is read beside it
 }
@@ -45,8 +49,9 @@ type Point struct {
 	FloorDeceleration float64 // net, m/s2
 
 	Assumed Assumed
-	Load    LoadPoint // filled for a moving load only
-	Model   *PathRun  // filled where the Case has a path; kept and filled again by the next At
+	Load    LoadPoint  // filled for a moving load only
+	Model   *PathRun   // filled where the Case has a path; kept and filled again by the next At
+	Layout  *LayoutRun // filled where the Case has a layout; kept and filled again
 
 	// Impossible is true when no force that only pulls can bring the body to
 	// rest over this distance in so short a time (M-05).

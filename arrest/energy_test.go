@@ -119,7 +119,7 @@ func TestEveryKindOfPartByEnergy(t *testing.T) {
 			part.Points = curve
 		}
 		if c.rise > 0 {
-			part.Rise = MaxPathFigures - 1
+			part.Rise = MaxFigures - 1
 			j.Point.Figures[part.Rise] = c.rise
 		}
 		res := Evaluate(j)

@@ -70,6 +70,21 @@ type Estimate struct {
 	// nothing or in a rigid stop.
 	Exhausted, Beyond bool
 
+	// Travel is the part of a modelled length that the path gives, m: the
+	// allowance is taken on it alone, since the rest of the length is no model. 0
+	// where the whole figure is modelled.
+	Travel float64
+
+	// Place names the position of a layout that the figure is of, the worst of
+	// several; empty where there is only one.
+	Place string
+
+	// Edge is true where, somewhere in the entries, the connector comes to an edge;
+	// Strikes where the body comes to an obstacle or into the structure; Unreached
+	// where for part of the entries the connector ends before the edge, or a swing
+	// is in no plane: then nothing is known there.
+	Edge, Strikes, Unreached bool
+
 	// Part is the number, from 1, of the connector part that the document of a
 	// rated estimate belongs to; 0 where it belongs to none.
 	Part int
@@ -86,11 +101,17 @@ func (e *Estimate) Ends() (low, high float64) {
 	if e.Evidence != Modelled || math.IsNaN(e.Allowance) {
 		return e.Low, e.High
 	}
-	high = e.High
+	low, high = e.Low, e.High
 	if e.Harder > high {
 		high = e.Harder
 	}
-	return e.Low - float64(e.Allowance*e.Low), high + float64(e.Allowance*high)
+	if e.Quantity == ClearanceLeft && e.Harder < low {
+		low = e.Harder
+	}
+	if e.Travel > 0 {
+		return low - float64(e.Allowance*e.Travel), high + float64(e.Allowance*e.Travel)
+	}
+	return low - float64(e.Allowance*low), high + float64(e.Allowance*high)
 }
 
 // Conditional reports whether the estimate holds only under an assumption of

@@ -33,6 +33,7 @@ func Evaluate(j *Job) Result {
 	}
 	ev.contradictions()
 	ev.runs()
+	ev.layout()
 	ev.warn(partImpossible)
 	return ev.res
 }
@@ -75,6 +76,10 @@ func (in *Input) place() int {
 		return 1
 	case OfPart:
 		return 5
+	case OfLayout:
+		return 6
+	case OfClearance:
+		return 7
 	}
 	switch in.Key {
 	case "stop.distance", "moving_load.distance":
@@ -88,6 +93,9 @@ func (in *Input) place() int {
 // restsOn lists the inputs behind a set of bits.
 func (ev *evaluation) restsOn(r rests) []int {
 	r &= onInputs
+	if r&onFall != 0 && ev.job.Point.Layout != nil {
+		r |= onLayout
+	}
 	if ev.resting[r] == nil {
 		list := make([]int, 0, len(ev.job.Inputs))
 		for bit := range ev.uses {
@@ -124,7 +132,7 @@ func (ev *evaluation) closedForms() {
 		}
 		stopped := o.rests&onStop != 0
 		if ev.allWritten(e.Uses) && !(stopped && ev.written.Impossible) {
-			e.Value = o.of(&ev.written)
+			e.Value = ev.value(i)
 		}
 		e.Allowance, e.Harder = nan, nan
 		if o.evidence == Modelled {
@@ -133,7 +141,10 @@ func (ev *evaluation) closedForms() {
 		if o.evidence == Shape {
 			e.From = ev.job.Point.Pulse.String()
 		}
-		if o.bound == AtLeast {
+		if ev.job.Point.Layout != nil {
+			ev.laidOut(i, &e)
+		}
+		if e.Bound == AtLeast {
 			e.Reach, e.High = e.High, nan
 		}
 		ev.asTyped(&e)
@@ -150,7 +161,7 @@ func (ev *evaluation) asTyped(e *Estimate) {
 		return
 	case e.Quantity == TotalMass:
 		b = ev.job.TotalMass()
-	case e.Quantity == FreeFall && len(e.Uses) == 1 && ev.job.Inputs[e.Uses[0]].Key == "fall.free_fall":
+	case e.Quantity == FreeFall && ev.job.Point.Layout == nil && len(e.Uses) == 1 && ev.job.Inputs[e.Uses[0]].Key == "fall.free_fall":
 		b = ev.job.Inputs[e.Uses[0]].Band
 		e.Method = Entered
 	default:
@@ -195,6 +206,17 @@ func (ev *evaluation) entered() {
 	for _, i := range ev.uses[3] {
 		ev.add(StoppingTime, Between, &ev.job.Inputs[i].Band, i)
 	}
+	if ev.job.Point.Layout == nil {
+		return
+	}
+	for i := range ev.job.Inputs {
+		switch in := &ev.job.Inputs[i]; in.Key {
+		case "fall.free_fall":
+			ev.add(FreeFall, Between, &in.Band, i) // beside that of the layout
+		case DecelerationItem:
+			ev.add(DecelerationDistance, Between, &in.Band, i)
+		}
+	}
 }
 
 func (ev *evaluation) add(q Quantity, bound Bound, b *quantity.Band, input int) {
@@ -225,7 +247,7 @@ func (ev *evaluation) contradictions() {
 	es := ev.res.Estimates
 	for a := range es {
 		for b := a + 1; b < len(es); b++ {
-			if es[a].Quantity != es[b].Quantity || es[a].Evidence == es[b].Evidence && es[a].Evidence == Given || es[a].silent() || es[b].silent() {
+			if es[a].Quantity != es[b].Quantity || sameEntry(&es[a], &es[b]) || es[a].silent() || es[b].silent() {
 				continue
 			}
 			whole := apart(&es[a], &es[b])
@@ -235,6 +257,12 @@ func (ev *evaluation) contradictions() {
 			}
 		}
 	}
+}
+
+// sameEntry reports whether both are of the entries themselves, which are one
+// account of the stop; but a free fall as typed and one of the layout are two.
+func sameEntry(a, b *Estimate) bool {
+	return a.Evidence == Given && b.Evidence == Given && a.Quantity != FreeFall
 }
 
 // silent reports whether the estimate has no say in a contradiction.

@@ -20,6 +20,9 @@ func TestFormulaTexts(t *testing.T) {
 	for name, j := range pathJobs(t) {
 		jobs[name] = j
 	}
+	for name, j := range layoutJobs(t) {
+		jobs[name] = j
+	}
 	for name, j := range jobs {
 		res := Evaluate(j)
 		ShowWorking(j, &res)
@@ -49,7 +52,7 @@ func evaluateText(t *testing.T, w WorkingLine) float64 {
 	if !ok {
 		t.Fatalf("%q has no result", w.Formula)
 	}
-	env := map[string]any{"pi": math.Pi, "sqrt": math.Sqrt, "atan2": math.Atan2, "abs": math.Abs}
+	env := map[string]any{"pi": math.Pi, "sqrt": math.Sqrt, "atan2": math.Atan2, "abs": math.Abs, "asin": math.Asin, "sin": math.Sin, "cos": math.Cos}
 	for _, term := range w.Terms {
 		env[term.Symbol] = term.SI
 	}

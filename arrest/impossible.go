@@ -1,5 +1,7 @@
 package arrest
 
+import "arrestcheck/arrest/rig"
+
 // Impossible reports whether nothing in the whole of the job's bands can
 // happen (M-05): a force that only pulls needs
 //
@@ -8,12 +10,46 @@ package arrest
 // and limit, m, is the greatest right side the entries allow. Both distance
 // and time must be given; else nothing is impossible.
 func Impossible(j *Job) (limit float64, impossible bool) {
-	least, greatest := ends(j)
-	if least.Distance <= 0 || greatest.Time <= 0 {
+	if !bothGiven(j) {
 		return 0, false
 	}
+	least, greatest := ends(j)
 	var p Point
-	At(&greatest, &p)
+	if j.Point.Layout != nil {
+		spans, _ := overCorners(j)
+		greatest = atSpeed(greatest, greatest.Mass+greatest.Tools, spans.speeds()[1])
+	}
+	return beyondReach(&least, &greatest, &p)
+}
+
+// bothGiven reports whether distance and time of the stop are both given.
+func bothGiven(j *Job) bool { return j.Point.Distance > 0 && j.Point.Time > 0 }
+
+// beyondReach is Impossible for a job with these ends; p is room for a point.
+func beyondReach(least, greatest *Case, p *Point) (limit float64, impossible bool) {
+	At(greatest, p)
 	limit = reachable(p.Speed, greatest.Gravity, greatest.Time)
 	return limit, least.Distance >= limit
+}
+
+// LayoutFault returns the first position, from 0, that nobody can stand at as
+// drawn, for a part of the entries or for all, and why: out of reach of the
+// connector, or with the anchor inside the structure. It returns rig.Known where
+// there is none. The distance of anchor and D-ring is greatest at a corner of the
+// bands, so that corners say it all.
+func LayoutFault(j *Job) (status rig.Status, position int) {
+	for k := range j.Point.Layout.Positions {
+		at := *j
+		at.Point.Position = k
+		s := newSpans(&at)
+		var p Point
+		for n := range s.corners() {
+			c := s.corner(n)
+			At(&c, &p)
+			if st := p.Layout.Place.Status; st == rig.OutOfReach || st == rig.InStructure || st == rig.SlackTwice {
+				return st, k
+			}
+		}
+	}
+	return rig.Known, -1
 }

@@ -28,14 +28,16 @@ func Sources() []Source {
 type Role uint8
 
 const (
-	OfWorker   Role = iota + 1 // masses: measured, drawing or plan settle
-	OfFall                     // free fall, speed: measured, drawing or plan settle
-	OfStop                     // distance, time, shape: only measured settles (nobody plans a stopping distance)
-	OfDocument                 // figures of a rating: the document is the source
-	OfPlace                    // gravity, a stated constant
-	OfDrive                    // what goes on driving a moving load: measured, drawing or plan settle
-	OfPart                     // data of a connector part: measured, label or standard settle
-	OfModel                    // the allowance for the error of the model: any source but an assumption settles
+	OfWorker    Role = iota + 1 // masses: measured, drawing or plan settle
+	OfFall                      // free fall, speed: measured, drawing or plan settle
+	OfStop                      // distance, time, shape: only measured settles (nobody plans a stopping distance)
+	OfDocument                  // figures of a rating: the document is the source
+	OfPlace                     // gravity, a stated constant
+	OfDrive                     // what goes on driving a moving load: measured, drawing or plan settle
+	OfPart                      // data of a connector part: measured, label or standard settle
+	OfModel                     // the allowance for the error of the model: any source but an assumption settles
+	OfLayout                    // what a tape measure gives: measured, drawing or plan settle
+	OfClearance                 // items of a clearance: all but an assumption settle, a travel to rest only measured, label or standard
 )
 
 // An Input is one figure of the job. The inputs form the one list from which
@@ -54,6 +56,10 @@ type Input struct {
 	// Overridden marks a figure that was put in on the command line: nobody
 	// has given a source for it, whatever the file says.
 	Overridden bool
+
+	// Position is the number, from 1, of the position of a layout that the input
+	// belongs to; 0 where it belongs to none.
+	Position int
 
 	// Set writes an SI figure into a Case; nil where At does not use the input.
 	Set func(*Case, float64)
@@ -95,14 +101,23 @@ func (in *Input) settles() bool {
 	case FromMeasured:
 		return true
 	case FromLabel, FromStandard:
-		return in.Role == OfPart
+		return in.Role == OfPart || in.Role == OfClearance
 	case FromDrawing, FromPlan:
-		return in.Role == OfWorker || in.Role == OfFall || in.Role == OfDrive
+		switch in.Role {
+		case OfWorker, OfFall, OfDrive, OfLayout:
+			return true
+		case OfClearance:
+			return in.Key != DecelerationItem // nobody plans a stopping distance
+		}
 	}
 	return false
 }
 
 func (in *Input) exactZero() bool { return in.Band.Low == 0 && in.Band.High == 0 }
+
+// DecelerationItem is the key of the travel to rest among the items of a
+// clearance.
+const DecelerationItem = "clearance.deceleration_distance"
 
 // HasValue reports whether a middle figure was written.
 func (in *Input) HasValue() bool { return !math.IsNaN(in.Band.Value) }

@@ -114,6 +114,36 @@ var methods = [...]Method{
 		Source: "the user; our comparison with published drops is printed beside the request",
 	},
 	{
+		ID: "M-20", Title: "free fall from the layout",
+		Valid:  "a fall straight down from the position to the first pull of a straight connector; over an edge with the connector sliding along it to its shortest way, without friction; out to where the line of a retractable ends",
+		Errs:   "high over an edge, which in truth holds the connector back, and for a retractable below the D-ring, which is taken not to wind in; low where a connector has slack that was not entered",
+		Source: derived + "what counts as free fall: 29 CFR 1926.500(b), restated",
+	},
+	{
+		ID: "M-21", Title: "clearance, item by item from one datum",
+		Valid:  "every item is entered once, or held in another that says so; nothing gives way that was not entered",
+		Errs:   "as its items do; where an item is missing the sum is a floor, never the room needed. A margin is no measured travel. Left to a box at the edge of a swing it errs low by up to the drop of the swing",
+		Source: "definitions of 29 CFR 1926.500(b), restated; the sums are common practice",
+	},
+	{
+		ID: "M-22", Title: "angles of the layout, and a swing as if the connector did not stretch",
+		Valid:  "angles and drop of the geometry; the speeds only for a connector that does not stretch at all",
+		Errs:   "the speeds either way: a soft connector brings the body deeper and faster, an absorber slower. They decide no limit. Without friction and air drag",
+		Source: derived + "energy on the arc; the angle at work is that of the published 30 degree rules",
+	},
+	{
+		ID: "M-23", Title: "restraint: the reach of the connector against the edge",
+		Valid:  "the D-ring is carried at any height between the surface and its standing height; a straight connector",
+		Errs:   "high against a worker who stands upright; low by what a connector stretches under a stumble and by what of the body is beyond its D-ring. A retractable pays out at walking speed: it restrains only at the end of its line",
+		Source: derived + "a right triangle",
+	},
+	{
+		ID: "M-24", Title: "the arrest of a swing worked out in time, in its plane",
+		Valid:  "a fall from rest beside the anchor, straight down to the first pull; the parts as entered; tension along the connector, none when slack; motion in one upright plane",
+		Errs:   "high for want of friction and air drag, low where a later swing is harder: the fall straight down to the lowest point bounds any. Toppling, motion out of the plane and friction on an edge are not in it",
+		Source: derived + "two components step by step with momentum and energy accounts; checked against an independent integration",
+	},
+	{
 		ID: "M-50", Title: "bands: corners and turning points",
 		Valid:  "every figure lies somewhere in its band, in any combination",
 		Errs:   "wide: the ends are those of the least and most favourable combination. A range has no middle figure unless one was written",

@@ -1,10 +1,12 @@
 package arrest
 
 import (
+	"errors"
 	"math"
 	"math/bits"
 
 	"arrestcheck/arrest/connector"
+	"arrestcheck/arrest/rig"
 )
 
 // A PathRun is what the connector path does at one point, SI (M-15). NaN where
@@ -15,13 +17,20 @@ type PathRun struct {
 	FallFactor float64 // free fall over the length of the parts that state one; NaN where none does
 	Failed     error   // a run that does not close: an internal error
 
+	// Swings is true where a layout has the body go sideways: Run is then of a fall
+	// straight down to the lowest point that any swing has, and only Peak is of the
+	// swing itself (see LayoutRun.Planar).
+	Swings bool
+	NoFall bool // no fall follows from the layout, nothing was run
+
 	path  connector.Path
 	parts []connector.Part
 }
 
 // modelAt runs the path of c. The first call on a Point makes room; later ones
 // allocate nothing.
-func modelAt(c *Case, p *Point) {
+// h is the free fall, m.
+func modelAt(c *Case, p *Point, h float64) {
 	if p.Model == nil {
 		p.Model = new(PathRun)
 	}
@@ -34,8 +43,19 @@ func modelAt(c *Case, p *Point) {
 	if m.Failed = m.path.Set(m.parts...); m.Failed != nil {
 		return
 	}
-	fall := connector.Fall{Mass: p.TotalMass, FreeFall: c.FreeFall, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
+	m.Swings, m.NoFall = false, math.IsNaN(h)
+	if m.NoFall {
+		return
+	}
+	if c.Layout != nil && p.Layout.swings() {
+		m.Swings = true
+		h += p.Layout.Place.SwingDrop
+	}
+	fall := connector.Fall{Mass: p.TotalMass, FreeFall: h, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
 	m.Failed = connector.Run(&m.path, &fall, &m.Run)
+	if m.Swings && m.Failed == nil {
+		m.Failed = p.Layout.swing(m, &rig.Body{Mass: p.TotalMass, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity})
+	}
 	m.Absorber = nan
 	for i := range m.parts {
 		if m.parts[i].Kind == connector.Absorber {
@@ -44,9 +64,10 @@ func modelAt(c *Case, p *Point) {
 	}
 }
 
-// stopped returns x, or +Inf where the path never stops the body.
+// stopped returns x, or +Inf where the path never stops the body. It is NaN of
+// a swing: what is not of the swing itself says nothing about it.
 func (m *PathRun) stopped(x float64) float64 {
-	if m.Failed != nil {
+	if m.Failed != nil || m.NoFall || m.Swings {
 		return nan
 	}
 	if m.Run.Status == connector.Endless {
@@ -55,8 +76,20 @@ func (m *PathRun) stopped(x float64) float64 {
 	return x
 }
 
+// peak returns the greatest force, N, of the stop or of the swing; +Inf where
+// nothing gives way or nothing stops the body.
+func (m *PathRun) peak(p *Point) float64 {
+	if !m.Swings || m.Failed != nil || m.NoFall {
+		return m.stopped(m.Run.Peak)
+	}
+	return p.Layout.swungPeak()
+}
+
 // ratio is r of M-04 for the modelled stop.
 func (m *PathRun) ratio(p *Point) float64 {
+	if m.NoFall || m.Swings {
+		return nan
+	}
 	return p.Speed * m.Run.StoppingTime / (2 * m.Run.StoppingDistance)
 }
 
@@ -65,10 +98,23 @@ func (m *PathRun) ratio(p *Point) float64 {
 func Series(c *Case) ([]connector.State, error) {
 	var p Point
 	At(c, &p)
-	if p.Model.Failed != nil {
+	switch {
+	case p.Model.Failed != nil:
 		return nil, p.Model.Failed
+	case p.Model.NoFall || p.Model.Swings:
+		return nil, ErrNoStraightStop
+	case c.Layout != nil:
+		return series(c, &p, p.Layout.Place.FreeFall)
 	}
-	fall := connector.Fall{Mass: p.TotalMass, FreeFall: c.FreeFall, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
+	return series(c, &p, c.FreeFall)
+}
+
+// ErrNoStraightStop is the error of Series for a layout from which the body does
+// not fall and stop straight down.
+var ErrNoStraightStop = errors.New("arrest: no straight stop: the body swings, or does not fall at all")
+
+func series(c *Case, p *Point, h float64) ([]connector.State, error) {
+	fall := connector.Fall{Mass: p.TotalMass, FreeFall: h, InitialSpeed: c.InitialSpeed, Gravity: c.Gravity}
 	series, err := connector.Trace(&p.Model.path, &fall, &p.Model.Run, nil)
 	for i := range series {
 		series[i].F = max(0, series[i].F) // the path never pushes; rounding may
@@ -92,7 +138,7 @@ type pathNotes struct {
 
 // note takes one run into the notes.
 func (n *pathNotes) note(m *PathRun) {
-	if m.Failed != nil {
+	if m.Failed != nil || m.NoFall {
 		n.failed = m.Failed
 		return
 	}
@@ -117,6 +163,9 @@ var searched = [...]Quantity{
 	StoppingTime, OnsetRate, MeanForceOverDistance, MeanForceOverTime, ShapeRatio,
 }
 
+// searchedSwing are those of a layout.
+var searchedSwing = [...]Quantity{TotalFallDistance, ClearanceNeeded, ClearanceLeft, SwingSpeed, SpeedAtObstacle}
+
 const (
 	coarse = 8  // points tried along one input before the best is closed in on
 	fine   = 24 // golden sections after that
@@ -129,18 +178,30 @@ const (
 // other.
 func searchPath(s *spans) {
 	for _, q := range searched {
-		i := indexOf(q, Modelled)
-		for _, sign := range [...]float64{1, -1} {
-			x := s.of[i].low
-			if sign < 0 {
-				x = s.of[i].high
-			}
-			if !s.of[i].known() || math.IsInf(x.value, 0) {
-				continue
-			}
-			w := walkPath{s: s, at: s.caseAt(x), of: func(p *Point) float64 { return sign * outputs[i].of(p) }}
-			for range passes {
-				for _, in := range s.free {
+		s.search(indexOf(q, Modelled), false)
+	}
+	if s.base.Layout != nil {
+		for _, q := range searchedSwing {
+			s.search(indexOf(q, Modelled), false)
+		}
+	}
+}
+
+// search closes in on both ends of one output, along one input after the other;
+// of the layout alone where that is all the output hangs on.
+func (s *spans) search(i int, layout bool) {
+	for _, sign := range [...]float64{1, -1} {
+		x, of := s.of[i].low, outputs[i].low
+		if sign < 0 {
+			x, of = s.of[i].high, outputs[i].of
+		}
+		if !s.of[i].known() || math.IsInf(x.value, 0) {
+			continue
+		}
+		w := walkPath{s: s, at: s.caseAt(x), of: func(p *Point) float64 { return sign * of(p) }}
+		for range passes {
+			for _, in := range s.free {
+				if !layout || in.Role == OfLayout {
 					w.along(in)
 				}
 			}

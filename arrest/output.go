@@ -11,12 +11,16 @@ const (
 	onTime
 	onRise  // also what else drives the motion
 	onParts // the figures of the connector path
+	onLayout
+	onClearance
 
 	ofFall // the output is one of a fall
 	ofLoad // the output is one of a moving load
 	ofPath // the output is one of a connector path
+	ofLayout
+	ofModel // of a layout with a connector path
 
-	places   = 6 // how many of the bits stand for inputs
+	places   = 8 // how many of the bits stand for inputs
 	onInputs = ofFall - 1
 	onStop   = onDistance | onTime
 )
@@ -26,8 +30,13 @@ func (o *output) applies(c *Case) bool {
 	if c.Load.Mass > 0 {
 		return o.rests&ofLoad != 0 && o.axes <= c.Load.Axes
 	}
-	if o.rests&ofPath != 0 {
+	switch {
+	case o.rests&ofPath != 0:
 		return c.Path != nil
+	case o.rests&ofModel != 0:
+		return c.Layout != nil && c.Path != nil
+	case o.rests&ofLayout != 0:
+		return c.Layout != nil
 	}
 	return o.rests&ofFall != 0 && (o.evidence != Shape || c.Pulse != NoPulse)
 }
@@ -41,6 +50,25 @@ type output struct {
 	rests    rests
 	of       func(*Point) float64
 	axes     int // how many components the motion needs for it
+}
+
+// low returns the least of an output at one point, where a point has two ends:
+// the speeds of a swing without stretch.
+func (o *output) low(p *Point) float64 {
+	if o.evidence == Shape && o.quantity == SwingSpeed && p.Layout != nil && p.Layout.Place.Plane.Offset > 0 {
+		return p.Layout.Swing.LowestLow
+	}
+	return o.of(p)
+}
+
+// layoutOf makes an output of a layout; NaN where a point has none.
+func layoutOf(of func(*LayoutRun) float64) func(*Point) float64 {
+	return func(p *Point) float64 {
+		if p.Layout == nil {
+			return nan
+		}
+		return of(p.Layout)
+	}
 }
 
 // outputs is the one table of what At gives, in print order: peaks before
@@ -64,10 +92,10 @@ var outputs = [...]output{
 	{StoppingDistance, Shape, "M-07", Between, ofFall | onFall | onTime | onRise, func(p *Point) float64 { return p.Assumed.Distance }, 0},
 	{StoppingTime, Shape, "M-07", Between, ofFall | onFall | onDistance | onRise, func(p *Point) float64 { return p.Assumed.Time }, 0},
 
-	{PeakForce, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Peak) }, 0},
-	{ForceOverWeight, Modelled, "M-08", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Peak) / p.Weight }, 0},
+	{PeakForce, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.peak(p) }, 0},
+	{ForceOverWeight, Modelled, "M-08", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.peak(p) / p.Weight }, 0},
 	{PeakDeceleration, Modelled, "M-08", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Peak)/p.TotalMass - p.Weight/p.TotalMass }, 0},
-	{AnchorForce, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.AnchorForce) }, 0},
+	{AnchorForce, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.peak(p) }, 0},
 	{OnsetRate, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.Onset) }, 0},
 	{StoppingDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.StoppingDistance) }, 0},
 	{DecelerationDistance, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.DecelerationDistance) }, 0},
@@ -77,6 +105,21 @@ var outputs = [...]output{
 	{MeanForceOverTime, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.stopped(p.Model.Run.MeanOverTime) }, 0},
 	{ShapeRatio, Modelled, "M-15", Between, ofPath | onMass | onFall | onParts, func(p *Point) float64 { return p.Model.ratio(p) }, 0},
 	{FallFactor, Given, "M-10", Between, ofPath | onFall | onParts, func(p *Point) float64 { return p.Model.FallFactor }, 0},
+
+	{OffsetAngle, Given, "M-22", Between, ofLayout | onLayout, layoutOf(func(r *LayoutRun) float64 { return r.Place.OffsetAngle }), 0},
+	{SwingAngle, Given, "M-22", Between, ofLayout | onLayout, layoutOf(func(r *LayoutRun) float64 { return r.Place.SwingAngle }), 0},
+	{SwingDrop, Given, "M-22", Between, ofLayout | onLayout, layoutOf(func(r *LayoutRun) float64 { return r.Place.SwingDrop }), 0},
+	{RestraintReach, Given, "M-23", Between, ofLayout | onLayout, layoutOf(func(r *LayoutRun) float64 { return r.Restraint.Reach }), 0},
+	{TotalFallDistance, Given, "M-21", Between, ofLayout | onLayout | onDistance | onClearance, layoutOf(func(r *LayoutRun) float64 { return r.totalFall(&r.Given) }), 0},
+	{ClearanceNeeded, Given, "M-21", Between, ofLayout | onLayout | onDistance | onClearance, layoutOf(func(r *LayoutRun) float64 { return r.Given.needed() }), 0},
+	{ClearanceLeft, Given, "M-21", Between, ofLayout | onLayout | onDistance | onClearance, layoutOf(func(r *LayoutRun) float64 { return r.Given.left() }), 0},
+	{TotalFallDistance, Modelled, "M-21", Between, ofModel | onMass | onFall | onParts | onLayout, layoutOf(func(r *LayoutRun) float64 { return r.modelledFall }), 0},
+	{ClearanceNeeded, Modelled, "M-21", Between, ofModel | onMass | onFall | onParts | onLayout | onClearance, layoutOf(func(r *LayoutRun) float64 { return r.Modelled.needed() }), 0},
+	{ClearanceLeft, Modelled, "M-21", Between, ofModel | onMass | onFall | onParts | onLayout | onClearance, layoutOf(func(r *LayoutRun) float64 { return r.Modelled.left() }), 0},
+	{SwingSpeed, Modelled, "M-24", Between, ofModel | onMass | onFall | onParts | onLayout, layoutOf((*LayoutRun).swungSpeed), 0},
+	{SpeedAtObstacle, Modelled, "M-24", Between, ofModel | onMass | onFall | onParts | onLayout, layoutOf((*LayoutRun).swungPass), 0},
+	{SwingSpeed, Shape, "M-22", Between, ofLayout | onFall | onLayout, layoutOf((*LayoutRun).swingSpeed), 0},
+	{SpeedAtObstacle, Shape, "M-22", AtMost, ofLayout | onFall | onLayout, layoutOf((*LayoutRun).fastestPass), 0},
 
 	{PeakForce, Given, "M-60", AtLeast, ofLoad | onMass | onFall | onDistance | onTime | onRise, func(p *Point) float64 { return p.Floor }, 0},
 	{PeakDeceleration, Given, "M-60", AtLeast, ofLoad | onFall | onDistance | onTime, func(p *Point) float64 { return p.Load.Deceleration }, 0},

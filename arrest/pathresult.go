@@ -53,7 +53,11 @@ func (ev *evaluation) harder(e *Estimate) float64 {
 		j.Point.Path = &plan
 		ev.short, _ = overCorners(&j)
 	}
-	return ev.short.of[indexOf(e.Quantity, Modelled)].high.value
+	s := &ev.short.of[indexOf(e.Quantity, Modelled)]
+	if e.Quantity == ClearanceLeft {
+		return s.low.value
+	}
+	return s.high.value
 }
 
 // runs keeps the modelled arrest as written, at the greatest peak and at the
@@ -65,14 +69,16 @@ func (ev *evaluation) runs() {
 	add := func(corner Corner, c Case) {
 		var p Point
 		At(&c, &p)
-		if p.Model.Failed == nil {
+		if p.Model.Failed == nil && !p.Model.NoFall && !p.Model.Swings {
 			ev.res.Runs = append(ev.res.Runs, ModelRun{corner, c, p.Model.Run})
 		}
 	}
 	peak := &ev.spans.of[indexOf(PeakForce, Modelled)]
 	written := ev.allWritten(ev.restsOn(onMass | onFall | onParts))
 	if written {
-		add(AtWritten, ev.job.Point)
+		c := ev.job.Point
+		c.Position = ev.spans.at[indexOf(PeakForce, Modelled)]
+		add(AtWritten, c)
 	}
 	if peak.known() && !(written && peak.low.value == peak.high.value) {
 		add(AtHigh, ev.spans.caseAt(peak.high))
@@ -142,10 +148,18 @@ func (ev *evaluation) warnParts(plan *PathPlan) {
 	}
 	if !absorbs && !stretches {
 		i := ev.res.estimate(PeakForce, Modelled)
-		if i >= 0 && ev.hi.FreeFall > 0 {
+		if i >= 0 && ev.falls() {
 			ev.tell(NothingAbsorbs, Figure(quantity.Force, ev.res.Estimates[i].High, quantity.Nearest))
 		}
 	}
+}
+
+// falls reports whether the body falls freely anywhere in the entries.
+func (ev *evaluation) falls() bool {
+	if ev.job.Point.Layout == nil {
+		return ev.hi.FreeFall > 0
+	}
+	return ev.spans.of[indexOf(FreeFall, Given)].high.value > 0
 }
 
 // warnRatedParts compares what documents promise with what the model does.

@@ -7,8 +7,9 @@ import (
 	"arrestcheck/arrest/connector"
 )
 
-// MaxPathFigures is the greatest number of figures of one connector path.
-const MaxPathFigures = 24
+// MaxFigures is the greatest number of figures that a connector path and a
+// layout have together.
+const MaxFigures = 48
 
 // NoFigure stands in a PlannedPart where it has no such figure.
 const NoFigure = -1

@@ -1,7 +1,7 @@
 package arrest
 
 import (
-	"fmt"
+	"strconv"
 	"strings"
 
 	"arrestcheck/arrest/quantity"
@@ -26,6 +26,7 @@ func (ev *evaluation) rating(n int) {
 		if outside {
 			e.High = nan
 		}
+		ev.doubt(&e)
 		ev.res.Estimates = append(ev.res.Estimates, e)
 	}
 	add(PeakForce, r.PeakForceAtMost)
@@ -50,7 +51,11 @@ func (ev *evaluation) ratingOutside(r *Rating) bool {
 		outside = true
 		ev.tell(RatingMassOutside, Text(r.Document), mass(m.Low), mass(m.High), mass(r.TotalMass.Low), mass(r.TotalMass.High))
 	}
-	if i := ev.res.estimate(FreeFall, Given); ev.res.Estimates[i].High > r.FreeFallAtMost.High {
+	i := ev.res.estimate(FreeFall, Given)
+	if i < 0 {
+		return true // the layout gives no fall: nothing to test the document with
+	}
+	if ev.res.Estimates[i].High > r.FreeFallAtMost.High {
 		outside = true
 		ev.tell(RatingFallOutside, Text(r.Document), length(ev.res.Estimates[i].High), length(r.FreeFallAtMost.High))
 	}
@@ -60,9 +65,10 @@ func (ev *evaluation) ratingOutside(r *Rating) bool {
 // ratingInputs lists the inputs that are figures of the nth rating.
 func (ev *evaluation) ratingInputs(n int) []int {
 	var list []int
-	prefix := fmt.Sprintf("rated[%d].", n+1)
+	number := strconv.Itoa(n + 1)
 	for i := range ev.job.Inputs {
-		if strings.HasPrefix(ev.job.Inputs[i].Key, prefix) {
+		rest, rated := strings.CutPrefix(ev.job.Inputs[i].Key, "rated[")
+		if rest, same := strings.CutPrefix(rest, number); rated && same && strings.HasPrefix(rest, "].") {
 			list = append(list, i)
 		}
 	}
@@ -96,13 +102,18 @@ func (ev *evaluation) ratedTravel(r *Rating, peak int) {
 	if r.TravelAtMost == nil {
 		return
 	}
-	floor := floorOver(ev.hi, r.TravelAtMost.High)
+	slow, fast := ev.lo, ev.hi
+	if ev.job.Point.Layout != nil {
+		speeds := ev.spans.speeds()
+		slow, fast = atSpeed(slow, slow.Mass+slow.Tools, speeds[0]), atSpeed(fast, fast.Mass+fast.Tools, speeds[1])
+	}
+	floor := floorOver(fast, r.TravelAtMost.High)
 	if floor <= r.PeakForceAtMost.High {
 		return
 	}
 	ev.tell(RatingContradicted, Text(r.Document),
 		Figure(quantity.Force, floor, quantity.Down), Figure(quantity.Force, r.PeakForceAtMost.High, quantity.Nearest))
-	whole := floorOver(ev.lo, r.TravelAtMost.High) > r.PeakForceAtMost.High
+	whole := floorOver(slow, r.TravelAtMost.High) > r.PeakForceAtMost.High
 	ev.res.Contradictions = append(ev.res.Contradictions, Contradiction{peak, peak, !whole})
 }
 

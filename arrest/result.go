@@ -71,7 +71,27 @@ type Result struct {
 	Warnings       []Warning
 	Working        []WorkingLine // empty until ShowWorking fills it
 	Contradictions []Contradiction
-	Runs           []ModelRun // of the connector path: as written, at the greatest peak, at the longest stop
+	Runs           []ModelRun    // of the connector path: as written, at the greatest peak, at the longest stop
+	Layout         *LayoutResult // nil where the job has no layout
 	Persons        int
 	Example        bool
+}
+
+// A LayoutResult is the layout of a job, position by position.
+type LayoutResult struct {
+	Plan   *LayoutPlan
+	Places []LayoutPlace // one for each position, in the order of the plan
+	Worst  int           // index of the position of the greatest free fall; -1 where none has one
+
+	// Tightest is the position and the point that leave the least room; where
+	// nothing lies below, those that need the most. Nil without a clearance.
+	Tightest *LayoutPlace
+}
+
+// A LayoutPlace is one position at one point.
+type LayoutPlace struct {
+	Index  int    // of the position
+	Corner Corner // AtWritten where all of the layout has middle figures, else AtHigh, the point of the greatest free fall from there
+	Case   Case
+	Run    LayoutRun
 }

@@ -70,7 +70,7 @@ func (t *task) of(c *Case, p *Point) float64 {
 // false if something sought asks for more than corners, as a connector path
 // over bands does, or is no output of a fall: then Evaluate is the way.
 func NewScan(j *Job, moved []int, sought []Sought) (*Scan, bool) {
-	if j.Moving() {
+	if j.Moving() || j.Point.Layout != nil {
 		return nil, false
 	}
 	s := &Scan{job: *j, moved: slices.Clone(moved)}

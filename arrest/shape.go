@@ -32,8 +32,7 @@ func (ev *evaluation) assumedShape() {
 		return
 	}
 	var p Point
-	for n := range ev.spans.corners() {
-		at := ev.spans.corner(n)
+	for at := range ev.spans.all {
 		for _, c := range [...]Case{withoutTime(at), withoutDistance(at)} {
 			At(&c, &p)
 			ev.spans.take(&p, ev.spans.add(c), shapes)
@@ -50,8 +49,7 @@ func withoutDistance(c Case) Case { c.Distance = 0; return c }
 func (ev *evaluation) shapeDistances() (least, greatest float64) {
 	least, greatest = math.Inf(1), math.Inf(-1)
 	var p Point
-	for n := range ev.spans.corners() {
-		c := ev.spans.corner(n)
+	for c := range ev.spans.all {
 		At(&c, &p)
 		least, greatest = min(least, p.Assumed.Distance), max(greatest, p.Assumed.Distance)
 	}

@@ -39,10 +39,17 @@ type spans struct {
 	base   Case     // every input at its low end
 	beside []Case   // points beside the corners
 	path   pathNotes
+
+	layouts []layoutNotes // of a layout, for each position
+	parts   []*spans      // of several positions: their own, of which these are the worst
+	at      map[int]int   // the position that an output of several is worst at, by its number
 }
 
 func newSpans(j *Job) *spans {
 	s := &spans{job: j, of: make([]span, len(outputs)), live: make([]int, 0, len(outputs)), base: j.Point}
+	if l := j.Point.Layout; l != nil {
+		s.at = map[int]int{}
+	}
 	for i := range s.of {
 		s.of[i].forget()
 		if outputs[i].applies(&j.Point) {
@@ -55,7 +62,7 @@ func newSpans(j *Job) *spans {
 			continue
 		}
 		in.Set(&s.base, in.Band.Low)
-		if in.Band.High > in.Band.Low {
+		if in.Band.High > in.Band.Low && (in.Position == 0 || in.Position == j.Point.Position+1) {
 			s.free = append(s.free, in)
 		}
 	}
@@ -76,6 +83,30 @@ func (s *spans) corner(number int) Case {
 
 // corners is how many there are.
 func (s *spans) corners() int { return 1 << len(s.free) }
+
+// all yields the corners, and of a layout the points beside them too, of all
+// positions.
+func (s *spans) all(yield func(Case) bool) {
+	for _, part := range s.parts {
+		part.all(yield)
+	}
+	if len(s.parts) > 0 {
+		return
+	}
+	for n := range s.corners() {
+		if !yield(s.corner(n)) {
+			return
+		}
+	}
+	if s.base.Layout == nil {
+		return
+	}
+	for _, c := range s.beside[:len(s.beside):len(s.beside)] {
+		if !yield(c) {
+			return
+		}
+	}
+}
 
 // caseAt returns the case that an extreme was found at.
 func (s *spans) caseAt(e extreme) Case {
@@ -99,38 +130,63 @@ func (s *spans) take(p *Point, where int, list []int) {
 			continue
 		}
 		s.of[i].take(outputs[i].of(p), where)
+		if p.Layout != nil && outputs[i].evidence == Shape {
+			s.of[i].take(outputs[i].low(p), where)
+		}
 	}
 }
 
 // takeBeside widens the spans of all outputs by a point beside the corners and
 // keeps it only where it widens one.
 func (s *spans) takeBeside(p *Point, c *Case) {
-	s.notePath(p)
+	s.note(c, p)
 	for _, i := range s.live {
-		if x := outputs[i].of(p); x < s.of[i].low.value || x > s.of[i].high.value {
+		low, high := outputs[i].low(p), outputs[i].of(p)
+		if low < s.of[i].low.value || high > s.of[i].high.value || !s.of[i].known() && !math.IsNaN(high) {
 			s.take(p, s.add(*c), s.live)
 			return
 		}
 	}
 }
 
-func (s *spans) notePath(p *Point) {
+// note takes one point into the notes.
+func (s *spans) note(c *Case, p *Point) {
 	if s.base.Path != nil {
 		s.path.note(p.Model)
 	}
+	if c.Layout != nil {
+		if s.layouts == nil {
+			s.layouts = make([]layoutNotes, 1)
+		}
+		s.layouts[0].note(c, p)
+	}
 }
 
-// overCorners fills the spans from all corners and, where some of them cannot
-// happen, from the edge of what can.
+// overCorners fills the spans from all corners of the bands and from the points
+// beside them at which an output may have an end; of a layout position by
+// position.
 func overCorners(j *Job) (s *spans, partImpossible bool) {
+	if j.Point.Layout != nil {
+		return overLayout(j)
+	}
+	return overBox(j)
+}
+
+// overBox fills the spans from all corners and, where some of them cannot
+// happen, from the edge of what can.
+func overBox(j *Job) (s *spans, partImpossible bool) {
 	s = newSpans(j)
 	var p Point
 	for n := range s.corners() {
 		c := s.corner(n)
 		At(&c, &p)
 		s.take(&p, n, s.live)
-		s.notePath(&p)
+		s.note(&c, &p)
 		partImpossible = partImpossible || p.Impossible
+	}
+	if j.Point.Layout != nil {
+		noOffset(j, s)
+		searchLayout(s)
 	}
 	if partImpossible {
 		overEdge(j, s)
@@ -159,6 +215,9 @@ func overEdge(j *Job, s *spans) {
 	At(&hi, &b)
 	masses := [...]float64{a.TotalMass, b.TotalMass}
 	speeds := [...]float64{a.Speed, b.Speed}
+	if j.Point.Layout != nil {
+		speeds = s.speeds()
+	}
 	lengths := [...]float64{lo.Distance, hi.Distance}
 	times := [...]float64{lo.Time, hi.Time}
 	for i := range speeds {
@@ -203,8 +262,14 @@ func edgePoint(s *spans, base *Case, masses [2]float64, v, d, t float64, within 
 // atSpeed returns c with the mass m in all and the speed v when the arrest
 // begins, exactly: the square root of a square is exact.
 func atSpeed(c Case, m, v float64) Case {
-	c.Mass, c.Tools, c.FreeFall, c.InitialSpeed = m, 0, 0, v
+	c.Mass, c.Tools, c.FreeFall, c.InitialSpeed, c.Layout = m, 0, 0, v, nil
 	return c
+}
+
+// speeds returns the least and the greatest speed when the arrest begins.
+func (s *spans) speeds() [2]float64 {
+	v := &s.of[indexOf(FallSpeed, Given)]
+	return [...]float64{v.low.value, v.high.value}
 }
 
 // ends returns the case with every input at its low end and the one with every
@@ -234,7 +299,12 @@ func lowerFloor(j *Job, s *spans) {
 	var a, b Point
 	At(&lo, &a)
 	At(&hi, &b)
-	v := min(max(2*lo.Distance/hi.Time, a.Speed), b.Speed)
+	slow, fast := a.Speed, b.Speed
+	if j.Point.Layout != nil {
+		speeds := s.speeds()
+		slow, fast = speeds[0], speeds[1]
+	}
+	v := min(max(2*lo.Distance/hi.Time, slow), fast)
 	c := atSpeed(lo, a.TotalMass, v)
 	c.Time = hi.Time
 	c.Distance = min(max(v*hi.Time/2, lo.Distance), hi.Distance)

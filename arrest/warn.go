@@ -45,12 +45,16 @@ func (ev *evaluation) warn(partImpossible bool) {
 	if partImpossible {
 		var slow Point
 		At(&ev.lo, &slow)
+		if c.Layout != nil {
+			slow.Speed = ev.spans.speeds()[0]
+		}
 		ev.tell(PartImpossible, length(reachable(slow.Speed, ev.lo.Gravity, ev.lo.Time)), length(ev.hi.Distance))
 	}
 	if c.Pulse != NoPulse && !ev.told(ShapeContradicted) {
 		ev.tell(ShapeAssumed, Text(c.Pulse.String()))
 	}
 	ev.warnPath()
+	ev.warnLayout()
 	ev.warnRatio()
 	ev.warnFloor()
 	ev.warnContradictions()
@@ -133,7 +137,11 @@ func (e *Estimate) end(d quantity.Dimension) Arg {
 
 // warnFall says how an initial speed was counted and where drag matters.
 func (ev *evaluation) warnFall() {
-	fall := ev.res.Estimates[ev.res.estimate(FreeFall, Given)].High
+	i := ev.res.estimate(FreeFall, Given)
+	if i < 0 {
+		return // the layout gives none
+	}
+	fall := ev.res.Estimates[i].High
 	if ev.hi.InitialSpeed > 0 {
 		ev.tell(RatingSpeedCounted, Figure(quantity.Speed, ev.hi.InitialSpeed, quantity.Nearest), length(fall))
 	}

@@ -37,6 +37,24 @@ const (
 	NoAllowanceEntered       WarningID = "no_allowance"                // none: the report prints the published comparison beside it
 	RatedAgainstModel        WarningID = "rated_against_model"         // document, quantity title, rated figure, greatest modelled figure
 	LedgersClose             WarningID = "ledgers_close"               // momentum left over momentum, energy left over energy (ratios): arithmetic only
+	LayoutRestrained         WarningID = "layout_restrained"           // position: over all of the entries the connector ends before the edge
+	LayoutRestrainedInPart   WarningID = "layout_restrained_in_part"   // position: over part of the entries only
+	LayoutEdge               WarningID = "layout_edge"                 // position, document that rates a part for the edge: the connector comes to the edge
+	LayoutEdgeUnrated        WarningID = "layout_edge_unrated"         // position: it comes to an edge that no part is rated for
+	LayoutAnchorLow          WarningID = "layout_anchor_low"           // greatest free fall (length), least connector length (length): the anchor is below the D-ring, the fall longer than the connector
+	LayoutOutOfPlane         WarningID = "layout_out_of_plane"         // position: the swing is in no plane, nothing is said about it
+	LayoutIntoFace           WarningID = "layout_into_face"            // position: the swing goes into the structure below the edge
+	LayoutStrikes            WarningID = "layout_strikes"              // position, obstacle, least speed, greatest speed: the body comes to it
+	LayoutStrikesFalling     WarningID = "layout_strikes_falling"      // position, obstacle, greatest speed: it comes to it before the first pull
+	LayoutStrikeForce        WarningID = "layout_strike_force"         // obstacle, distance stated, mean force of the hit not less than
+	LayoutNothingBelow       WarningID = "layout_nothing_below"        // none: no obstacle was entered, so nothing is left to anything
+	LayoutNoClearance        WarningID = "layout_no_clearance"         // none: no [clearance] was entered
+	LayoutItemsMissing       WarningID = "layout_items_missing"        // evidence, items missing, comma separated, room not less than (length)
+	LayoutDatumsApart        WarningID = "layout_datums_apart"         // evidence, length: the sums from feet and from anchor differ by it
+	LayoutFeetStanding       WarningID = "layout_feet_standing"        // none: D-ring to feet not entered, the standing height was taken to look for obstacles
+	LayoutWidthUnknown       WarningID = "layout_width_unknown"        // none: half width not entered, every box counts as in the way
+	LayoutLaterSwing         WarningID = "layout_later_swing"          // modelled peak (force), bound of any later swing (force)
+	LayoutInextensible       WarningID = "layout_inextensible"         // none: swing speeds of a connector without stretch are no bounds
 	MeansAreNotPeaks         WarningID = "means_are_not_peaks"         // none: means are printed
 	NoMiddle                 WarningID = "no_middle"                   // keys, comma separated: ranges have no middle figure
 )
@@ -74,6 +92,24 @@ var warningIDs = [...]WarningID{
 	NoAllowanceEntered,
 	RatedAgainstModel,
 	LedgersClose,
+	LayoutRestrained,
+	LayoutRestrainedInPart,
+	LayoutEdge,
+	LayoutEdgeUnrated,
+	LayoutAnchorLow,
+	LayoutOutOfPlane,
+	LayoutIntoFace,
+	LayoutStrikes,
+	LayoutStrikesFalling,
+	LayoutStrikeForce,
+	LayoutNothingBelow,
+	LayoutNoClearance,
+	LayoutItemsMissing,
+	LayoutDatumsApart,
+	LayoutFeetStanding,
+	LayoutWidthUnknown,
+	LayoutLaterSwing,
+	LayoutInextensible,
 	MeansAreNotPeaks,
 	NoMiddle,
 }

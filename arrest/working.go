@@ -5,6 +5,7 @@ import (
 
 	"arrestcheck/arrest/connector"
 	"arrestcheck/arrest/quantity"
+	"arrestcheck/arrest/rig"
 )
 
 // A symbol is one letter of the formulas below and where its figure is found.
@@ -22,6 +23,32 @@ var symbols = [...]symbol{
 	{Symbol{"W", "weight", quantity.Force}, func(c *Case, p *Point) float64 { return p.Weight }},
 	{Symbol{"u", "initial speed downward", quantity.Speed}, func(c *Case, p *Point) float64 { return c.InitialSpeed }},
 	{Symbol{"h", "free fall", quantity.Length}, func(c *Case, p *Point) float64 { return c.FreeFall }},
+	{Symbol{"z_A", "height of the anchor above the surface", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Layout.Anchor.Z })},
+	{Symbol{"y_A", "the anchor outwards of the edge", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Layout.Anchor.Y })},
+	{Symbol{"z_D", "height of the D-ring above the surface at the start", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Start.Z })},
+	{Symbol{"x_D", "the D-ring along the edge from the anchor", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Start.X })},
+	{Symbol{"y_D", "the D-ring outwards of the edge", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Start.Y })},
+	{Symbol{"L_c", "length of the connector", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Layout.Length })},
+	{Symbol{"l_slack", "slack", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Layout.Slack })},
+	{Symbol{"l_lock", "travel before locking", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Layout.Locking })},
+	{Symbol{"s", "offset in plan at the start", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Offset })},
+	{Symbol{"A_D", "from the anchor to the D-ring at the start", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Distance })},
+	{Symbol{"R", "way along the connector at the first pull", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Radius })},
+	{Symbol{"b", "from the anchor to the edge", quantity.Length}, placed(func(r *LayoutRun) float64 { return math.Hypot(r.Layout.Anchor.Y, r.Layout.Anchor.Z) })},
+	{Symbol{"d_edge", "what hangs over the edge at the first pull", quantity.Length}, placed(overhang)},
+	{Symbol{"z_taut", "height of the D-ring at the first pull", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Taut.Z })},
+	{Symbol{"alpha", "offset angle at work", quantity.Angle}, placed(func(r *LayoutRun) float64 { return r.Place.OffsetAngle })},
+	{Symbol{"s_swing", "offset from the pivot of the swing", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Plane.Offset })},
+	{Symbol{"R_swing", "radius of the swing at the first pull", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.Plane.Radius })},
+	{Symbol{"beta", "swing angle when taut", quantity.Angle}, placed(func(r *LayoutRun) float64 { return r.Place.SwingAngle })},
+	{Symbol{"H", "drop of the swing", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Place.SwingDrop })},
+	{Symbol{"v_least", "speed at the lowest point without stretch, all of it along the connector lost", quantity.Speed}, placed(func(r *LayoutRun) float64 { return r.Swing.LowestLow })},
+	{Symbol{"v_most", "speed at the lowest point without stretch, nothing lost", quantity.Speed}, placed(func(r *LayoutRun) float64 { return r.Swing.LowestHigh })},
+	{Symbol{"dz_reach", "height to be bridged by the restraint", quantity.Length}, placed(func(r *LayoutRun) float64 { return max(0, max(r.Layout.Anchor.Z-r.Layout.DRing, -r.Layout.Anchor.Z)) })},
+	{Symbol{"L_all", "connector and slack together", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Layout.Length + r.Layout.Slack })},
+	{Symbol{"reach", "reach of the restraint in plan", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Restraint.Reach })},
+	{Symbol{"x_dec", "deceleration distance as entered", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.Given.Clearance.Entries[rig.ItemDeceleration].Value })},
+	{Symbol{"h_total", "total fall distance", quantity.Length}, placed(func(r *LayoutRun) float64 { return r.totalFall(&r.Given) })},
 	{Symbol{"h_equal", "free fall from rest that gives the same speed", quantity.Length}, func(c *Case, p *Point) float64 { return p.FreeFall }},
 	{Symbol{"v", "speed when the arrest begins", quantity.Speed}, func(c *Case, p *Point) float64 { return p.Speed }},
 	{Symbol{"E", "energy of the fall", quantity.Energy}, func(c *Case, p *Point) float64 { return p.Energy }},
@@ -94,6 +121,14 @@ var symbols = [...]symbol{
 	{Symbol{"F_shape", "peak if the stop had the assumed shape", quantity.Force}, func(c *Case, p *Point) float64 { return p.Assumed.Peak }},
 }
 
+// placed finds a symbol of the layout.
+func placed(of func(*LayoutRun) float64) func(*Case, *Point) float64 {
+	return func(c *Case, p *Point) float64 { return of(p.Layout) }
+}
+
+// overhang is d of the place over an edge (M-20).
+func overhang(r *LayoutRun) float64 { return math.Hypot(r.Place.Taut.Y, r.Place.Taut.Z) }
+
 // fallOn is tau of M-06.
 func fallOn(c *Case, p *Point) float64 {
 	return (2*c.Distance - float64(p.Speed*c.Time)) / (p.Speed + float64(c.Gravity*c.Time))
@@ -136,6 +171,13 @@ func spring(c *Case, p *Point) bool       { return c.Pulse != EarlyPeak }
 func early(c *Case, p *Point) bool        { return c.Pulse == EarlyPeak }
 func withSpeed(c *Case, p *Point) bool    { return c.InitialSpeed > 0 }
 func overDistance(c *Case, p *Point) bool { return onlyDistance(c, p) || longStop(c, p) }
+
+func laid(c *Case, p *Point) bool       { return c.Layout != nil }
+func overAnEdge(c *Case, p *Point) bool { return laid(c, p) && p.Layout.Place.OverEdge }
+func hungFree(c *Case, p *Point) bool   { return laid(c, p) && !p.Layout.Place.OverEdge }
+func flat(c *Case, p *Point) bool       { return p.Layout.Place.Plane.Flat }
+func ofLine(c *Case, p *Point) bool     { return laid(c, p) && !p.Layout.Layout.Retractable }
+func ofRetract(c *Case, p *Point) bool  { return laid(c, p) && p.Layout.Layout.Retractable }
 
 func falling(c *Case, p *Point) bool           { return c.Load.Mass <= 0 }
 func moving(c *Case, p *Point) bool            { return c.Load.Mass > 0 }
@@ -185,6 +227,29 @@ var passages = [...]passage{
 		{"M-01", "m = m_worker + m_tools", falling},
 		{"M-01", "W = m*g", nil},
 	}, 0},
+	{FreeFall, Given, []line{
+		{"M-20", "s = sqrt(x_D^2 + (y_D - y_A)^2)", laid},
+		{"M-20", "A_D = sqrt(s^2 + (z_A - z_D)^2)", ofRetract},
+		{"M-20", "R = L_c + l_slack", ofLine},
+		{"M-20", "R = min(A_D + l_lock, L_c)", ofRetract},
+		{"M-20", "z_taut = z_A - sqrt(R^2 - s^2)", hungFree},
+		{"M-20", "b = sqrt(y_A^2 + z_A^2)", overAnEdge},
+		{"M-20", "d_edge = sqrt(R^2 - x_D^2) - b", overAnEdge},
+		{"M-20", "z_taut = -sqrt(d_edge^2 - y_D^2)", overAnEdge},
+		{"M-20", "h = z_D - z_taut", laid},
+	}, 0},
+	{OffsetAngle, Given, []line{{"M-22", "alpha = atan2(s, z_A - z_D)", nil}}, 0},
+	{SwingAngle, Given, []line{{"M-22", "beta = asin(s_swing/R_swing)", nil}}, 0},
+	{SwingDrop, Given, []line{{"M-22", "H = R_swing*(1 - cos(beta))", flat}}, 0},
+	{SwingSpeed, Shape, []line{
+		{"M-22", "v_least = sqrt((u^2 + 2*g*h)*sin(beta)^2 + 2*g*H)", nil},
+		{"M-22", "v_most = sqrt(u^2 + 2*g*(h + H))", nil},
+	}, 0},
+	{RestraintReach, Given, []line{
+		{"M-23", "L_all = L_c + l_slack", nil},
+		{"M-23", "reach = sqrt(L_all^2 - dz_reach^2)", nil},
+	}, 0},
+	{TotalFallDistance, Given, []line{{"M-21", "h_total = h + x_dec", nil}}, 0},
 	{FreeFall, Given, []line{{"M-01", "h_equal = h + u^2/(2*g)", withSpeed}}, 0},
 	{FallSpeed, Given, []line{{"M-01", "v = sqrt(u^2 + 2*g*h)", nil}}, 0},
 	{FallEnergy, Given, []line{{"M-01", "E = m*v^2/2", nil}}, 0},
@@ -288,7 +353,9 @@ func (ev *evaluation) working() {
 func (ev *evaluation) passage(ps *passage, o *output, s *span) {
 	written := ev.allWritten(ev.restsOn(o.rests)) && !ev.written.Impossible && !math.IsNaN(o.of(&ev.written))
 	if written {
-		ev.lines(ps, o, AtWritten, ev.job.Point)
+		c := ev.job.Point
+		c.Position = ev.spans.at[indexOf(o.quantity, o.evidence)]
+		ev.lines(ps, o, AtWritten, c)
 	}
 	if written && s.low.value == s.high.value {
 		return
@@ -302,6 +369,9 @@ func (ev *evaluation) passage(ps *passage, o *output, s *span) {
 func (ev *evaluation) lines(ps *passage, o *output, corner Corner, at Case) {
 	c, p := &at, new(Point)
 	At(c, p)
+	if p.Layout != nil {
+		c.FreeFall = p.Layout.Place.FreeFall // as the formulas read it
+	}
 	for i := range ps.lines {
 		l := &ps.lines[i]
 		if l.when != nil && !l.when(c, p) {
@@ -340,7 +410,7 @@ func identifiers(formula string) []string {
 				return true
 			}
 		}
-		return n == "sqrt" || n == "abs" || n == "atan2" || n == "max" || n == "pi"
+		return n == "sqrt" || n == "abs" || n == "atan2" || n == "asin" || n == "sin" || n == "cos" || n == "max" || n == "min" || n == "pi"
 	}
 	for i := 0; i < len(formula); {
 		j := i

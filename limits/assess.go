@@ -26,14 +26,11 @@ func Assess(res *arrest.Result, sets []Set, elsewhere []Elsewhere) Assessment {
 		NotEntered: notEntered(res, sets, elsewhere),
 		Elsewhere:  elsewhere,
 	}
-	r := row{res: res}
+	var c Comparison
 	for i := range sets {
 		from := len(a.Findings)
 		for j := range sets[i].Limits {
-			l := &sets[i].Limits[j]
-			mustBeWhole(l)
-			r.gather(&sets[i], l)
-			a.Findings = append(a.Findings, r.finding())
+			a.Findings = append(a.Findings, c.Compare(res, &sets[i], &sets[i].Limits[j]))
 		}
 		a.group(from)
 	}

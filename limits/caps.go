@@ -51,14 +51,16 @@ func (r *row) openInputs(uses, testedWith []int) []int {
 	return open
 }
 
-// modelCaps looks at every modelled estimate of the quantity, whether it
-// governs or not: a device that is used up keeps no promise either.
+// modelCaps looks at every estimate of the quantity, whether it governs or
+// not: a device that is used up keeps no promise either, nor does any over an
+// edge.
 func (r *row) modelCaps() []Reason {
-	exhausted, beyond := false, false
+	exhausted, beyond, edge, strikes, unreached := false, false, false, false, false
 	for i := range r.res.Estimates {
 		e := &r.res.Estimates[i]
 		if r.decides(e) {
 			exhausted, beyond = exhausted || e.Exhausted, beyond || e.Beyond
+			edge, strikes, unreached = edge || e.Edge, strikes || e.Strikes, unreached || e.Unreached
 		}
 	}
 	var reasons []Reason
@@ -67,6 +69,15 @@ func (r *row) modelCaps() []Reason {
 	}
 	if beyond {
 		reasons = append(reasons, Reason{ID: BeyondModel})
+	}
+	if strikes {
+		reasons = append(reasons, Reason{ID: BodyStrikes})
+	}
+	if edge {
+		reasons = append(reasons, Reason{ID: EdgeContact})
+	}
+	if unreached {
+		reasons = append(reasons, Reason{ID: PlaceUnknown})
 	}
 	return reasons
 }

@@ -43,6 +43,9 @@ const (
 	NoAllowance          ReasonID = "no_allowance"          // none: a modelled figure without the user's allowance is not compared
 	DeviceExhausted      ReasonID = "exhausted_device"      // none: somewhere in the entries a travel is used up
 	BeyondModel          ReasonID = "beyond_model"          // none: a loading curve is left, or the stop is a blow on something rigid
+	EdgeContact          ReasonID = "edge_contact"          // none: somewhere in the entries the connector comes to an edge
+	BodyStrikes          ReasonID = "body_strikes"          // none: somewhere in the entries the body comes to an obstacle or the structure
+	PlaceUnknown         ReasonID = "place_unknown"         // none: for part of the entries the connector ends before the edge, or the swing is in no plane
 	NotComputed          ReasonID = "not_computed"          // none: nothing to compare; or the key of the condition that nothing was entered to test
 )
 
