@@ -24,7 +24,16 @@ type evaluation struct {
 // ShowWorking. The job must be one that Impossible does not refuse. Equal jobs
 // give equal results, to the last bit, on every machine.
 func Evaluate(j *Job) Result {
-	ev, partImpossible := begin(j)
+	ev, partImpossible := estimate(j)
+	ev.runs()
+	ev.layout()
+	ev.warn(partImpossible)
+	return ev.res
+}
+
+// estimate works out the estimates of a job and the contradictions between them.
+func estimate(j *Job) (ev *evaluation, partImpossible bool) {
+	ev, partImpossible = begin(j)
 	ev.res.Estimates = make([]Estimate, 0, len(outputs)+4*(1+len(j.Ratings)))
 	ev.closedForms()
 	ev.entered()
@@ -32,10 +41,7 @@ func Evaluate(j *Job) Result {
 		ev.rating(i)
 	}
 	ev.contradictions()
-	ev.runs()
-	ev.layout()
-	ev.warn(partImpossible)
-	return ev.res
+	return ev, partImpossible
 }
 
 // ShowWorking adds to r, the result of j, the working line by line.

@@ -322,6 +322,12 @@ func TestLayoutSpansHoldEveryPoint(t *testing.T) {
 			positions: [][2]string{{band(r.Float64()-0.5, 0.6), band(r.Float64()-0.3, 0.5)}},
 			obstacles: []testObstacle{{below: band(2.5, 0.5)}}, datum: rig.BelowFeet,
 			items: map[rig.Item]string{rig.ItemDeceleration: band(1, 0.2), rig.ItemHarness: "0.3 m", rig.ItemLineStretch: "0 m", rig.ItemAnchor: "0 m", rig.ItemMargin: "0 m"}}
+		if n%4 == 0 {
+			tl.obstacles = append(tl.obstacles, testObstacle{below: band(1.5, 0.3), sides: [4]string{band(-0.5, 0.2), band(0.5, 0.2), band(0.4, 0.2), band(1.5, 0.2)}})
+		}
+		if n%5 == 0 {
+			tl.positions[0] = [2]string{"0 m", "0 m"}
+		}
 		switch n % 3 {
 		case 0:
 			tl.slack = "0.1 m"

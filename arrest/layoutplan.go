@@ -51,6 +51,16 @@ type PlannedObstacle struct {
 // level reports whether the obstacle is everything below a height.
 func (po *PlannedObstacle) level() bool { return po.AlongFrom == NoFigure && !po.Moving }
 
+// boxed reports whether an obstacle has sides.
+func (pl *LayoutPlan) boxed() bool {
+	for i := range pl.Obstacles {
+		if o := &pl.Obstacles[i]; !o.level() && !o.Moving {
+			return true
+		}
+	}
+	return false
+}
+
 // A ClearancePlan holds the items of a clearance that were entered; free fall,
 // swing and the connector come from the layout, a modelled travel from the path.
 type ClearancePlan struct {

@@ -71,19 +71,15 @@ func (ev *evaluation) laidOut(i int, e *Estimate) {
 	case e.Evidence == Modelled && ev.anySwing() && e.Method == "M-15":
 		e.Method = "M-24"
 	case o.rests&ofLayout != 0 && e.Evidence == Shape:
-		if e.Bound == AtMost {
-			e.Low, e.Value = nan, nan
-			e.High = max(e.High, ev.fastestMissed())
-		}
-		if e.Quantity == SwingSpeed && ev.straightToo() {
-			e.Low = 0
-		}
+		ev.unstretched(e)
 	case e.Quantity == SwingSpeed && ev.straightToo():
 		e.Low = 0
 	case e.Quantity == SpeedAtObstacle && ev.missed():
 		e.Low = 0
 	case floor && e.Quantity == ClearanceNeeded:
 		e.Bound = AtLeast
+	case e.Quantity == ClearanceLeft && !floor && ev.leftOpen(e.Evidence):
+		e.Bound, e.High, e.Value = AtLeast, nan, nan
 	case floor && e.Quantity == ClearanceLeft:
 		e.Bound, e.Low, e.Value = AtMost, nan, nan
 	}
@@ -121,16 +117,54 @@ func (ev *evaluation) restrainedInPart() bool {
 	return false
 }
 
-// fastestMissed bounds, where a swing without stretch misses every obstacle for
-// a part of the entries only, the speed at the point where it just comes to one.
+// fastestMissed bounds the speed at the point where a swing without stretch just
+// comes to an obstacle: where it misses all of them for a part of the entries
+// only, and where the side of a box may be anywhere on its way.
 func (ev *evaluation) fastestMissed() float64 {
 	most := 0.0
 	for k := range ev.spans.layouts {
-		if n := &ev.spans.layouts[k]; 0 < n.touched && n.touched < n.tried {
+		if n := &ev.spans.layouts[k]; 0 < n.touched && (n.touched < n.tried || n.tried > 1 && ev.job.Point.Layout.boxed()) {
 			most = max(most, n.fastest)
 		}
 	}
 	return most
+}
+
+// unstretched puts the ends of a speed right that holds if the connector does
+// not stretch.
+func (ev *evaluation) unstretched(e *Estimate) {
+	switch {
+	case e.Bound == AtMost:
+		e.Low, e.Value = nan, nan
+		e.High = max(e.High, ev.fastestMissed())
+	case ev.straightToo():
+		e.Low = 0
+		for k := range ev.spans.layouts {
+			e.High = greater(e.High, ev.spans.layouts[k].fastest)
+		}
+	case e.Low < e.High && math.IsNaN(e.Value):
+		// The least speed is not monotone in the offset: each of its terms at
+		// its least is a bound.
+		least := func(q Quantity) float64 { return ev.spans.of[indexOf(q, Given)].low.value }
+		sin := math.Sin(least(SwingAngle))
+		v2 := float64(ev.lo.InitialSpeed*ev.lo.InitialSpeed) + float64(2*ev.lo.Gravity*least(FreeFall))
+		e.Low = min(e.Low, math.Sqrt(float64(v2*sin*sin)+float64(2*ev.lo.Gravity*least(SwingDrop))))
+	}
+}
+
+// leftOpen reports whether what is left is that to a box which is in the way
+// for a part of the entries at most.
+func (ev *evaluation) leftOpen(e Evidence) bool {
+	k := 0
+	if e == Modelled {
+		k = 1
+	}
+	for i := range ev.spans.layouts {
+		if ev.spans.layouts[i].open[k] {
+			return true
+		}
+	}
+	return false
 }
 
 // missed reports whether the swing misses every obstacle for a part of the
@@ -335,11 +369,7 @@ func (ev *evaluation) warnRoom(plan *LayoutPlan) {
 	if len(plan.Obstacles) == 0 {
 		ev.tell(LayoutNothingBelow)
 	}
-	boxes := false
-	for i := range plan.Obstacles {
-		boxes = boxes || !plan.Obstacles[i].level() && !plan.Obstacles[i].Moving
-	}
-	if boxes && plan.HalfWidth == NoFigure {
+	if plan.boxed() && plan.HalfWidth == NoFigure {
 		ev.tell(LayoutWidthUnknown)
 	}
 	if len(plan.Obstacles) > 0 && plan.Feet == NoFigure {

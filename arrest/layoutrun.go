@@ -39,6 +39,8 @@ type Room struct {
 	Travel float64 // of Modelled: the part of Needed that the path gives
 	Left   float64 // the least that is left to an obstacle; NaN where none is in the way
 	Lefts  rig.Lefts
+
+	below float64 // the room needed below the feet, whatever the datum
 }
 
 // Inextensible stands in Estimate.From of what holds only if the connector
@@ -79,8 +81,7 @@ func roomAt(c *Case, p *Point) {
 	if plan == nil || r.Place.Status != rig.Known {
 		return
 	}
-	entered := plan.holds(rig.ItemDeceleration) || c.Distance > 0
-	if entered || p.Model == nil {
+	if plan.entered(c) || c.Path == nil {
 		plan.enter(c, r, &r.Given, false)
 		if !plan.holds(rig.ItemDeceleration) && c.Distance > 0 {
 			// The stopping distance is the whole travel of the D-ring.
@@ -95,6 +96,11 @@ func roomAt(c *Case, p *Point) {
 		r.Modelled.Clearance.Entries[rig.ItemDeceleration] = rig.Entry{Present: true, Value: r.Modelled.Travel, Includes: held}
 		r.Modelled.sum(plan, r)
 	}
+}
+
+// entered reports whether a travel to rest is, among the items or as the stop.
+func (pl *ClearancePlan) entered(c *Case) bool {
+	return pl.holds(rig.ItemDeceleration) || c.Distance > 0
 }
 
 // holds reports whether the item was entered.
@@ -139,7 +145,8 @@ func (room *Room) sum(plan *ClearancePlan, r *LayoutRun) {
 	if s.Missing != 0 && s.Twice == 0 {
 		room.Floor, room.Needed = true, s.Present
 	}
-	room.Lefts = r.Layout.Left(&r.Place, room.Needed-below)
+	room.below = room.Needed - below
+	room.Lefts = r.Layout.Left(&r.Place, room.below)
 	room.Left = nan
 	if room.Lefts.Count > 0 {
 		room.Left = room.Lefts.List[0].Left

@@ -38,6 +38,11 @@ type layoutNotes struct {
 	later      float64
 	givenFloor bool // an item is missing
 	modelFloor bool
+
+	plan  rectangle  // all places that the body swings over
+	aside []int      // by obstacle: the points at which it is not in the way
+	need  [2]float64 // greatest room needed below the feet, m: given, modelled
+	open  [2]bool    // what is left comes from a box that is at no point tried in the way
 }
 
 // note takes one point into the notes.
@@ -50,6 +55,9 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 		for i := range n.strikes {
 			n.strikes[i] = strike{c.Position, false, nan, nan, nan}
 		}
+		n.aside = make([]int, len(n.strikes))
+		n.need = [...]float64{nan, nan}
+		n.plan = rectangle{math.Inf(1), math.Inf(-1), math.Inf(1), math.Inf(-1)}
 	}
 	n.tried++
 	count := func(to *int, is bool) {
@@ -81,8 +89,33 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 			n.peak, n.later = r.swungPeak(), r.Planar.PeakBound
 		}
 	}
+	n.places(r)
 	for i := range n.strikes {
 		n.strike(c, p, i)
+	}
+}
+
+// places notes where in plan the body can come and what is in the way there.
+func (n *layoutNotes) places(r *LayoutRun) {
+	pl := &r.Place.Plane
+	n.plan.take(r.Place.Start.X, r.Place.Start.Y)
+	if pl.Flat {
+		n.plan.take(pl.X-float64(pl.DX*pl.Offset), pl.Y-float64(pl.DY*pl.Offset))
+	}
+	for k, room := range [...]*Room{&r.Given, &r.Modelled} {
+		if !room.Known || k == 1 && r.Given.Known {
+			continue
+		}
+		for i := range n.aside {
+			if room.Lefts.Aside>>i&1 == 1 {
+				n.aside[i]++
+			}
+		}
+	}
+	for k, room := range [...]*Room{&r.Given, &r.Modelled} {
+		if room.Known {
+			n.need[k] = greater(n.need[k], room.below)
+		}
 	}
 }
 
@@ -203,101 +236,207 @@ func (n *pathNotes) join(o *pathNotes) {
 	}
 }
 
-// noOffset widens the spans by the points beside the corners at which an offset
-// between anchor and position is least: where a band holds it, at none at all.
-// Every figure that grows or shrinks with the offset has an end there.
-func noOffset(j *Job, s *spans) {
+// overSite fills the spans of a layout at one position: what hangs on the
+// geometry alone over the axes of the geometry; what hangs on the fall over its
+// least and greatest free fall with all that is not of the layout; and what a
+// path gives over both together.
+func overSite(j *Job, s *spans) (partImpossible bool) {
+	g := newSiting(j)
+	g.geometry()
+	g.room()
+	s.overGeometry(g)
+	partImpossible = s.overFalls(g)
+	if j.Point.Path != nil {
+		s.overRuns(g)
+	}
+	s.boxes(j)
+	return partImpossible
+}
+
+// widen widens the spans of some outputs by a point, of which a copy is kept
+// only where it widens one.
+func (s *spans) widen(p *Point, c *Case, list []int) {
+	for _, i := range list {
+		o := &outputs[i]
+		if p.Impossible && o.rests&onStop != 0 && o.rests&ofLayout == 0 {
+			continue
+		}
+		low, high := o.low(p), o.of(p)
+		if low < s.of[i].low.value || high > s.of[i].high.value || !s.of[i].known() && !math.IsNaN(high) {
+			where := s.add(*c)
+			s.take(p, where, list)
+			return
+		}
+	}
+}
+
+// listed returns the live outputs that the test picks.
+func (s *spans) listed(picks func(*output) bool) []int {
+	var list []int
+	for _, i := range s.live {
+		if picks(&outputs[i]) {
+			list = append(list, i)
+		}
+	}
+	return list
+}
+
+// ofSite reports whether the output hangs on the layout and on no path.
+func ofSite(o *output) bool {
+	return o.rests&ofLayout != 0 || o.quantity == FreeFall && o.evidence == Given
+}
+
+func ofRun(o *output) bool { return o.rests&(ofPath|ofModel) != 0 }
+
+// overGeometry works the layout out at every corner of its axes, without a path.
+func (s *spans) overGeometry(g *siting) {
+	motion := s.alone(func(in *Input) bool { return in.place() == 1 || in.Role == OfPlace })
+	axes := append(motion, g.axes...)
+	modelled := s.base.Path != nil
+	list := s.listed(func(o *output) bool {
+		// With a path its travel is the one that counts where none was entered.
+		rooms := o.rests&onClearance != 0
+		return ofSite(o) && !(rooms && modelled && g.plan.Clearance != nil && !g.plan.Clearance.entered(&s.base))
+	})
+	base := s.base
+	base.Path = nil
+	var p Point
+	try := func(c *Case) {
+		At(c, &p)
+		at := *c
+		at.Path = s.base.Path
+		if !modelled {
+			s.note(c, &p)
+		}
+		s.widen(&p, &at, list)
+	}
+	for n := range 1 << len(axes) {
+		c := cornerOf(&base, axes, n)
+		try(&c)
+		g.kinks(&c, try)
+	}
+}
+
+// overFalls works out what hangs on the fall at its least and greatest height,
+// with every corner of what is not of the layout.
+func (s *spans) overFalls(g *siting) (partImpossible bool) {
+	s.axes = s.alone(func(*Input) bool { return true })
+	heights := [...]float64{nan, nan}
+	if fall := &s.of[indexOf(FreeFall, Given)]; fall.known() {
+		low, high := s.caseAt(fall.low), s.caseAt(fall.high)
+		heights = [...]float64{s.fallAt(&low), s.fallAt(&high)}
+		s.axes = append(s.axes, func(c *Case, end bool) {
+			from := &low
+			if end {
+				from = &high
+			}
+			// All figures of the layout, none of the path.
+			for _, n := range g.plan.figures(g.pos) {
+				c.Figures[n] = from.Figures[n]
+			}
+		})
+	}
+	list := s.listed(func(o *output) bool { return !ofSite(o) && !ofRun(o) })
+	var p Point
+	for n := range 1 << len(s.axes) {
+		c := cornerOf(&s.base, s.axes, n)
+		bare := c
+		bare.Layout, bare.Path = nil, nil
+		bare.FreeFall = heights[n>>max(0, len(s.axes)-1)&1]
+		At(&bare, &p)
+		partImpossible = partImpossible || p.Impossible
+		s.widen(&p, &c, list)
+	}
+	return partImpossible
+}
+
+// fallAt returns the free fall of a point, m.
+func (s *spans) fallAt(c *Case) float64 {
+	var l rig.Layout
+	c.Layout.fill(c, &l)
+	return l.At(c.Position).FreeFall
+}
+
+// figures lists the figures of the layout that a position has.
+func (pl *LayoutPlan) figures(pos *PlannedPosition) []int {
+	var list []int
+	for _, n := range [...]int{pl.AnchorHeight, pl.BehindEdge, pl.DRing, pl.Length, pl.Slack, pl.Locking, pos.Along, pos.Out} {
+		if n != NoFigure {
+			list = append(list, n)
+		}
+	}
+	return list
+}
+
+// overRuns runs the path at every corner of the geometry with every corner of
+// what is not of the layout, and closes in on what lies between.
+func (s *spans) overRuns(g *siting) {
+	axes := append(s.alone(func(in *Input) bool { return in.Role != OfStop }), g.axes...)
+	list := s.listed(ofRun)
+	var p Point
+	try := func(c *Case) {
+		At(c, &p)
+		s.note(c, &p)
+		s.widen(&p, c, list)
+	}
+	for n := range 1 << len(axes) {
+		c := cornerOf(&s.base, axes, n)
+		try(&c)
+		g.kinks(&c, try)
+	}
+	searchPath(s)
+}
+
+// boxes lowers what is left by the boxes that may be in the way for some point
+// of the bands although they are not at every point tried: the plan of all
+// swings, as one rectangle, comes over them.
+func (s *spans) boxes(j *Job) {
+	n := &s.layouts[0]
 	lo, hi := ends(j)
-	plan, pos := j.Point.Layout, &j.Point.Layout.Positions[j.Point.Position]
-	var p Point
-	for n := range s.corners() {
-		corner := s.corner(n)
-		along := corner
-		along.Figures[pos.Along] = clamp(0, &lo, &hi, pos.Along)
-		out, both := corner, along
-		for _, c := range [...]*Case{&out, &both} {
-			anchor := 0.0
-			if plan.Edge != rig.NoEdge {
-				anchor = -c.Figures[plan.BehindEdge]
+	for i := range j.Point.Layout.Obstacles {
+		o := &j.Point.Layout.Obstacles[i]
+		if o.level() || o.Moving || n.aside[i] == 0 || !n.plan.meets(o, &lo, &hi, j.Point.Layout.HalfWidth) {
+			continue
+		}
+		room := lo.Figures[o.Below]
+		for k, e := range [...]Evidence{Given, Modelled} {
+			of := indexOf(ClearanceLeft, e)
+			left := room - n.need[k]
+			if math.IsNaN(left) {
+				continue
 			}
-			c.Figures[pos.Out] = clamp(anchor, &lo, &hi, pos.Out)
-			if plan.Edge != rig.NoEdge {
-				c.Figures[plan.BehindEdge] = clamp(-c.Figures[pos.Out], &lo, &hi, plan.BehindEdge)
-			}
-		}
-		for _, c := range [...]*Case{&along, &out, &both} {
-			if *c != corner {
-				At(c, &p)
-				s.takeBeside(&p, c)
-			}
-		}
-	}
-}
-
-// clamp returns the value nearest to x that the figure can have.
-func clamp(x float64, lo, hi *Case, figure int) float64 {
-	return min(max(x, lo.Figures[figure]), hi.Figures[figure])
-}
-
-// turned are the outputs of a layout that need not have their ends at corners:
-// the free fall of a retractable whose line comes to its end, the speeds of a
-// swing, and what is left to obstacles that are in the way for a part of the
-// bands only.
-var turned = [...]struct {
-	quantity Quantity
-	evidence Evidence
-}{
-	{FreeFall, Given}, {SwingSpeed, Shape}, {SpeedAtObstacle, Shape},
-	{SwingDrop, Given}, {ClearanceNeeded, Given}, {ClearanceLeft, Given},
-}
-
-// searchLayout widens the spans by turning points inside the bands of the
-// layout, and carries those of the free fall to every corner of all else.
-func searchLayout(s *spans) {
-	if !s.freeLayout() {
-		return
-	}
-	for _, t := range turned {
-		s.search(indexOf(t.quantity, t.evidence), true)
-	}
-	fall := &s.of[indexOf(FreeFall, Given)]
-	for _, e := range [...]extreme{fall.low, fall.high} {
-		if fall.known() && e.where < 0 {
-			s.spread(s.caseAt(e))
-		}
-	}
-}
-
-// freeLayout reports whether a figure of the layout has two ends.
-func (s *spans) freeLayout() bool {
-	for _, in := range s.free {
-		if in.Role == OfLayout {
-			return true
-		}
-	}
-	return false
-}
-
-// spread widens the spans by a point with every corner of what is not of the
-// layout.
-func (s *spans) spread(at Case) {
-	var p Point
-	for n := range s.corners() {
-		c, same := at, true
-		for i, in := range s.free {
-			high := n>>i&1 == 1
-			switch {
-			case in.Role == OfLayout:
-				same = same && !high
-			case high:
-				in.Set(&c, in.Band.High)
-			default:
-				in.Set(&c, in.Band.Low)
+			n.short = n.short || left < 0
+			switch span := &s.of[of]; {
+			case !span.known():
+				where := s.of[indexOf(ClearanceNeeded, e)].high.where
+				*span = span2(left, where)
+				n.open[k] = true
+			case left < span.low.value:
+				span.low = extreme{left, s.of[indexOf(ClearanceNeeded, e)].high.where}
 			}
 		}
-		if same {
-			At(&c, &p)
-			s.takeBeside(&p, &c)
-		}
 	}
+}
+
+func span2(x float64, where int) span { return span{extreme{x, where}, extreme{x, where}} }
+
+// A rectangle is a part of the plan, m.
+type rectangle struct{ x0, x1, y0, y1 float64 }
+
+// take widens the rectangle by a point.
+func (r *rectangle) take(x, y float64) {
+	r.x0, r.x1, r.y0, r.y1 = min(r.x0, x), max(r.x1, x), min(r.y0, y), max(r.y1, y)
+}
+
+// meets reports whether a box, as large as its bands allow, comes into the
+// rectangle, to either side of which the body reaches. Without a half width it
+// does.
+func (r *rectangle) meets(o *PlannedObstacle, lo, hi *Case, halfWidth int) bool {
+	if halfWidth == NoFigure {
+		return true
+	}
+	w := hi.Figures[halfWidth]
+	x0, x1 := order(min(lo.Figures[o.AlongFrom], lo.Figures[o.AlongTo]), max(hi.Figures[o.AlongFrom], hi.Figures[o.AlongTo]))
+	y0, y1 := order(min(lo.Figures[o.OutFrom], lo.Figures[o.OutTo]), max(hi.Figures[o.OutFrom], hi.Figures[o.OutTo]))
+	return x0-w <= r.x1 && x1+w >= r.x0 && y0-w <= r.y1 && y1+w >= r.y0
 }

@@ -202,3 +202,16 @@ func TestLoadSpansHoldRandomPoints(t *testing.T) {
 		}
 	}
 }
+
+// With a time and a distance the peak is not below the greater mean, and exact
+// entries leave it there: 100 kg from 2 m/s to rest, m*v/t = 400 N in 0.5 s,
+// m*v^2/(2*d) = 800 N over 0.25 m; and the other way round 800 N and 400 N.
+func TestFloorOfALoadIsTheGreaterMean(t *testing.T) {
+	for distance, time := range map[string]string{"0.25 m": "0.5 s", "0.5 m": "0.25 s"} {
+		j := loadFigures{mass: "100 kg", before: []string{"2 m/s"}, after: []string{"0 m/s"}, distance: distance, time: time}.job(t)
+		res := Evaluate(j)
+		if e := find(t, &res, PeakForce, Given); e.Low != 800 || e.Reach != 800 {
+			t.Errorf("%s in %s: %g .. %g N, want 800", distance, time, e.Low, e.Reach)
+		}
+	}
+}

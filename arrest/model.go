@@ -178,18 +178,17 @@ const (
 // other.
 func searchPath(s *spans) {
 	for _, q := range searched {
-		s.search(indexOf(q, Modelled), false)
+		s.search(indexOf(q, Modelled))
 	}
 	if s.base.Layout != nil {
 		for _, q := range searchedSwing {
-			s.search(indexOf(q, Modelled), false)
+			s.search(indexOf(q, Modelled))
 		}
 	}
 }
 
-// search closes in on both ends of one output, along one input after the other;
-// of the layout alone where that is all the output hangs on.
-func (s *spans) search(i int, layout bool) {
+// search closes in on both ends of one output, along one input after the other.
+func (s *spans) search(i int) {
 	for _, sign := range [...]float64{1, -1} {
 		x, of := s.of[i].low, outputs[i].low
 		if sign < 0 {
@@ -201,9 +200,7 @@ func (s *spans) search(i int, layout bool) {
 		w := walkPath{s: s, at: s.caseAt(x), of: func(p *Point) float64 { return sign * of(p) }}
 		for range passes {
 			for _, in := range s.free {
-				if !layout || in.Role == OfLayout {
-					w.along(in)
-				}
+				w.along(in)
 			}
 		}
 	}

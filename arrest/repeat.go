@@ -34,6 +34,10 @@ func (r *Repeat) Impossible() bool {
 	if !bothGiven(&r.Job) {
 		return false
 	}
+	if r.Job.Point.Layout != nil {
+		_, never := Impossible(&r.Job)
+		return never
+	}
 	r.restart()
 	_, never := beyondReach(&r.ev.lo, &r.ev.hi, &r.at)
 	return never
@@ -43,10 +47,13 @@ func (r *Repeat) Impossible() bool {
 // those of the function Evaluate, to the last bit; warnings and runs are left
 // out. The result holds until the next call.
 //
-// A connector path is worked out by that function: there the runs take the time.
+// A connector path and a layout are worked out anew: there the points take the
+// time.
 func (r *Repeat) Evaluate() *Result {
 	if r.Job.Point.Path != nil || r.Job.Point.Layout != nil {
-		r.ev.res = Evaluate(&r.Job)
+		ev, _ := estimate(&r.Job)
+		r.ev.res = ev.res
+		r.ev.res.Warnings = nil
 		return &r.ev.res
 	}
 	ev := &r.ev

@@ -93,3 +93,17 @@ func TestRampByDistanceAlone(t *testing.T) {
 		t.Errorf("%+v", e)
 	}
 }
+
+// A shape alone is no stop: without a distance or a time nothing follows of it.
+func TestShapeWithoutAStop(t *testing.T) {
+	c := reference()
+	c.Pulse = RisingRamp
+	var p Point
+	At(&c, &p)
+	for name, x := range map[string]float64{"peak": p.Assumed.Peak, "over weight": p.Assumed.OverWeight, "deceleration": p.Assumed.Deceleration,
+		"distance": p.Assumed.Distance, "time": p.Assumed.Time, "onset": p.Assumed.Onset} {
+		if !math.IsNaN(x) {
+			t.Errorf("%s = %g of a stop that nothing is known of", name, x)
+		}
+	}
+}

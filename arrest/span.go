@@ -40,6 +40,7 @@ type spans struct {
 	beside []Case   // points beside the corners
 	path   pathNotes
 
+	axes    []axis        // of a layout: the corners are those of the fall
 	layouts []layoutNotes // of a layout, for each position
 	parts   []*spans      // of several positions: their own, of which these are the worst
 	at      map[int]int   // the position that an output of several is worst at, by its number
@@ -72,6 +73,9 @@ func newSpans(j *Job) *spans {
 // corner returns the case of one corner of the bands (M-50): where bit i of
 // its number is set, the ith free input is at its high end.
 func (s *spans) corner(number int) Case {
+	if s.axes != nil {
+		return cornerOf(&s.base, s.axes, number)
+	}
 	c := s.base
 	for i, in := range s.free {
 		if number>>i&1 == 1 {
@@ -82,10 +86,14 @@ func (s *spans) corner(number int) Case {
 }
 
 // corners is how many there are.
-func (s *spans) corners() int { return 1 << len(s.free) }
+func (s *spans) corners() int {
+	if s.axes != nil {
+		return 1 << len(s.axes)
+	}
+	return 1 << len(s.free)
+}
 
-// all yields the corners, and of a layout the points beside them too, of all
-// positions.
+// all yields the corners of all positions.
 func (s *spans) all(yield func(Case) bool) {
 	for _, part := range s.parts {
 		part.all(yield)
@@ -95,14 +103,6 @@ func (s *spans) all(yield func(Case) bool) {
 	}
 	for n := range s.corners() {
 		if !yield(s.corner(n)) {
-			return
-		}
-	}
-	if s.base.Layout == nil {
-		return
-	}
-	for _, c := range s.beside[:len(s.beside):len(s.beside)] {
-		if !yield(c) {
 			return
 		}
 	}
@@ -151,7 +151,7 @@ func (s *spans) takeBeside(p *Point, c *Case) {
 
 // note takes one point into the notes.
 func (s *spans) note(c *Case, p *Point) {
-	if s.base.Path != nil {
+	if c.Path != nil {
 		s.path.note(p.Model)
 	}
 	if c.Layout != nil {
@@ -176,22 +176,15 @@ func overCorners(j *Job) (s *spans, partImpossible bool) {
 // happen, from the edge of what can.
 func overBox(j *Job) (s *spans, partImpossible bool) {
 	s = newSpans(j)
-	var p Point
-	for n := range s.corners() {
-		c := s.corner(n)
-		At(&c, &p)
-		s.take(&p, n, s.live)
-		s.note(&c, &p)
-		partImpossible = partImpossible || p.Impossible
-	}
 	if j.Point.Layout != nil {
-		noOffset(j, s)
-		searchLayout(s)
+		partImpossible = overSite(j, s)
+	} else {
+		partImpossible = s.overAll()
 	}
 	if partImpossible {
 		overEdge(j, s)
 	}
-	if j.Point.Path != nil {
+	if j.Point.Path != nil && j.Point.Layout == nil {
 		searchPath(s)
 	}
 	if j.Moving() {
@@ -201,6 +194,19 @@ func overBox(j *Job) (s *spans, partImpossible bool) {
 		lowerFloor(j, s)
 	}
 	return s, partImpossible
+}
+
+// overAll fills the spans from all corners.
+func (s *spans) overAll() (partImpossible bool) {
+	var p Point
+	for n := range s.corners() {
+		c := s.corner(n)
+		At(&c, &p)
+		s.take(&p, n, s.live)
+		s.note(&c, &p)
+		partImpossible = partImpossible || p.Impossible
+	}
+	return partImpossible
 }
 
 // overEdge widens the spans by the points where an edge of the box of speed,

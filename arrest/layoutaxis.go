@@ -1,0 +1,244 @@
+package arrest
+
+import (
+	"math"
+
+	"arrestcheck/arrest/rig"
+)
+
+// An axis is one direction in which the entries of a layout are taken to their
+// ends: an input alone, or several that act on every figure in the same sense
+// and therefore go together.
+type axis func(c *Case, high bool)
+
+// cornerOf returns the point at one corner of the axes, of which bit i of its
+// number says whether axis i is at its high end.
+func cornerOf(base *Case, axes []axis, number int) Case {
+	c := *base
+	for i, to := range axes {
+		to(&c, number>>i&1 == 1)
+	}
+	return c
+}
+
+// alone returns the axes of the free inputs that are not of the layout and that
+// the test picks.
+func (s *spans) alone(picks func(*Input) bool) []axis {
+	var axes []axis
+	for _, in := range s.free {
+		if in.Role == OfLayout || in.Role == OfClearance || !picks(in) {
+			continue
+		}
+		axes = append(axes, func(c *Case, high bool) {
+			if high {
+				in.Set(c, in.Band.High)
+			} else {
+				in.Set(c, in.Band.Low)
+			}
+		})
+	}
+	return axes
+}
+
+// A siting makes the axes of one position of a layout. lo and hi hold every
+// figure at its ends.
+type siting struct {
+	plan   *LayoutPlan
+	pos    *PlannedPosition
+	lo, hi Case
+	axes   []axis
+}
+
+func newSiting(j *Job) *siting {
+	g := &siting{plan: j.Point.Layout, pos: &j.Point.Layout.Positions[j.Point.Position]}
+	g.lo, g.hi = ends(j)
+	return g
+}
+
+// free reports whether the figure has two ends.
+func (g *siting) free(figure int) bool {
+	return figure != NoFigure && g.lo.Figures[figure] < g.hi.Figures[figure]
+}
+
+// together adds an axis along which the up figures rise and the down figures
+// fall; none where all have one end.
+func (g *siting) together(up, down []int) {
+	some := false
+	for _, list := range [...][]int{up, down} {
+		for _, n := range list {
+			some = some || g.free(n)
+		}
+	}
+	if !some {
+		return
+	}
+	lo, hi := &g.lo.Figures, &g.hi.Figures
+	g.axes = append(g.axes, func(c *Case, high bool) {
+		rising, falling := lo, hi
+		if high {
+			rising, falling = hi, lo
+		}
+		for _, n := range up {
+			if n != NoFigure {
+				c.Figures[n] = rising[n]
+			}
+		}
+		for _, n := range down {
+			if n != NoFigure {
+				c.Figures[n] = falling[n]
+			}
+		}
+	})
+}
+
+// geometry adds the axes that free fall, angles and swing hang on: the offset in
+// plan, the heights, the length, the travel before locking. Every figure is
+// monotone along each of them, but for those of a retractable (see kinks).
+func (g *siting) geometry() {
+	p := g.plan
+	if g.free(g.pos.Along) || g.free(g.pos.Out) || g.free(p.BehindEdge) {
+		near, far := g.offsets()
+		g.axes = append(g.axes, func(c *Case, high bool) {
+			from := &near
+			if high {
+				from = &far
+			}
+			c.Figures[g.pos.Along], c.Figures[g.pos.Out] = from.Figures[g.pos.Along], from.Figures[g.pos.Out]
+			if p.BehindEdge != NoFigure {
+				c.Figures[p.BehindEdge] = from.Figures[p.BehindEdge]
+			}
+		})
+	}
+	if p.Edge == rig.NoEdge {
+		g.together([]int{p.AnchorHeight}, []int{p.DRing}) // only their difference counts
+	} else {
+		g.together([]int{p.AnchorHeight}, nil)
+		g.together([]int{p.DRing}, nil)
+	}
+	g.together([]int{p.Length, p.Slack}, nil)
+	g.together([]int{p.Locking}, nil)
+}
+
+// room adds the axes that only a clearance or an obstacle hangs on: all items
+// and what lies below against each other, and how far bodies and boxes reach.
+// The deceleration distance may be the stopping distance.
+func (g *siting) room() {
+	p := g.plan
+	items, below := []int{p.Feet}, []int{}
+	if p.Clearance != nil {
+		for i := range p.Clearance.Items {
+			items = append(items, p.Clearance.Items[i].Figure)
+		}
+	}
+	wide, narrow := []int{p.HalfWidth}, []int{}
+	for i := range p.Obstacles {
+		o := &p.Obstacles[i]
+		below = append(below, o.Below)
+		wide = append(wide, o.AlongTo, o.OutTo, o.Height, o.StopOver)
+		narrow = append(narrow, o.AlongFrom, o.OutFrom)
+	}
+	n := len(g.axes)
+	g.together(items, below)
+	g.together(wide, narrow)
+	if p.Clearance == nil || p.Clearance.holds(rig.ItemDeceleration) || g.lo.Distance == g.hi.Distance {
+		return
+	}
+	distance := func(c *Case, high bool) {
+		c.Distance = g.lo.Distance
+		if high {
+			c.Distance = g.hi.Distance
+		}
+	}
+	if n == len(g.axes) {
+		g.axes = append(g.axes, distance)
+		return
+	}
+	first := g.axes[n]
+	g.axes[n] = func(c *Case, high bool) { first(c, high); distance(c, high) }
+}
+
+// offsets returns the points at which anchor and position are nearest to each
+// other in plan and farthest apart, in both directions.
+func (g *siting) offsets() (near, far Case) {
+	near, far = g.lo, g.lo
+	lo, hi := &g.lo.Figures, &g.hi.Figures
+	along, out := g.pos.Along, g.pos.Out
+	near.Figures[along] = min(max(0, lo[along]), hi[along])
+	far.Figures[along] = lo[along]
+	if math.Abs(hi[along]) > math.Abs(lo[along]) {
+		far.Figures[along] = hi[along]
+	}
+	if g.plan.BehindEdge == NoFigure {
+		near.Figures[out] = min(max(0, lo[out]), hi[out])
+		far.Figures[out] = lo[out]
+		if math.Abs(hi[out]) > math.Abs(lo[out]) {
+			far.Figures[out] = hi[out]
+		}
+		return near, far
+	}
+	behind := g.plan.BehindEdge
+	at := func(c *Case, y, b float64) { c.Figures[out], c.Figures[behind] = y, b }
+	switch y := max(lo[out], -hi[behind]); {
+	case y <= min(hi[out], -lo[behind]): // they can be at one place
+		at(&near, y, -y)
+	case lo[out] > -lo[behind]:
+		at(&near, lo[out], lo[behind])
+	default:
+		at(&near, hi[out], hi[behind])
+	}
+	// Behind the edge a worker goes over it at the edge line itself.
+	apart := func(y, b float64) float64 { return math.Abs(max(y, 0) + b) }
+	at(&far, hi[out], hi[behind])
+	if apart(lo[out], lo[behind]) > apart(hi[out], hi[behind]) {
+		at(&far, lo[out], lo[behind])
+	}
+	return near, far
+}
+
+// kinks calls the function with the points beside a corner at which a figure of
+// a retractable has an end between corners: its line comes to its end on the way
+// from the nearest to the farthest offset, where the free fall is greatest; or
+// anchor and D-ring are at one height.
+func (g *siting) kinks(corner *Case, yield func(*Case)) {
+	p := g.plan
+	if p.Locking == NoFigure {
+		return
+	}
+	lo, hi := &g.lo.Figures, &g.hi.Figures
+	level := *corner
+	z := min(max(lo[p.DRing], lo[p.AnchorHeight]), hi[p.AnchorHeight])
+	level.Figures[p.AnchorHeight], level.Figures[p.DRing] = z, min(max(z, lo[p.DRing]), hi[p.DRing])
+	if level != *corner {
+		yield(&level)
+	}
+	near, far := g.offsets()
+	from := func(t float64) Case {
+		c := *corner
+		for _, n := range [...]int{g.pos.Along, g.pos.Out, p.BehindEdge} {
+			if n != NoFigure {
+				c.Figures[n] = near.Figures[n] + t*(far.Figures[n]-near.Figures[n])
+			}
+		}
+		return c
+	}
+	var l rig.Layout
+	left := func(t float64) float64 {
+		c := from(t)
+		p.fill(&c, &l)
+		place := l.At(c.Position)
+		return l.Length - l.Locking - place.Distance
+	}
+	if !(left(0) > 0 && left(1) < 0) {
+		return
+	}
+	a, b := 0.0, 1.0
+	for range 60 {
+		if m := (a + b) / 2; left(m) > 0 {
+			a = m
+		} else {
+			b = m
+		}
+	}
+	c := from(b)
+	yield(&c)
+}
