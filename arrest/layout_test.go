@@ -242,6 +242,29 @@ func TestClearanceOfALayout(t *testing.T) {
 	}
 }
 
+// The two datums are apart by what the D-ring to the feet has more, hanging, than
+// the D-ring is high, standing: by hand for one layout, and nothing where the
+// bands of both meet.
+func TestDatumsApart(t *testing.T) {
+	for feet, want := range map[string]float64{"1.8 m": 0.3, "1.7 m ± 0.1 m": 0.1, "1.4 m .. 1.7 m": 0, "1.2 m": -0.3} {
+		tl := overhead("0 m")
+		tl.datum, tl.feet = rig.BelowAnchor, feet
+		tl.items = map[rig.Item]string{rig.ItemDeceleration: "1 m", rig.ItemLineStretch: "0 m", rig.ItemHarness: "0 m", rig.ItemAnchor: "0 m", rig.ItemMargin: "0 m"}
+		j := laidOutJob(t, tl)
+		res := Evaluate(j)
+		ev, _ := begin(j)
+		if got := ev.datumsApart(j.Point.Layout); math.Abs(got-want) > 1e-12 {
+			t.Errorf("%s: %g, want %g", feet, got, want)
+		}
+		if tells(&res, LayoutDatumsApart) != (want != 0) {
+			t.Errorf("%s: told %v", feet, want == 0)
+		}
+		if room := res.Layout.Tightest.Run.Given; feet == "1.8 m" && math.Abs(room.Clearance.Apart(3)-want) > 1e-12 {
+			t.Errorf("%s: the sums lie %g apart", feet, room.Clearance.Apart(3))
+		}
+	}
+}
+
 // The allowance is taken on the travel of the path and on nothing that was
 // measured with a tape.
 func TestAllowanceOnTheTravelAlone(t *testing.T) {

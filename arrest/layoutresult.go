@@ -397,11 +397,25 @@ func (ev *evaluation) warnSums(plan *LayoutPlan) {
 		if sum.Missing != 0 {
 			ev.tell(LayoutItemsMissing, Text(string(x.evidence)), Text(itemNames(sum.Missing)), Figure(quantity.Length, sum.Present, quantity.Down))
 		}
-		apart := x.room.Clearance.Apart(t.Run.Layout.Anchor.Z)
-		if math.Abs(apart) > datumSlack {
+		if apart := ev.datumsApart(plan); math.Abs(apart) > datumSlack && !math.IsNaN(x.room.Clearance.Apart(t.Run.Layout.Anchor.Z)) {
 			ev.tell(LayoutDatumsApart, Text(string(x.evidence)), length(apart))
 		}
 	}
+}
+
+// datumsApart is the least, m, by which the room below the anchor and that
+// below the feet come out otherwise anywhere in the entries: what lies between
+// the D-ring to the feet, hanging, and the height of the D-ring, standing (see
+// rig.Clearance.Apart).
+func (ev *evaluation) datumsApart(plan *LayoutPlan) float64 {
+	if plan.Feet == NoFigure {
+		return 0
+	}
+	lo, hi := &ev.lo.Figures, &ev.hi.Figures
+	if longer := lo[plan.Feet] - hi[plan.DRing]; longer > 0 {
+		return longer
+	}
+	return min(0, hi[plan.Feet]-lo[plan.DRing])
 }
 
 // datumSlack is how far, m, the sums from both datums may differ before it is

@@ -30,9 +30,9 @@ var bases = []struct {
 
 // A connection is the [[connector]] parts while they are read.
 type connection struct {
-	plan    arrest.PathPlan
-	names   []string // of the parts, in order
-	figures int      // how many have been put into Case.Figures
+	plan  arrest.PathPlan
+	names []string // of the parts, in order
+	list  []*table // the sections, in order
 }
 
 // connectors reads the parts of the path, from the anchor to the body.
@@ -47,7 +47,7 @@ func (in *inputs) connectors(t *table) {
 		in.refused = true
 		return
 	}
-	in.path = &connection{}
+	in.path = &connection{list: list}
 	in.path.called(list)
 	for i, s := range list {
 		in.path.plan.Parts = append(in.path.plan.Parts, in.part(s, in.path.names[i]))
@@ -141,22 +141,7 @@ type partReader struct {
 // in Case.Figures, arrest.NoFigure where there is none.
 func (r *partReader) figure(name string) (int, entry) {
 	e := r.sourced(r.t.quantity(name))
-	p := r.in.path
-	if !e.given {
-		r.in.refused = r.in.refused || e.key != nil
-		return arrest.NoFigure, e
-	}
-	n := p.figures
-	p.figures++
-	if n == arrest.MaxPathFigures {
-		r.t.fault(name, e.band.Text, fmt.Sprintf("this is the %dth figure of the path; %d can be calculated with", n+1, n),
-			"take out: figures of parts that give way least, or the length beside a stiffness")
-	}
-	if n >= arrest.MaxPathFigures {
-		return arrest.NoFigure, e
-	}
-	r.in.add(r.t.key(name), arrest.OfPart, e, func(c *arrest.Case, x float64) { c.Figures[n] = x })
-	return n, e
+	return r.in.figure(r.t, name, arrest.OfPart, e), e
 }
 
 // sourced gives a figure without a source or note of its own that of the part.
@@ -214,9 +199,10 @@ func (r *partReader) activated() {
 	}
 }
 
-// locking refuses a travel before locking that the free fall has no room for.
+// locking refuses a travel before locking that the free fall as entered has no
+// room for. A free fall that comes from a layout has it in itself.
 func (r *partReader) locking(e entry) {
-	if !e.given || e.band.High <= 0 {
+	if !e.given || e.band.High <= 0 || r.in.sited {
 		return
 	}
 	free := r.in.entered("fall.free_fall")

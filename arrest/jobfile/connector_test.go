@@ -77,7 +77,7 @@ func TestPlanOfEveryPart(t *testing.T) {
 	if diff := cmp.Diff(want, j.Point.Path.Parts); diff != "" {
 		t.Error(diff)
 	}
-	figures := [arrest.MaxPathFigures]float64{900e3, 12, 1600e3, 3500, 0.3, 4200, 0.8, 0.4, 1.8, 60e3, 4000, 1.07, 2000, 0.08, 4500, 0.5, 5500, 0.6, 8600, 100e3}
+	figures := [arrest.MaxFigures]float64{900e3, 12, 1600e3, 3500, 0.3, 4200, 0.8, 0.4, 1.8, 60e3, 4000, 1.07, 2000, 0.08, 4500, 0.5, 5500, 0.6, 8600, 100e3}
 	for i, x := range figures {
 		near(t, fmt.Sprintf("figure %d", i), j.Point.Figures[i], x, 1e-15)
 	}
@@ -175,8 +175,8 @@ func TestBoundsOfPaths(t *testing.T) {
 		name, parts string
 		read        bool
 	}{
-		{"24 figures", repeat(`part = "rope", length = "2 m", modulus = "22 kN"`, 12), true},
-		{"25 figures", repeat(`part = "rope", length = "2 m", modulus = "22 kN"`, 12) + `; part = "anchor", stiffness = "900 kN/m"`, false},
+		{"48 figures", repeat(`part = "rope", length = "2 m", modulus = "22 kN"`, 24), true},
+		{"49 figures", repeat(`part = "rope", length = "2 m", modulus = "22 kN"`, 24) + `; part = "anchor", stiffness = "900 kN/m"`, false},
 		{"16 bands", repeat(`part = "anchor", stiffness = "900 kN/m ± 1 %"`, 16), true},
 		{"17 bands", repeat(`part = "anchor", stiffness = "900 kN/m ± 1 %"`, 17), false},
 		{"bands without width are none", repeat(`part = "anchor", stiffness = "900 kN/m ± 0"`, 17), true},

@@ -1,6 +1,7 @@
 package jobfile
 
 import (
+	"fmt"
 	"slices"
 	"sync"
 
@@ -16,7 +17,12 @@ type inputs struct {
 	notes   []arrest.Warning
 	persons float64
 	path    *connection // nil where there is no connector
+	layout  *siting     // nil where there is no layout, or none that is read
+	sited   bool        // a layout is written
 	refused bool        // a figure that is written, or that has to be, was not read
+
+	position int             // number of the position that is read, 0 outside of them
+	figures  []quantity.Band // of the path and the layout, in the order of Case.Figures
 }
 
 func setMass(c *arrest.Case, x float64)         { c.Mass = x }
@@ -34,11 +40,39 @@ func (in *inputs) add(key string, role arrest.Role, e entry, set func(*arrest.Ca
 		in.refused = in.refused || e.key != nil
 		return
 	}
-	in.inputs = append(in.inputs, arrest.Input{Key: key, Role: role, Band: e.band, Source: e.src, Note: e.note, Overridden: e.set, Set: set})
+	in.inputs = append(in.inputs, arrest.Input{Key: key, Role: role, Band: e.band, Source: e.src, Note: e.note, Overridden: e.set, Position: in.position, Set: set})
 	if set != nil {
 		set(in.point, middle(e.band))
 	}
 	in.note(key, e, role)
+}
+
+// figure puts a figure of the path or the layout on the list. It returns its
+// place in Case.Figures, arrest.NoFigure where there is none.
+func (in *inputs) figure(t *table, name string, role arrest.Role, e entry) int {
+	if !e.given {
+		in.refused = in.refused || e.key != nil
+		return arrest.NoFigure
+	}
+	n, room := in.room(t, name, e.band)
+	if !room {
+		return arrest.NoFigure
+	}
+	in.add(t.key(name), role, e, func(c *arrest.Case, x float64) { c.Figures[n] = x })
+	return n
+}
+
+// room takes the next place in Case.Figures, and records the first figure that
+// finds none.
+func (in *inputs) room(t *table, name string, b quantity.Band) (n int, room bool) {
+	n = len(in.figures)
+	in.figures = append(in.figures, b)
+	if n == arrest.MaxFigures {
+		in.refused = true
+		t.fault(name, b.Text, fmt.Sprintf("this is the %dth figure of the path and the layout; %d can be calculated with", n+1, n),
+			"take out: figures of parts that give way least, the length beside a stiffness, or obstacles that are farthest off")
+	}
+	return n, n < arrest.MaxFigures
 }
 
 // middle returns the figure as written, the low end where a range has none.
@@ -51,7 +85,7 @@ func middle(b quantity.Band) float64 {
 
 // ofPersons are the sections whose usual figures are those of persons: what is
 // usual for a tool of any size nobody can say.
-var ofPersons = []string{"fall", "stop", "connector", "rated"}
+var ofPersons = []string{"fall", "layout", "clearance", "stop", "connector", "rated"}
 
 // note remarks on a figure outside what is usual. Masses are usual by person.
 func (in *inputs) note(key string, e entry, role arrest.Role) {

@@ -5,6 +5,7 @@ import (
 
 	"arrestcheck/arrest"
 	"arrestcheck/arrest/quantity"
+	"arrestcheck/arrest/rig"
 	"arrestcheck/limits"
 )
 
@@ -18,6 +19,8 @@ func (t *table) job(f *File) {
 	t.together()
 	e := t.entries(j)
 	e.connectors(t)
+	e.along()
+	e.clearance(t)
 	if s := t.section("model"); s != nil {
 		e.add("model.allowance", arrest.OfModel, s.quantity("allowance"), nil)
 	}
@@ -30,7 +33,10 @@ func (t *table) job(f *File) {
 			Quantity: arrest.Quantity(s.choice("quantity")), Where: s.text("where")})
 	}
 	j.Inputs, j.Notes = e.inputs, e.notes
-	t.bands(j)
+	t.bands(j, e)
+	if !e.refused {
+		e.stands()
+	}
 	if !e.refused {
 		t.impossible(j)
 	}
@@ -58,13 +64,9 @@ func (t *table) entries(j *arrest.Job) *inputs {
 	if list := t.sections("worker"); len(list) > 0 {
 		in.workers(j, list)
 	}
-	if s := t.section("fall"); s != nil {
-		in.add("fall.free_fall", arrest.OfFall, s.quantity("free_fall"), setFreeFall)
-		in.add("fall.initial_speed", arrest.OfFall, s.quantity("initial_speed"), setInitialSpeed)
-		in.refused = in.refused || !s.has("free_fall") && !s.has("initial_speed")
-	} else {
-		in.refused = true
-	}
+	in.sited = t.has("layout")
+	in.fall(t)
+	in.layouts(t)
 	if s := t.section("stop"); s != nil {
 		in.add("stop.distance", arrest.OfStop, s.quantity("distance"), setDistance)
 		in.add("stop.time", arrest.OfStop, s.quantity("time"), setTime)
@@ -74,23 +76,67 @@ func (t *table) entries(j *arrest.Job) *inputs {
 	return in
 }
 
-// mostBands is how many inputs may have two ends: every combination of their
-// ends is worked out, 65,536 of them.
-const mostBands = 16
+// fall reads the motion before the first pull. Beside a layout a free fall is
+// only compared with that of the layout.
+func (in *inputs) fall(t *table) {
+	s := t.section("fall")
+	if s == nil {
+		in.refused = in.refused || !in.sited || t.has("fall")
+		return
+	}
+	set := setFreeFall
+	if in.sited {
+		set = nil
+	}
+	in.add("fall.free_fall", arrest.OfFall, s.quantity("free_fall"), set)
+	in.add("fall.initial_speed", arrest.OfFall, s.quantity("initial_speed"), setInitialSpeed)
+	in.refused = in.refused || !s.has("free_fall") && !s.has("initial_speed")
+}
 
-// bands refuses a job with more bands than can be worked out.
-func (t *table) bands(j *arrest.Job) {
-	n := 0
+// mostBands is how many inputs may have two ends: every combination of their
+// ends is worked out, 65,536 of them. A swing on a connector path takes far
+// longer than a straight fall, so there it is mostSwinging, 4,096.
+const (
+	mostBands    = 16
+	mostSwinging = 12
+)
+
+// bands refuses a job with more bands than can be worked out. Positions are
+// worked out one after the other, so that the one with the most counts.
+func (t *table) bands(j *arrest.Job, e *inputs) {
+	most, why := mostBands, ""
+	in := wide(j, most)
+	if swinging := wide(j, mostSwinging); in == nil && swinging != nil && !e.refused && e.swings() {
+		in, most, why = swinging, mostSwinging, "of a swing on a connector path "
+	}
+	if in == nil {
+		return
+	}
+	e.refused = true
+	t.page.fault(in.Key, in.Key, in.Band.Text, fmt.Sprintf("this is the %dth figure with a band; %severy combination of the ends of %d bands is worked out, and of more it is not", most+1, why, most),
+		"write: one figure in place of a band where the band is narrowest, here or further up")
+}
+
+// wide returns the input whose band is the first beyond so many, nil where the
+// job has no more.
+func wide(j *arrest.Job, most int) *arrest.Input {
+	shared, own, worst := 0, [rig.MaxPositions + 1]int{}, 0
 	for i := range j.Inputs {
 		in := &j.Inputs[i]
-		if in.Set == nil || in.Band.Low == in.Band.High {
+		switch {
+		case in.Set == nil || in.Band.Low == in.Band.High:
 			continue
+		case in.Position == 0:
+			shared++
+		default:
+			own[in.Position]++
+			worst = max(worst, own[in.Position])
 		}
-		if n++; n == mostBands+1 {
-			t.page.fault(in.Key, in.Key, in.Band.Text, fmt.Sprintf("this is the %dth figure with a band; every combination of the ends of %d bands is worked out, and of more it is not", n, mostBands),
-				"write: one figure in place of a band where the band is narrowest, here or further up")
+		if shared+worst > most {
+			return in
 		}
 	}
+	return nil
 }
 
 func pulseOf(word string) arrest.Pulse {

@@ -112,7 +112,7 @@ func TestInputsAreListedInOrder(t *testing.T) {
 func TestSetWritesItsOwnField(t *testing.T) {
 	for _, name := range files(t, jobsFolder, 32) {
 		j := goodJob(t, name).Job
-		c := arrest.Case{Pulse: j.Point.Pulse, Path: j.Point.Path, Load: arrest.Load{Axes: j.Point.Load.Axes, Up: j.Point.Load.Up}}
+		c := arrest.Case{Pulse: j.Point.Pulse, Path: j.Point.Path, Layout: j.Point.Layout, Load: arrest.Load{Axes: j.Point.Load.Axes, Up: j.Point.Load.Up}}
 		if slices.Contains(inputKeys(&j), "moving_load.slope_down") {
 			c.Load.Up = [3]float64{}
 		}

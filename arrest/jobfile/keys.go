@@ -23,6 +23,7 @@ const (
 	Boolean                  // true or false without quotes
 	Velocity                 // a Quantity, a list of one to three of them, or a table of the keys under Polar
 	Points                   // a list of pairs of texts, extension and force: [["0 mm", "0 kN"], ["60 mm", "4 kN"]]
+	Words                    // a list of words of a closed set, each once
 )
 
 // Places says in which files a key stands.
@@ -84,9 +85,12 @@ type Key struct {
 	Kind    Kind
 
 	Required bool
+	Wanted   bool      // most files have to have it; hints and starter files show it
 	Several  bool      // of a Section: may stand several times too, as [[name]]
 	AnyOf    []string  // of a section: at least one of these keys has to be there
 	Either   []string  // exactly one of these keys has to be there; the key itself is one of them
+	Unless   string    // with this key there none of Either has to be
+	With     []string  // these keys stand together, all of them or none; the key itself is one of them
 	Not      []string  // keys that cannot stand beside it
 	Beside   Companion // what has to stand beside the key
 
@@ -99,7 +103,7 @@ type Key struct {
 	Possible   Span // of a Quantity, Velocity or Integer; outside it the figure is refused
 
 	Dated    bool      // of a Text: a date, with a year of four digits in it
-	Choices  []string  // of a Choice
+	Choices  []string  // of a Choice, or of Words
 	Variants []Variant // of a Choice that decides over other keys: one for each word, in their order
 
 	Fixed bool // nothing but the file itself says it: an Override is refused

@@ -17,15 +17,27 @@ type whole struct {
 	place   jobfile.Places
 	stopped string // "worker", "tool" or "moving_load"
 	part    string // of the one [[connector]]
+	layout  bool   // a layout stands in it, in place of the stop and of parts of the path
 	wanted  string // of keys that exclude each other this one
 }
+
+// ofLayout are the sections that stand together with the layout only.
+var ofLayout = []string{"layout", "position", "obstacle", "clearance"}
 
 var wholeJob = whole{place: jobfile.InJob, stopped: "worker", part: "absorber"}
 
 // holds reports whether a key stands in the file, and leaves out those that
 // exclude it.
 func (w whole) holds(k *jobfile.Key) bool {
+	heading := k.Section
+	if heading == "" {
+		heading = k.Name
+	}
 	switch {
+	case slices.Contains(ofLayout, heading):
+		return w.layout && !slices.Contains(w.instead(), k.Name)
+	case w.layout && slices.Contains([]string{"stop", "connector", "model"}, heading), w.layout && k.Path() == "rated.part":
+		return false
 	case k.Places&w.place == 0, k.Kind == jobfile.Files, k.Path() == "limit.at_least": // the example quantity is limited from above
 		return false
 	case k.Section == "" && w.stopped == "moving_load":
@@ -38,6 +50,19 @@ func (w whole) holds(k *jobfile.Key) bool {
 		return k.Name == w.chosen(k.Either)
 	}
 	return true
+}
+
+// instead lists the keys of a layout that the one wanted, or a plain layout,
+// leaves no room for.
+func (w whole) instead() []string {
+	out := []string{"travel_before_locking"}
+	if w.wanted == "travel_before_locking" {
+		out = []string{"slack"}
+	}
+	if strings.HasSuffix(w.wanted, "_includes") {
+		return append(out, "line_stretch", "harness_stretch")
+	}
+	return append(out, "margin_includes", "deceleration_includes")
 }
 
 // chosen is the one of several keys that the file holds.
@@ -90,6 +115,8 @@ func (w whole) pairs(section string) string {
 			value = `"rise then plateau"` // what rise_fraction asks for
 		case "connector.part":
 			value = strconv.Quote(w.part)
+		case "layout.edge":
+			value = `"round"` // what has a distance and a document
 		case "moving_load.up":
 			value = `"+x"` // the one component of the example
 		}
@@ -121,6 +148,7 @@ func wholeWith(k *jobfile.Key, place jobfile.Places) whole {
 			w.stopped = stopped
 		}
 	}
+	w.layout = slices.Contains(ofLayout, k.Section) || k.Section == "" && slices.Contains(ofLayout, k.Name)
 	if k.Section == "connector" {
 		for _, v := range record("connector.part").Variants {
 			if w.part = v.Word; w.ofPart(k.Name) {
@@ -160,8 +188,8 @@ func TestExamplesAreRead(t *testing.T) {
 			t.Errorf("with a part %s\n%v", v.Word, err)
 		}
 	}
-	if n < 100 {
-		t.Errorf("%d keys of a job, at least 100 expected", n)
+	if n < 130 {
+		t.Errorf("%d keys of a job, at least 130 expected", n)
 	}
 	limits := whole{place: jobfile.InLimits}
 	if _, err := jobfile.ReadLimits("limits", []byte(limits.text())); err != nil {
@@ -206,8 +234,8 @@ func TestEveryKeyIsLookedAt(t *testing.T) {
 			t.Errorf("%s: %v", c.name, err)
 		}
 	}
-	if n < 120 {
-		t.Errorf("%d keys, at least 120 expected", n)
+	if n < 150 {
+		t.Errorf("%d keys, at least 150 expected", n)
 	}
 }
 
@@ -256,7 +284,7 @@ func TestKeyTable(t *testing.T) {
 		if k.Example == "" && !isSection {
 			t.Errorf("%s has no example", at)
 		}
-		if (k.Kind == jobfile.Choice) != (len(k.Choices) > 0) {
+		if (k.Kind == jobfile.Choice || k.Kind == jobfile.Words) != (len(k.Choices) > 0) {
 			t.Errorf("%s: choices %v", at, k.Choices)
 		}
 		if k.Kind == jobfile.Quantity && (k.Sign == 0 || (k.Dimension == 0) != (k.Section == "limit" && k.Usual == jobfile.Span{} && k.Possible == jobfile.Span{})) {
@@ -264,6 +292,9 @@ func TestKeyTable(t *testing.T) {
 		}
 		if k.Usual != (jobfile.Span{}) && k.Kind != jobfile.Quantity && k.Kind != jobfile.Velocity {
 			t.Errorf("%s: a usual span for what is no figure", at)
+		}
+		if k.Unless != "" && len(k.Either) == 0 || len(k.With) > 0 && !slices.Contains(k.With, k.Name) {
+			t.Errorf("%s: %+v", at, k)
 		}
 		if k.MustSource && !k.Sourced || k.Several && k.Kind != jobfile.Section {
 			t.Errorf("%s: %+v", at, k)

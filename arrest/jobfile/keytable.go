@@ -21,7 +21,7 @@ const (
 // no rule of any document: the usual span catches the slip of a decimal, the
 // possible span what no fall of a person can be.
 var keyRecords = sync.OnceValue(func() []Key {
-	return slices.Concat(topKeys, documentKeys, workerKeys, toolKeys, loadKeys(), fallKeys, stopKeys,
+	return slices.Concat(topKeys, documentKeys, workerKeys, toolKeys, loadKeys(), fallKeys, layoutKeys(), clearanceKeys(), stopKeys,
 		connectorKeys(), modelKeys, ratedKeys(), limitKeys(), elsewhereKeys(), entryKeys(), polarKeys)
 })
 
@@ -102,7 +102,7 @@ var workerKeys = []Key{
 }
 
 var toolKeys = []Key{
-	{Name: "tool", Places: InJob, Kind: Section, Either: whatIsStopped,
+	{Name: "tool", Places: InJob, Kind: Section, Either: whatIsStopped, Not: []string{"layout"},
 		Help: "a tool that falls into its tether, in place of a worker"},
 	{Section: "tool", Name: "mass", Places: InJob, Kind: Quantity, Required: true, Dimension: quantity.Mass, Sourced: true, Sign: Positive,
 		Usual: Span{0.1, 40}, Possible: Span{0.001, 1000},
@@ -115,7 +115,7 @@ var howGravityActs = []string{"path", "slope_down", "up"}
 func loadKeys() []Key {
 	const in = "moving_load"
 	return []Key{
-		{Name: in, Places: InJob, Kind: Section, Either: whatIsStopped, Not: []string{"stop", "connector", "model", "rated"}, AnyOf: []string{"time", "distance"},
+		{Name: in, Places: InJob, Kind: Section, Either: whatIsStopped, Not: []string{"layout", "stop", "connector", "model", "rated"}, AnyOf: []string{"time", "distance"},
 			Help: "a load that is stopped or slowed; it stands alone, without a fall"},
 		{Section: in, Name: "mass", Places: InJob, Kind: Quantity, Required: true, Dimension: quantity.Mass, Sourced: true, Sign: Positive,
 			Usual: Span{1, 20e3}, Possible: Span{0.001, 1e7},
@@ -146,7 +146,7 @@ func loadKeys() []Key {
 }
 
 var fallKeys = []Key{
-	{Name: "fall", Places: InJob, Kind: Section, Either: []string{"fall", "moving_load"}, AnyOf: []string{"free_fall", "initial_speed"},
+	{Name: "fall", Places: InJob, Kind: Section, Either: []string{"fall", "moving_load"}, Unless: "layout", AnyOf: []string{"free_fall", "initial_speed"},
 		Help: "the motion before the system begins to pull"},
 	{Section: "fall", Name: "free_fall", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: NotNegative,
 		Usual: Span{0, 4}, Possible: Span{0, 100},
@@ -170,6 +170,132 @@ var stopKeys = []Key{
 	{Section: "stop", Name: "rise_fraction", Places: InJob, Kind: Quantity, Dimension: quantity.Ratio, Sourced: true, Sign: NotNegative,
 		Possible: Span{0, 1}, Beside: Companion{"shape", arrest.RisePlateau.String()},
 		Help: "part of the stopping time during which the force rises", Example: `"25 %"`},
+}
+
+// The words of layout.edge.
+const (
+	noEdge    = "none"
+	roundEdge = "round"
+	sharpEdge = "sharp"
+)
+
+// layoutKeys are those of the layout, its positions and what lies below. A
+// height is above the walking surface, along and out are measured as the keys
+// of a position say.
+func layoutKeys() []Key {
+	behind, rated := [][]string{{"anchor_behind_edge"}}, []string{"edge_rated_by"}
+	const in = "layout"
+	keys := []Key{
+		{Name: in, Places: InJob, Kind: Section, Beside: Companion{Name: "position"},
+			Help: "where the anchor is, how high the D-ring and how long the connector; the free fall is worked out from it"},
+		{Section: in, Name: "anchor_height", Places: InJob, Kind: Quantity, Required: true, Dimension: quantity.Length, Sourced: true, Sign: AnySign,
+			Usual: Span{-2, 15}, Possible: Span{-100, 200},
+			Help: "anchor above the walking surface, below zero where it lies below", Example: `"3.0 m"`},
+		{Section: in, Name: "edge", Places: InJob, Kind: Choice, Required: true, Fixed: true, Choices: []string{noEdge, roundEdge, sharpEdge},
+			Variants: []Variant{{noEdge, nil, nil}, {roundEdge, behind, rated}, {sharpEdge, behind, rated}},
+			Help:     "the edge that the worker falls over and the connector can come to; none where there is none between anchor and worker", Example: `"` + noEdge + `"`},
+		{Section: in, Name: "anchor_behind_edge", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: AnySign,
+			Usual: Span{-3, 15}, Possible: Span{-100, 1000},
+			Help: "in plan from the edge back to the anchor, square to the edge; below zero where the anchor is out beyond the edge", Example: `"0.4 m"`},
+		{Section: in, Name: "edge_rated_by", Places: InJob, Kind: Text, Fixed: true,
+			Help: "the document by which a part of the connector is made to run over this edge", Example: `"manual of the lanyard, section on edges"`},
+		{Section: in, Name: "d_ring_height", Places: InJob, Kind: Quantity, Required: true, Dimension: quantity.Length, Sourced: true, Sign: Positive,
+			Usual: Span{1.1, 1.7}, Possible: Span{0.1, 10},
+			Help: "D-ring above the walking surface when the fall begins", Example: `"1.5 m"`},
+		{Section: in, Name: "d_ring_to_feet", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: Positive,
+			Usual: Span{1.1, 2.1}, Possible: Span{0.1, 10},
+			Help: "from the D-ring down to the feet of the hanging body, not standing", Example: `"1.7 m"`},
+		{Section: in, Name: "half_width", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: Positive,
+			Usual: Span{0.2, 1}, Possible: Span{0.01, 10},
+			Help: "how far the body reaches to either side of the D-ring; without it every obstacle with sides counts as in the way", Example: `"0.5 m"`},
+		{Section: in, Name: "connector_length", Places: InJob, Kind: Quantity, Wanted: true, Dimension: quantity.Length, Sourced: true, Sign: Positive,
+			Usual: Span{0.3, 50}, Possible: Span{0.01, 1000},
+			Help: "from the anchor to the D-ring, taut, hooks and rings counted, of a retractable its whole line; asked for unless every [[connector]] states its length", Example: `"2.0 m"`},
+		{Section: in, Name: "slack", Places: InJob, Kind: Quantity, Wanted: true, Dimension: quantity.Length, Sourced: true, Sign: NotNegative, Not: []string{"travel_before_locking"},
+			Usual: Span{0, 1}, Possible: Span{0, 50},
+			Help: "what the connector gives before it pulls, beyond its length; asked for unless a retractable holds the worker, and may be 0 m", Example: `"0 m"`},
+		{Section: in, Name: "travel_before_locking", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: NotNegative,
+			Usual: Span{0, 1.5}, Possible: Span{0, 20},
+			Help: "line paid out before a retractable locks; with it the connector is one, unless a [[connector]] is and states its own", Example: `"0.3 m .. 0.6 m"`},
+	}
+	return slices.Concat(keys, positionKeys, obstacleKeys)
+}
+
+var positionKeys = []Key{
+	{Name: "position", Places: InJob, Kind: Sections, Beside: Companion{Name: "layout"},
+		Help: "one place where a fall may begin; of several the worst governs"},
+	{Section: "position", Name: "name", Places: InJob, Kind: Text,
+		Help: "what the place is called on the sheet; asked for where there are several", Example: `"end of the walkway"`},
+	{Section: "position", Name: "along", Places: InJob, Kind: Quantity, Required: true, Dimension: quantity.Length, Sourced: true, Sign: AnySign,
+		Usual: Span{-10, 10}, Possible: Span{-1000, 1000},
+		Help: "from the anchor along the edge, to one side above zero and to the other below; without an edge in a direction of your choice", Example: `"1.2 m"`},
+	{Section: "position", Name: "out", Places: InJob, Kind: Quantity, Required: true, Dimension: quantity.Length, Sourced: true, Sign: AnySign,
+		Usual: Span{-10, 10}, Possible: Span{-1000, 1000},
+		Help: "outwards from the edge, 0 m just outside it, below zero behind it; without an edge from the anchor, square to along", Example: `"0 m"`},
+}
+
+// The sides of an obstacle stand together.
+var sidesOfObstacle = []string{"along_from", "along_to", "out_from", "out_to"}
+
+var obstacleKeys = []Key{
+	{Name: "obstacle", Places: InJob, Kind: Sections, Beside: Companion{Name: "layout"},
+		Help: "something below or beside the fall; without sides it is a level that goes on to all sides"},
+	{Section: "obstacle", Name: "name", Places: InJob, Kind: Text, Required: true,
+		Help: "what it is called on the sheet", Example: `"concrete floor"`},
+	{Section: "obstacle", Name: "below", Places: InJob, Kind: Quantity, Required: true, Dimension: quantity.Length, Sourced: true, Sign: AnySign,
+		Usual: Span{-5, 100}, Possible: Span{-100, 10e3},
+		Help: "from the walking surface down to its top, below zero where it rises above the surface", Example: `"6.4 m"`},
+	{Section: "obstacle", Name: "moving", Places: InJob, Kind: Boolean, Fixed: true,
+		Help: "true where it can be anywhere in plan, as a vehicle can; it has no sides then", Example: `false`},
+	{Section: "obstacle", Name: "height", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: Positive,
+		Usual: Span{0.02, 30}, Possible: Span{0.001, 1000},
+		Help: "from its top down to its underside, where it has one; a level has none", Example: `"0.4 m"`},
+	sideKey("along_from", "one side of it, in the direction of along of a position", `"-1 m"`),
+	sideKey("along_to", "the other side of it, in the same direction", `"2 m"`),
+	sideKey("out_from", "one side of it, in the direction of out of a position", `"0 m"`),
+	sideKey("out_to", "the other side of it, in the same direction", `"1.5 m"`),
+	{Section: "obstacle", Name: "stop_over", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: Positive,
+		Usual: Span{0.005, 1}, Possible: Span{1e-4, 50},
+		Help: "distance over which a body that hits it comes to rest; without it nothing is said about the force of the hit", Example: `"50 mm"`},
+}
+
+func sideKey(name, help, example string) Key {
+	return Key{Section: "obstacle", Name: name, Places: InJob, Kind: Quantity, With: sidesOfObstacle, Dimension: quantity.Length, Sourced: true, Sign: AnySign,
+		Usual: Span{-50, 50}, Possible: Span{-1000, 1000}, Help: help, Example: example}
+}
+
+// The words of clearance.datum.
+const (
+	belowFeet   = "feet"
+	belowAnchor = "anchor"
+)
+
+// heldItems are the items that the figure of another can hold already.
+var heldItems = []string{"line_stretch", "harness_stretch", "anchor_give"}
+
+func clearanceKeys() []Key {
+	const in = "clearance"
+	item := func(name string, usual Span, help, example string) Key {
+		return Key{Section: in, Name: name, Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: NotNegative,
+			Usual: usual, Possible: Span{0, 50}, Help: help, Example: example}
+	}
+	includes := func(name, of, example string) Key {
+		return Key{Section: in, Name: name, Places: InJob, Kind: Words, Fixed: true, Beside: Companion{Name: of}, Choices: heldItems,
+			Help: "what the figure of " + of + " counts already: it is not counted again", Example: example}
+	}
+	return []Key{
+		{Name: in, Places: InJob, Kind: Section, Beside: Companion{Name: "layout"},
+			Help: "the room that the fall needs below, item by item; free fall, swing and connector come from the layout. An item that is left out is missing, not zero"},
+		{Section: in, Name: "datum", Places: InJob, Kind: Choice, Required: true, Choices: []string{belowFeet, belowAnchor},
+			Help: "from where the room is measured downwards: from the feet where the worker stands, or from the anchor", Example: `"` + belowFeet + `"`},
+		item("deceleration_distance", Span{0.1, 3}, "from the first pull to rest; left out where [stop] gives the distance, or where [[connector]] alone is to give it", `"1.07 m"`),
+		includes("deceleration_includes", "deceleration_distance", `["line_stretch"]`),
+		item("line_stretch", Span{0, 3}, "stretch of a lifeline or rope beside the deceleration distance", `"0.2 m"`),
+		item("harness_stretch", Span{0.2, 0.5}, "stretch of the harness and shift of the D-ring", `"0.3 m"`),
+		item("anchor_give", Span{0, 1}, "how far the anchor, or the line it is on, comes down under the pull; may be 0 m", `"0.05 m"`),
+		item("margin", Span{0.6, 1}, "room to keep beyond all that is counted", `"0.8 m"`),
+		includes("margin_includes", "margin", `["harness_stretch"]`),
+	}
 }
 
 // The words of connector.part.
@@ -252,7 +378,7 @@ func connectorKeys() []Key {
 			Help: "travel over which the force grows from the activation force to a greater deployment force", Example: `"100 mm"`},
 		{Section: in, Name: "travel_before_locking", Places: InJob, Kind: Quantity, Dimension: quantity.Length, Sourced: true, Sign: NotNegative,
 			Usual: Span{0, 1.5}, Possible: Span{0, 20},
-			Help: "line paid out before the retractable locks; it is a part of fall.free_fall", Example: `"0.3 m .. 0.6 m"`},
+			Help: "line paid out before the retractable locks; it is a part of fall.free_fall, or of the free fall that comes from [layout]", Example: `"0.3 m .. 0.6 m"`},
 		{Section: in, Name: "braking_force", Places: InJob, Kind: Quantity, Dimension: quantity.Force, Sourced: true, Sign: Positive,
 			Usual: Span{1e3, 10e3}, Possible: Span{1, 200e3},
 			Help: "force at which the brake of the retractable slips", Example: `"4 kN ± 0.5 kN"`},

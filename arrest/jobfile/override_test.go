@@ -58,6 +58,10 @@ func TestOverrides(t *testing.T) {
 		{"load-swing.toml", "moving_load.velocity_before.speed=2 m/s", "1.5 m/s ± 0.2 m/s", "moving_load.velocity_before.speed", "2 m/s"},
 		{"load-swing.toml", "moving_load.velocity_after.direction=80 deg", "90 deg", "moving_load.velocity_after.direction", "80 deg"},
 		{"load-trolley.toml", "moving_load.velocity_before=1.3 m/s", "1.1 m/s", "moving_load.velocity_before", "1.3 m/s"},
+		{"layout-two-positions.toml", "position[2].along=1.1 m", "1.3 m ± 0.1 m", "position[2].along", "1.1 m"},
+		{"layout-two-positions.toml", "obstacle[3].below=4.2 m", "3.9 m", "obstacle[3].below", "4.2 m"},
+		{"layout-two-positions.toml", "clearance.margin=0.8 m", "1 m", "clearance.margin", "0.8 m"},
+		{"layout-overhead.toml", "layout.d_ring_to_feet=1.7 m", "", "layout.d_ring_to_feet", "1.7 m"},
 		{"tool-tether.toml", "tool.mass=4 kg", "3.2 kg ± 0.1 kg", "tool.mass", "4 kg"},
 	} {
 		f, err := with(t, c.file, c.set)
@@ -199,6 +203,22 @@ func TestRefusedOverrides(t *testing.T) {
 		{"example-values.toml", "rated[1].document=label", `--set rated[1].document=label: rated[1].document is written in the file only
     write: it in the file
 `},
+		{"layout-edge-unrated.toml", "layout.edge_rated_by=manual", `--set layout.edge_rated_by=manual: layout.edge_rated_by is written in the file only
+    write: it in the file
+`},
+		{"layout-edge-unrated.toml", "layout.edge=none", `--set layout.edge=none: layout.edge is written in the file only
+    write: it in the file
+`},
+		{"layout-two-positions.toml", "obstacle[3].moving=false", `--set obstacle[3].moving=false: obstacle[3].moving is written in the file only
+    write: it in the file
+`},
+		{"layout-two-positions.toml", "clearance.margin_includes=anchor_give", `--set clearance.margin_includes=anchor_give: clearance.margin_includes is written in the file only
+    write: it in the file
+`},
+		{"layout-two-positions.toml", "clearance.harness_stretch=0.3 m", `--set clearance.harness_stretch=0.3 m: "0.3 m": it would be counted twice: clearance.margin_includes counts it already
+    take out: clearance.harness_stretch
+       or: "harness_stretch" of clearance.margin_includes
+`},
 		{"path-rope.toml", "connector[1].source=measured", `--set connector[1].source=measured: connector[1].source is written in the file only
     write: it in the file
 `},
@@ -236,6 +256,18 @@ func TestOverrideThatContradicts(t *testing.T) {
 	}
 }
 
+// A connector that an override makes too short is refused at the position.
+func TestOverrideOutOfReach(t *testing.T) {
+	_, err := with(t, "layout-overhead.toml", "layout.connector_length=1.9 m")
+	// sqrt(1.2^2 + 1.5^2) = 1.92094, below 2.0
+	if err == nil || !strings.Contains(err.Error(), `position[1]: out of reach: from the anchor to the D-ring at "lamp 14" it is 1.9209 m, and the connector reaches 1.9000 m`) {
+		t.Error(err)
+	}
+	if _, err = with(t, "layout-overhead.toml", "layout.connector_length=1.93 m"); err != nil {
+		t.Error(err)
+	}
+}
+
 // An override of a rating's figure keeps it from clearing anything: no document
 // says it any more.
 func TestOverriddenRatingIsOpen(t *testing.T) {
@@ -253,11 +285,11 @@ func TestOverriddenRatingIsOpen(t *testing.T) {
 
 // Fuzzing finds no override that gets by without a fault or a change.
 func FuzzOverride(f *testing.F) {
-	for _, s := range []string{"worker.mass=95 kg", "worker[1].mass=95 kg", "stop.shape=constant", "moving_load.velocity_before[1]=3 m/s", "connector[1].length=2 m", "gravity=9.80 m/s2", "a[b].c=", "worker.persons=2"} {
+	for _, s := range []string{"worker.mass=95 kg", "worker[1].mass=95 kg", "stop.shape=constant", "moving_load.velocity_before[1]=3 m/s", "connector[1].length=2 m", "gravity=9.80 m/s2", "a[b].c=", "worker.persons=2", "position[1].along=1 m", "layout.slack=0 m", "clearance.margin=1 m"} {
 		f.Add(s)
 	}
 	jobs := map[string][]byte{}
-	for _, name := range []string{"metric-basic.toml", "path-every-part.toml", "load-space.toml", "load-swing.toml", "three-workers.toml"} {
+	for _, name := range []string{"metric-basic.toml", "path-every-part.toml", "load-space.toml", "load-swing.toml", "three-workers.toml", "layout-two-positions.toml"} {
 		data, err := os.ReadFile(filepath.Join(jobsFolder, name))
 		if err != nil {
 			f.Fatal(err)

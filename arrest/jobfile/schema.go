@@ -135,6 +135,10 @@ func (s *schema) key(k *Key) keywords {
 		return s.points()
 	case Choice:
 		return choiceOf(k)
+	case Words:
+		list := arrayOf(choiceOf(k), 1, 0)
+		list["uniqueItems"] = true
+		return list
 	case Integer:
 		return keywords{"type": "integer", "minimum": k.Possible.Low, "maximum": k.Possible.High}
 	case Boolean:
@@ -195,7 +199,10 @@ func (s *schema) rules(g *group, heading *Key) []any {
 		same := func(names []string) bool { return slices.Equal(names, k.Either) }
 		if len(k.Either) > 0 && !slices.ContainsFunc(seen, same) {
 			seen = append(seen, k.Either)
-			rules = append(rules, keywords{"oneOf": each(k.Either)})
+			rules = append(rules, keywords{"oneOf": either(k)})
+		}
+		if others := slices.DeleteFunc(slices.Clone(k.With), func(name string) bool { return name == k.Name }); len(others) > 0 {
+			rules = append(rules, keywords{"dependentRequired": keywords{k.Name: others}})
 		}
 		if len(k.Not) > 0 {
 			rules = append(rules, keywords{"dependentSchemas": keywords{k.Name: keywords{"properties": none(k.Not)}}})
@@ -211,6 +218,15 @@ func each(names []string) []any {
 	list := make([]any, len(names))
 	for i, name := range names {
 		list[i] = keywords{"required": []string{name}}
+	}
+	return list
+}
+
+// either asks for one of the keys, and for none where another is in their place.
+func either(k *Key) []any {
+	list := each(k.Either)
+	if k.Unless != "" {
+		list = append(list, keywords{"required": []string{k.Unless}, "properties": none(k.Either)})
 	}
 	return list
 }

@@ -113,6 +113,9 @@ const (
 	components = "the table of keys does not say what goes with how many components"
 	several    = "the table of keys does not say what changes where a section stands several times"
 	otherFile  = "a schema sees one file"
+	apart      = "the table of keys does not say what goes with the keys of another section"
+	reach      = "a schema does not work out a layout"
+	besideTrue = "the table of keys does not say what stands beside true and not beside false"
 	dates      = "JSON has no dates: one without quotes arrives as a text"
 )
 
@@ -146,6 +149,37 @@ var notOfASchema = map[string]string{
 	"gravity-of-another-planet.toml":               magnitude,
 	"impossible.toml":                              compares,
 	"impossible-over-the-whole-box.toml":           compares,
+	"clearance-counted-in-both.toml":               names,
+	"clearance-counted-in-path-and-margin.toml":    apart,
+	"clearance-counted-in-the-margin.toml":         names,
+	"clearance-counted-in-the-path.toml":           apart,
+	"clearance-counted-in-the-stop.toml":           apart,
+	"clearance-counted-in-three.toml":              names,
+	"clearance-deceleration-beside-a-stop.toml":    apart,
+	"layout-bands-too-many.toml":                   counts,
+	"layout-bands-too-many-for-a-swing.toml":       counts,
+	"layout-figures-too-many.toml":                 counts,
+	"layout-inside-the-structure.toml":             reach,
+	"layout-length-below-the-parts.toml":           compares,
+	"layout-length-missing.toml":                   apart,
+	"layout-length-of-one-part-missing.toml":       apart,
+	"layout-locking-said-twice.toml":               apart,
+	"layout-not-plausible.toml":                    magnitude,
+	"layout-out-of-reach.toml":                     reach,
+	"layout-out-of-reach-beyond-the-edge.toml":     reach,
+	"layout-out-of-reach-in-feet.toml":             reach,
+	"layout-out-of-reach-over-the-bands.toml":      reach,
+	"layout-retractables-two.toml":                 several,
+	"layout-slack-beside-a-retractable-part.toml":  apart,
+	"layout-slack-missing.toml":                    apart,
+	"layout-slack-twice.toml":                      apart,
+	"obstacle-level-with-an-underside.toml":        besideTrue,
+	"obstacle-moving-with-sides.toml":              besideTrue,
+	"obstacle-name-twice.toml":                     names,
+	"obstacles-too-many.toml":                      counts,
+	"position-name-twice.toml":                     names,
+	"position-names-missing.toml":                  several,
+	"positions-too-many.toml":                      counts,
 	"limit-file-a-job.toml":                        otherFile,
 	"limit-file-absent.toml":                       otherFile,
 	"limit-file-pin-differs.toml":                  otherFile,

@@ -52,6 +52,17 @@ var starters = []starter{
 		{name: "model"}, {name: "limit"},
 		{name: "rated", off: true}, {name: "elsewhere", off: true},
 	}},
+	{"layout", "job file for one fall, worked out from where the anchor is, with the room it needs below", InJob, []shownSection{
+		{name: "document", instead: map[string]string{"purpose": `"choice of the anchor"`}},
+		{name: "worker"}, {name: "fall", off: true},
+		{name: "layout", also: []string{"d_ring_to_feet", "half_width"}}, {name: "position"}, {name: "obstacle"},
+		{name: "clearance", also: []string{"deceleration_distance", "line_stretch", "harness_stretch", "anchor_give", "margin"}},
+		{name: "limit", instead: map[string]string{
+			"id": `"room-below"`, "quantity": `"clearance_left"`, "at_least": `"0.3 m"`, "also_printed": `"1 ft"`, "applies_when": `"full body harness, nobody below"`}},
+		{name: "rated", off: true},
+		{name: "elsewhere", off: true, instead: map[string]string{
+			"quantity": `"anchor_strength_per_person"`, "where": `"anchor register, clamp 7"`}},
+	}},
 	{"limits", "limit file for one document or site", InLimits, []shownSection{{name: "limit"}}},
 }
 
@@ -186,7 +197,9 @@ func (w *starterWriter) keys(g *group, s *shownSection) {
 // beside.
 func (g *group) explained(k *Key) string {
 	help := k.Help
-	if len(k.Choices) > 1 {
+	if k.Kind == Words {
+		help += "; any of: " + strings.Join(k.Choices, ", ")
+	} else if len(k.Choices) > 1 {
 		help += "; one of: " + strings.Join(k.Choices, ", ")
 	}
 	if words := g.wordsFor(k); len(words) > 0 {
@@ -254,7 +267,8 @@ func figureOf(k *Key, right string) string {
 	return ""
 }
 
-// needed returns the keys that are written without a #: the required ones, the
+// needed returns the keys that are written without a #: those that all or most
+// files have to have, the
 // first of those of which one has to be there, what stands beside the word that
 // is shown, and the side of a limit that its quantity asks for.
 func (s *shownSection) needed(g *group, heading *Key) []string {
@@ -265,7 +279,7 @@ func (s *shownSection) needed(g *group, heading *Key) []string {
 	for _, k := range g.keys {
 		word := strings.Trim(s.right(k), `"`)
 		switch {
-		case k.Required:
+		case k.Required || k.Wanted:
 			on = append(on, k.Name)
 		case len(k.Either) > 0 && s.name != "":
 			on = append(on, k.Either[0])

@@ -38,7 +38,7 @@ func readStarter(t *testing.T, kind, text string) *jobfile.File {
 // Every starter is read as it stands, is an example, holds its schema, and has
 // at least one row, none of which is within; every row says why.
 func TestStartersAreReadAndCapped(t *testing.T) {
-	if got := jobfile.Starters(); !slices.Equal(got, []string{"fall", "moving-load", "connector-path", "limits"}) {
+	if got := jobfile.Starters(); !slices.Equal(got, []string{"fall", "moving-load", "connector-path", "layout", "limits"}) {
 		t.Fatalf("%q", got)
 	}
 	for _, kind := range jobfile.Starters() {
@@ -73,7 +73,7 @@ func TestStartersAreReadAndCapped(t *testing.T) {
 			t.Errorf("%s: %v", kind, err)
 		}
 	}
-	if _, err := jobfile.Starter("falls"); err == nil || !strings.Contains(err.Error(), `no starter "falls"; there are: fall, moving-load, connector-path, limits`) {
+	if _, err := jobfile.Starter("falls"); err == nil || !strings.Contains(err.Error(), `no starter "falls"; there are: fall, moving-load, connector-path, layout, limits`) {
 		t.Errorf("an unknown kind: %v", err)
 	}
 }
@@ -163,6 +163,17 @@ func TestStartersFollowTheTable(t *testing.T) {
 // reader says to them.
 var notAlone = map[string]string{
 	"limit.at_least":                  "is exceeded above it",
+	"limit.at_most":                   "is exceeded below it",
+	"layout.anchor_behind_edge":       `edge = "none"`,
+	"layout.edge_rated_by":            `edge = "none"`,
+	"layout.travel_before_locking":    "cannot stand beside layout.slack",
+	"obstacle.height":                 "a level has no underside",
+	"obstacle.along_from":             "stands only together",
+	"obstacle.along_to":               "stands only together",
+	"obstacle.out_from":               "stands only together",
+	"obstacle.out_to":                 "stands only together",
+	"clearance.deceleration_includes": "it would be counted twice",
+	"clearance.margin_includes":       "it would be counted twice",
 	"stop.rise_fraction":              "stands only beside",
 	"rated.travel_at_most":            "stands only beside",
 	"rated.travel_is":                 "stands only beside",
@@ -197,7 +208,7 @@ func TestStarterKeysComeAlive(t *testing.T) {
 			} else {
 				_, err = jobfile.Read(kind, []byte(text), folder)
 			}
-			if kind == "fall" && key == "rated.part" {
+			if key == "rated.part" && kind != "connector-path" {
 				key = "rated.part of a fall"
 			}
 			switch says, is := notAlone[key]; {

@@ -6,6 +6,7 @@ import (
 	"regexp"
 	"strconv"
 	"strings"
+	"sync"
 
 	"github.com/BurntSushi/toml"
 )
@@ -52,7 +53,7 @@ func (pg *page) syntaxWords(message, line string) (reason, hint string) {
 		return `in double quotes a \ begins an escape`, `write: \\ for one \, or the text in single quotes`
 	case says("cannot contain newlines"):
 		return "a quote is opened and not closed on the line", `write: ` + name + ` = "..." with both quotes`
-	case isPair && footMarks.MatchString(right):
+	case isPair && footMarks().MatchString(right):
 		return `feet and inches are written ft and in, not ' and "`, "write: " + name + " = " + strconv.Quote(spelledFeet(right))
 	case isPair && right == "":
 		return "nothing stands after the =", pg.example(name, "...") + ", or take the line out"
@@ -68,11 +69,13 @@ func (pg *page) syntaxWords(message, line string) (reason, hint string) {
 }
 
 // footMarks finds feet and inches as they are written by hand: 5'6", 6', 5'-6".
-var footMarks = regexp.MustCompile(`^["']?\s*([0-9]+)\s*'\s*-?\s*(?:([0-9]+(?:\.[0-9]+)?)\s*(?:"|'')?)?["']*\s*(?:#.*)?$`)
+var footMarks = sync.OnceValue(func() *regexp.Regexp {
+	return regexp.MustCompile(`^["']?\s*([0-9]+)\s*'\s*-?\s*(?:([0-9]+(?:\.[0-9]+)?)\s*(?:"|'')?)?["']*\s*(?:#.*)?$`)
+})
 
 // spelledFeet spells a figure that footMarks finds.
 func spelledFeet(right string) string {
-	m := footMarks.FindStringSubmatch(right)
+	m := footMarks().FindStringSubmatch(right)
 	if m[2] == "" {
 		return m[1] + " ft"
 	}

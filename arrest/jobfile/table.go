@@ -2,7 +2,6 @@ package jobfile
 
 import (
 	"fmt"
-	"regexp"
 	"slices"
 	"strconv"
 	"strings"
@@ -90,18 +89,13 @@ func (t *table) text(name string) string {
 		}
 		t.fault(name, "", "nothing is written in it: "+k.Help, hint)
 		return ""
-	case k.Dated && !year.MatchString(s):
+	case k.Dated && !holdsYear(s):
 		t.fault(name, s, "this is no date: it holds no year of four digits",
 			"take out: "+t.key(name)+", "+k.undated()+or+"write: the day, with its year, in the form of "+k.line())
 		return ""
 	}
 	return s
 }
-
-// year finds a year of four digits.
-var year = regexp.MustCompile(yearPattern)
-
-const yearPattern = `(?:^|[^0-9])[0-9]{4}(?:[^0-9]|$)`
 
 // undated says when a date is left out.
 func (k *Key) undated() string {
@@ -159,6 +153,53 @@ func listed(words []string) string {
 		width += len(w) + 4
 	}
 	return b.String()
+}
+
+// words returns the words of a list, none where it is not written. A word that
+// is refused, or stands twice, is left out.
+func (t *table) words(name string) []string {
+	v, k, ok := t.take(name)
+	if !ok {
+		return nil
+	}
+	list, isList := v.([]any)
+	switch {
+	case !isList:
+		t.wrongKind(k, v)
+		return nil
+	case len(list) == 0:
+		t.fault(name, "", "no word stands in the list", k.hint()+or+"take out "+t.key(name))
+	}
+	var words []string
+	for i, v := range list {
+		at := spot{key: element(t.key(name), i)}
+		s, isText := v.(string)
+		switch {
+		case !isText:
+			t.page.wrongKind(at, &Key{Kind: Text, Name: k.Name, Example: strconv.Quote(k.Choices[0])}, v)
+		case !slices.Contains(k.Choices, s):
+			t.unknownElement(k, at, s)
+		case slices.Contains(words, s):
+			t.page.fault(at.key, at.key, s, "the word stands twice in the list", "take out: one of the two")
+		default:
+			words = append(words, s)
+		}
+	}
+	return words
+}
+
+// unknownElement records a word of a list that is not in the closed set of its
+// key.
+func (t *table) unknownElement(k *Key, at spot, word string) {
+	hint := "write: one of " + listed(k.Choices)
+	near, ok := sameLetters(word, k.Choices)
+	if !ok {
+		near, ok = nearest(word, k.Choices)
+	}
+	if ok {
+		hint = at.write(near)
+	}
+	t.page.fault(at.key, at.key, word, "no such word here", hint)
 }
 
 // boolean returns true or false, false where nothing is written.
@@ -301,6 +342,8 @@ func (k *Key) asked() string {
 		return "text with a unit, a list of one to three of them, or a table of speed and direction"
 	case Points:
 		return "a list of pairs of extension and force"
+	case Words:
+		return "a list of words in square brackets"
 	case Integer:
 		return "a whole number without quotes"
 	case Boolean:
@@ -338,12 +381,13 @@ func (k *Key) lines() string {
 // hint returns the next action for a key that is missing or wrong.
 func (k *Key) hint() string { return "write: " + k.line() }
 
-// sectionHint returns a section with all the keys it has to have.
+// sectionHint returns a section with all the keys it has to have, or has in most
+// files.
 func (all groups) sectionHint(k *Key) string {
 	hint := k.hint()
 	g := all[k.Name]
 	for _, in := range g.keys {
-		if in.Required {
+		if in.Required || in.Wanted {
 			hint += "\n       " + in.line()
 		}
 	}

@@ -40,6 +40,9 @@ func (t *table) together() {
 		if len(k.Either) > 0 && k.Either[0] == k.Name {
 			t.either(k)
 		}
+		if len(k.With) > 0 && k.With[0] == k.Name {
+			t.with(k)
+		}
 		if t.has(k.Name) {
 			t.not(k)
 		}
@@ -63,7 +66,11 @@ func (t *table) either(k *Key) {
 		}
 	}
 	switch {
+	case len(there) == 0 && k.Unless != "" && (t.has(k.Unless) || slices.Contains(t.meant, k.Unless)):
 	case len(there) == 0:
+		if k.Unless != "" && !t.excluded(k.Unless) {
+			open = append(open, k.Unless)
+		}
 		t.noneOf(open)
 	case len(there) > 1:
 		for _, name := range there[1:] {
@@ -96,6 +103,26 @@ func (t *table) noneOf(names []string) {
 		right = append(right, t.group.named[name].line())
 	}
 	t.page.fault(t.path, t.path, "", "exactly one of these keys has to be there: "+strings.Join(names, ", "), "write: "+strings.Join(right, or))
+}
+
+// with records that some of the keys are there that stand together, and some
+// are not.
+func (t *table) with(k *Key) {
+	var there, missing, right []string
+	for _, name := range k.With {
+		switch {
+		case t.has(name):
+			there = append(there, t.key(name))
+		case !slices.Contains(t.meant, name):
+			missing = append(missing, name)
+			right = append(right, t.group.named[name].line())
+		}
+	}
+	if len(there) == 0 || len(missing) == 0 {
+		return
+	}
+	t.page.fault(there[0], there[0], "", "it stands only together with "+enumerate(missing, " and "),
+		"write: "+strings.Join(right, "\n       ")+or+"take out "+enumerate(there, " and "))
 }
 
 // not records the keys that cannot stand beside k, which is there.
@@ -152,6 +179,9 @@ func (t *table) alone(k *Key) {
 		return
 	}
 	partner, right := t.called(c.Name), c.lines()
+	if c.Kind == Section || c.Kind == Sections {
+		right = strings.TrimPrefix(t.page.groups.sectionHint(c), "write: ")
+	}
 	if k.Beside.Choice != "" {
 		right = c.Name + " = " + strconv.Quote(k.Beside.Choice)
 		partner = t.path + "." + right
@@ -171,7 +201,7 @@ func (t *table) variant(k *Key) {
 	for _, other := range t.group.keys {
 		if t.has(other.Name) && !v.takes(other.Name) && k.decides(other.Name) {
 			t.useless = append(t.useless, other.Name)
-			t.fault(other.Name, "", t.key(k.Name)+" = "+strconv.Quote(word)+" has no use for it; beside it can stand "+enumerate(v.all(), " and "),
+			t.fault(other.Name, "", t.key(k.Name)+" = "+strconv.Quote(word)+" has no use for it"+v.beside(),
 				"take out: "+t.key(other.Name)+or+"write "+k.belongs(other.Name))
 		}
 	}
@@ -216,6 +246,14 @@ func (t *table) needLines(name string) string {
 
 // takes reports whether the key may stand beside the word.
 func (v *Variant) takes(name string) bool { return slices.Contains(v.all(), name) }
+
+// beside says what can stand beside the word, nothing where no key can.
+func (v *Variant) beside() string {
+	if len(v.all()) == 0 {
+		return ""
+	}
+	return "; beside it can stand " + enumerate(v.all(), " and ")
+}
 
 // all lists the keys that may stand beside the word.
 func (v *Variant) all() []string { return append(slices.Concat(v.Needs...), v.May...) }

@@ -18,6 +18,26 @@ type exact struct {
 // whole returns n as an exact.
 func whole(n int64) exact { return exact{num: n, den: 1} }
 
+// exactOf returns f as an exact, unknown if it is not finite.
+func exactOf(f float64) exact {
+	const widest = 62 // binary places that a den has room for
+	fraction, exponent := math.Frexp(f)
+	num := int64(fraction * (1 << 53)) // whole: a float64 has 53 binary digits
+	if exponent -= 53; exponent < 0 && num != 0 {
+		even := min(bits.TrailingZeros64(uint64(num)), -exponent)
+		num, exponent = num>>even, exponent+even
+	}
+	switch {
+	case math.IsInf(f, 0) || math.IsNaN(f):
+		return exact{}
+	case num == 0:
+		return whole(0)
+	case exponent <= 0 && exponent >= -widest:
+		return exact{num: num, den: 1 << -exponent}
+	}
+	return exact{wide: new(big.Rat).SetFloat64(f)}
+}
+
 // known reports whether x is a number at all.
 func (x exact) known() bool { return x.den != 0 || x.wide != nil }
 

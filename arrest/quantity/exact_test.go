@@ -103,3 +103,25 @@ func TestExactLimits(t *testing.T) {
 		t.Errorf("the negative of -2^63 is %v", x.rat())
 	}
 }
+
+// A float64 is the fraction that math/big makes of it, of any size.
+func TestExactOfFloat(t *testing.T) {
+	check := func(t interface{ Fatalf(string, ...any) }, f float64) {
+		want := new(big.Rat).SetFloat64(f)
+		switch got := exactOf(f); {
+		case want == nil && got.known():
+			t.Fatalf("%v is %v", f, got.rat())
+		case want != nil && (got.rat().Cmp(want) != 0 || got.wide == nil && got.den <= 0 || got.float() != f):
+			t.Fatalf("%v is %v, want %v", f, got.rat(), want)
+		}
+	}
+	for _, f := range []float64{0, math.Copysign(0, -1), 1, -1, 1 << 52, 1 << 53, 1<<53 + 2, 1 << 62, 1 << 63, math.MaxFloat64,
+		math.SmallestNonzeroFloat64, 0x1p-62, 0x1p-63, 0x1.8p-62, 0x1.8p-61, math.NaN(), math.Inf(1), math.Inf(-1)} {
+		check(t, f)
+		check(t, -f)
+	}
+	rapid.Check(t, func(t *rapid.T) {
+		check(t, rapid.Float64().Draw(t, "f"))
+		check(t, rapid.Float64Range(-1e4, 1e4).Draw(t, "near"))
+	})
+}

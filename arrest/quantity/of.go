@@ -39,6 +39,22 @@ func shortest(x float64, shift int) string {
 
 // shortestExact returns the number that shortest(x, 0) writes.
 func shortestExact(x float64) exact {
-	r, _ := new(big.Rat).SetString(shortest(x, 0))
-	return exact{wide: r}
+	if x == 0 {
+		return whole(0)
+	}
+	var room [decimalRoom]byte
+	d := decimalOf(room[:0], x, -1)
+	places := len(d.digits) - d.point
+	if places < 0 || places >= len(powers) {
+		r, _ := new(big.Rat).SetString(shortest(x, 0))
+		return exact{wide: r}
+	}
+	num := int64(0) // the fewest digits that name a float64 are at most 17
+	for _, digit := range d.digits {
+		num = 10*num + int64(digit-'0')
+	}
+	if d.negative {
+		num = -num
+	}
+	return exact{num: num, den: powers[places]}
 }

@@ -2,6 +2,7 @@ package quantity
 
 import (
 	"math"
+	"math/big"
 	"testing"
 
 	"pgregory.net/rapid"
@@ -59,4 +60,19 @@ func TestSumOfWorkedOut(t *testing.T) {
 	if sum := Sum(Of(Mass, math.NaN()), Of(Mass, 0.2)); !math.IsNaN(sum.Value) {
 		t.Errorf("%s = %v", sum.Text, sum.Value)
 	}
+}
+
+// The exact figure is the decimal of the text, as math/big reads it.
+func TestExactOfShortestDecimal(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		for _, x := range []float64{rapid.Float64().Draw(t, "x"), rapid.Float64Range(-1e4, 1e4).Draw(t, "near"), float64(rapid.Int32().Draw(t, "whole"))} {
+			want, ok := new(big.Rat).SetString(shortest(x, 0))
+			if !ok {
+				t.Fatalf("%v is written %q", x, shortest(x, 0))
+			}
+			if got := shortestExact(x); got.rat().Cmp(want) != 0 || got.float() != x || got.wide == nil && got.den <= 0 {
+				t.Fatalf("%v is %v, want %v", x, got.rat(), want)
+			}
+		}
+	})
 }

@@ -1,9 +1,6 @@
 package quantity
 
-import (
-	"math/big"
-	"strings"
-)
+import "strings"
 
 // Sum returns a + b, low to low, value to value, high to high. The figures
 // are added as written and rounded once: the Sum of "300 lb" and "10 lb" is
@@ -21,7 +18,7 @@ func Sum(a, b Band) Band {
 	if d, e := a.Unit.Dimension, b.Unit.Dimension; d != e && d != 0 && e != 0 {
 		panic("quantity: Sum of a " + d.String() + " and a " + e.String())
 	}
-	sum := Band{Tolerance: max(a.Tolerance, b.Tolerance), Text: term(a) + plusSign + term(b)}
+	sum := Band{Tolerance: max(a.Tolerance, b.Tolerance), Text: terms(a, b)}
 	sum.low, sum.Low = add(a.low, a.Low, b.low, b.Low)
 	sum.value, sum.Value = add(a.value, a.Value, b.value, b.Value)
 	sum.high, sum.High = add(a.high, a.High, b.high, b.High)
@@ -51,16 +48,19 @@ func (x exact) standingFor(f float64) exact {
 	if x.known() && x.float() == f {
 		return x
 	}
-	if r := new(big.Rat).SetFloat64(f); r != nil {
-		return exact{wide: r}
-	}
-	return exact{}
+	return exactOf(f)
 }
 
-// term returns the text of b as it stands in a sum.
-func term(b Band) string {
+// terms returns the texts of a and b as they stand in a sum.
+func terms(a, b Band) string {
+	var room [128]byte
+	text := append(a.appendTerm(room[:0]), plusSign...)
+	return string(b.appendTerm(text))
+}
+
+func (b *Band) appendTerm(to []byte) []byte {
 	if b.Tolerance == Untold || strings.Contains(b.Text, plusSign) {
-		return b.Text
+		return append(to, b.Text...)
 	}
-	return "(" + b.Text + ")"
+	return append(append(append(to, '('), b.Text...), ')')
 }

@@ -100,16 +100,14 @@ func newProbe(j *arrest.Job, moved []int, columns []Column) probe {
 
 // checks is the probe that makes a single check at every point.
 type checks struct {
-	job     arrest.Job // its own copy
+	repeat  *arrest.Repeat
 	moved   []int
 	columns []Column
 	bounds  []arrest.Bound
 }
 
 func newChecks(j *arrest.Job, moved []int, columns []Column) *checks {
-	c := &checks{job: *j, moved: moved, columns: columns, bounds: make([]arrest.Bound, len(columns))}
-	c.job.Inputs = slices.Clone(j.Inputs)
-	return c
+	return &checks{repeat: arrest.NewRepeat(j), moved: moved, columns: columns, bounds: make([]arrest.Bound, len(columns))}
 }
 
 var absent = arrest.Ends{Low: math.NaN(), Value: math.NaN(), High: math.NaN(), Reach: math.NaN()}
@@ -118,17 +116,18 @@ func (c *checks) At(x []float64, to []arrest.Ends) bool {
 	for i := range to {
 		to[i] = absent
 	}
+	job := &c.repeat.Job
 	for i, k := range c.moved {
-		in := &c.job.Inputs[k]
+		in := &job.Inputs[k]
 		in.Band = arrest.Single(in, x[i])
-		in.Set(&c.job.Point, x[i])
+		in.Set(&job.Point, x[i])
 	}
-	if _, never := arrest.Impossible(&c.job); never {
+	if c.repeat.Impossible() {
 		return false
 	}
-	res := arrest.Evaluate(&c.job)
+	res := c.repeat.Evaluate()
 	for i := range c.columns {
-		if e := c.columns[i].in(&res); e != nil {
+		if e := c.columns[i].in(res); e != nil {
 			to[i] = arrest.Ends{Low: e.Low, Value: e.Value, High: e.High, Reach: e.Reach}
 			c.bounds[i] = e.Bound
 		}

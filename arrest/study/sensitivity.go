@@ -79,21 +79,38 @@ func Rank(j *arrest.Job, sets []limits.Set, row int) (*Ranking, error) {
 	if row < 0 || row >= len(a.Findings) {
 		return nil, &Refusal{ID: NoSuchRow, SI: float64(row)}
 	}
-	f := a.Findings[row]
+	return NewRanker(j, &res).Rank(&a.Findings[row])
+}
+
+// A Ranker is Rank for row after row of one job that is worked out already. It
+// is not safe for concurrent use.
+type Ranker struct {
+	job   *arrest.Job
+	res   *arrest.Result
+	trial *trial
+}
+
+// NewRanker prepares to rank the rows of a job; res is what arrest.Evaluate
+// makes of it. Both must stay as they are.
+func NewRanker(j *arrest.Job, res *arrest.Result) *Ranker {
+	return &Ranker{job: j, res: res, trial: newTrial(j, nil)}
+}
+
+// Rank says what the function Rank does of one finding of limits.Assess on the
+// result. The error is a *Refusal.
+func (n *Ranker) Rank(f *limits.Finding) (*Ranking, error) {
 	if len(f.Used) == 0 {
 		return nil, &Refusal{ID: NoBand, Quantity: f.Limit.Quantity}
 	}
-	r := &Ranking{Finding: f, Zone: ZoneOf(&f)}
+	r := &Ranking{Finding: *f, Zone: ZoneOf(f)}
 	if f.Bound != "" {
-		r.lead(&res)
+		r.lead(n.res)
 	}
-	alone := *f.Set
-	alone.Limits = []limits.Limit{*f.Limit}
-	m := measuring{job: j, trial: newTrial(j, []limits.Set{alone})}
-	for _, k := range inputsOf(&res, &f) {
+	j, m := n.job, measuring{job: n.job, trial: n.trial, finding: f}
+	for _, k := range inputsOf(n.res, f) {
 		i := Influence{Input: k, Key: j.Inputs[k].Key, Open: j.Inputs[k].Open(), Low: math.NaN(), High: math.NaN(), Spread: math.NaN()}
 		if r.Column != (Column{}) {
-			i.Low, i.High = r.spread(j, k)
+			i.Low, i.High = m.spread(r, n.res, k)
 			i.Spread = i.High - i.Low
 		}
 		i.Tolerance = m.tolerance(k)
@@ -152,13 +169,25 @@ func inputsOf(res *arrest.Result, f *limits.Finding) []int {
 	})
 }
 
-// spread returns the least and the greatest demand over the band of one input.
-func (r *Ranking) spread(j *arrest.Job, k int) (least, greatest float64) {
+// unmoved reports whether an estimate that governs a row is the same wherever
+// an input lies within its band: what a document promises while its conditions
+// hold over the whole of the entries, and what is entered.
+func unmoved(e *arrest.Estimate, k int) bool {
+	return e.Evidence == arrest.Rated && e.Method == "M-09" || e.Method == arrest.Entered && !slices.Contains(e.Uses, k)
+}
+
+// spread returns the least and the greatest demand of a row over the band of
+// one input.
+func (m *measuring) spread(r *Ranking, res *arrest.Result, k int) (least, greatest float64) {
 	const parts = 16
-	b := &j.Inputs[k].Band
-	p := newProbe(j, []int{k}, []Column{r.Column})
+	j, b := m.job, &m.job.Inputs[k].Band
 	x, to := make([]float64, 1), make([]arrest.Ends, 1)
 	l := level{widen: r.End.widened(r.Column.allowance(j))}
+	if e := &res.Estimates[r.Finding.Used[0]]; unmoved(e, k) {
+		y := l.compared(r.End.of(&arrest.Ends{Low: e.Low, Value: e.Value, High: e.High, Reach: e.Reach}))
+		return y, y
+	}
+	p := newProbe(j, []int{k}, []Column{r.Column})
 	c := curve{at: func(at float64) float64 {
 		x[0] = at
 		p.At(x, to)
@@ -195,9 +224,12 @@ func (r *Ranking) spread(j *arrest.Job, k int) (least, greatest float64) {
 
 // measuring tries tolerances of one input after the other.
 type measuring struct {
-	job   *arrest.Job
-	trial *trial
+	job     *arrest.Job
+	trial   *trial
+	finding *limits.Finding
 }
+
+func (m *measuring) zone() Zone { return m.trial.zone(m.finding.Set, m.finding.Limit) }
 
 // centre is the figure an input is measured about.
 func centre(in *arrest.Input) (x float64, written bool) {
@@ -220,11 +252,7 @@ func (m *measuring) try(k int, x, by float64) Zone {
 		low = 0
 	}
 	m.trial.suppose(k, low, x, x+by)
-	f := m.trial.assess()
-	if f == nil {
-		return Impossible
-	}
-	return ZoneOf(&f[0])
+	return m.zone()
 }
 
 // restore gives input k back what was entered.
@@ -282,10 +310,7 @@ func (m *measuring) settlesAnyway(k int, x, by float64) bool {
 func (m *measuring) atCentres(list []Influence) Zone {
 	for _, i := range list {
 		m.trial.suppose(i.Input, i.Tolerance.About, i.Tolerance.About, i.Tolerance.About)
+		defer m.restore(i.Input)
 	}
-	f := m.trial.assess()
-	if f == nil {
-		return Impossible
-	}
-	return ZoneOf(&f[0])
+	return m.zone()
 }

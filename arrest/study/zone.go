@@ -71,13 +71,16 @@ func (z Zone) decided() bool { return z == Exceeded || z == Within || z == Cappe
 // A trial is a job whose inputs are tried at figures that nobody entered,
 // counted as settled: "if it were measured so".
 type trial struct {
-	job  arrest.Job // its own copy
-	sets []limits.Set
+	repeat     *arrest.Repeat
+	job        *arrest.Job // that of repeat
+	sets       []limits.Set
+	comparison limits.Comparison
+	findings   []limits.Finding
 }
 
 func newTrial(j *arrest.Job, sets []limits.Set) *trial {
-	t := &trial{job: *j, sets: sets}
-	t.job.Inputs = slices.Clone(j.Inputs)
+	t := &trial{repeat: arrest.NewRepeat(j), sets: sets}
+	t.job = &t.repeat.Job
 	return t
 }
 
@@ -93,12 +96,27 @@ func (t *trial) suppose(k int, low, x, high float64) {
 	in.Set(&t.job.Point, x)
 }
 
-// assess compares the job as it stands; nil where it cannot happen.
+// assess compares the job as it stands with every limit; nil where it cannot
+// happen. The findings hold until the next call.
 func (t *trial) assess() []limits.Finding {
-	if _, never := arrest.Impossible(&t.job); never {
+	if t.repeat.Impossible() {
 		return nil
 	}
-	res := arrest.Evaluate(&t.job)
-	a := limits.Assess(&res, t.sets, nil)
-	return a.Findings
+	res := t.repeat.Evaluate()
+	t.findings = t.findings[:0]
+	for i := range t.sets {
+		for k := range t.sets[i].Limits {
+			t.findings = append(t.findings, t.comparison.Compare(res, &t.sets[i], &t.sets[i].Limits[k]))
+		}
+	}
+	return t.findings
+}
+
+// zone is what one limit of a set comes to for the job as it stands.
+func (t *trial) zone(set *limits.Set, l *limits.Limit) Zone {
+	if t.repeat.Impossible() {
+		return Impossible
+	}
+	f := t.comparison.Compare(t.repeat.Evaluate(), set, l)
+	return ZoneOf(&f)
 }
