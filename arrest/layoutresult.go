@@ -85,11 +85,11 @@ func (ev *evaluation) laidOut(i int, e *Estimate) {
 	}
 }
 
-// straightToo reports whether a part of the entries has the body fall and stop
-// straight down.
+// straightToo reports whether from some position the body swings for a part of
+// the entries and stops straight down for another.
 func (ev *evaluation) straightToo() bool {
 	for k := range ev.spans.layouts {
-		if ev.spans.layouts[k].straight > 0 {
+		if n := &ev.spans.layouts[k]; 0 < n.straight && n.straight < n.known {
 			return true
 		}
 	}

@@ -1,5 +1,7 @@
 package arrest
 
+import "arrestcheck/arrest/rig"
+
 // rests says which inputs an output hangs on, and to which kind of job it
 // belongs.
 type rests uint16
@@ -35,6 +37,8 @@ func (o *output) applies(c *Case) bool {
 		return c.Path != nil
 	case o.rests&ofModel != 0:
 		return c.Layout != nil && c.Path != nil
+	case o.quantity == RestraintReach:
+		return c.Layout != nil && c.Layout.Edge != rig.NoEdge
 	case o.rests&ofLayout != 0:
 		return c.Layout != nil
 	}

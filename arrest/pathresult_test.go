@@ -6,6 +6,7 @@ import (
 	"testing"
 
 	"arrestcheck/arrest/connector"
+	"arrestcheck/arrest/quantity"
 )
 
 // Of 0.8 of a travel an allowance of 25 % makes all of it and no more: 1.25*0.8
@@ -34,6 +35,20 @@ func TestSharesOfTheLedgers(t *testing.T) {
 		}
 		if args := ev.res.Warnings[at].Args; args[0].SI != 0.005 || args[1].SI != 0.002 {
 			t.Errorf("shares %v", args)
+		}
+	}
+}
+
+// An absorber of 4 kN alone comes to a peak of 4 kN, in exact figures: a
+// document that promises as much is not contradicted, one that promises less is.
+func TestEdgeOfADocumentAgainstTheModel(t *testing.T) {
+	for promise, told := range map[string]bool{"4 kN": false, "3.999999 kN": true} {
+		peak := parse(t, quantity.Force, promise)
+		j := pathJobs(t)["absorber alone"]
+		j.Ratings = []Rating{{Document: "label", TotalMass: parse(t, quantity.Mass, "59 kg .. 140 kg"), FreeFallAtMost: parse(t, quantity.Length, "2 m"), PeakForceAtMost: &peak}}
+		res := Evaluate(j)
+		if hasWarning(&res, RatedAgainstModel) != told {
+			t.Errorf("%s: told %v", promise, !told)
 		}
 	}
 }

@@ -4,6 +4,7 @@ import (
 	"errors"
 	"os"
 	"path/filepath"
+	"slices"
 	"strings"
 	"testing"
 	"testing/fstest"
@@ -11,6 +12,7 @@ import (
 
 	"arrestcheck/arrest"
 	"arrestcheck/arrest/jobfile"
+	"arrestcheck/arrest/rig"
 )
 
 // seed adds every file of a folder.
@@ -61,7 +63,7 @@ func FuzzRead(f *testing.F) {
 // canBeWorkedOut asserts what the mechanics ask of a job, at both ends of its
 // bands.
 func canBeWorkedOut(t *testing.T, j *arrest.Job) {
-	low, high, bands := j.Point, j.Point, 0
+	low, high, bands := j.Point, j.Point, [rig.MaxPositions + 1]int{}
 	for _, in := range j.Inputs {
 		if !(in.Band.Low <= in.Band.High) || in.Band.Unit.Symbol == "" {
 			t.Errorf("%s: %+v", in.Key, in.Band)
@@ -70,12 +72,12 @@ func canBeWorkedOut(t *testing.T, j *arrest.Job) {
 			continue
 		}
 		if in.Band.Low < in.Band.High {
-			bands++
+			bands[in.Position]++
 		}
 		in.Set(&low, in.Band.Low)
 		in.Set(&high, in.Band.High)
 	}
-	if bands > 16 {
+	if bands[0]+slices.Max(bands[1:]) > 16 {
 		t.Errorf("%d bands", bands)
 	}
 	for _, c := range []arrest.Case{low, j.Point, high} {
@@ -87,6 +89,9 @@ func canBeWorkedOut(t *testing.T, j *arrest.Job) {
 		}
 		var p arrest.Point
 		arrest.At(&c, &p)
+		if c.Layout != nil && (p.Layout == nil || p.Layout.Place.Status == rig.Incomplete || p.Layout.Place.Status == rig.SlackTwice) {
+			t.Errorf("the layout is not known: %+v\n%v", c.Layout, c.Figures)
+		}
 		if c.Path != nil && p.Model.Failed != nil {
 			t.Errorf("the path fails: %v\n%+v\n%v", p.Model.Failed, c.Path.Parts, c.Figures)
 		}

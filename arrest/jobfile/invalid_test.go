@@ -22,7 +22,7 @@ const invalidFolder = "../../testdata/invalid"
 //
 // and read the differences.
 func TestInvalidJobs(t *testing.T) {
-	for _, name := range files(t, invalidFolder, 220) {
+	for _, name := range files(t, invalidFolder, 290) {
 		t.Run(name, func(t *testing.T) {
 			data, err := os.ReadFile(filepath.Join(invalidFolder, name))
 			if err != nil {

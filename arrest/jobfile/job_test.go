@@ -110,7 +110,7 @@ func TestInputsAreListedInOrder(t *testing.T) {
 // Setting every input to its own written figure changes nothing: each Set
 // writes the field that the key means.
 func TestSetWritesItsOwnField(t *testing.T) {
-	for _, name := range files(t, jobsFolder, 32) {
+	for _, name := range files(t, jobsFolder, 47) {
 		j := goodJob(t, name).Job
 		c := arrest.Case{Pulse: j.Point.Pulse, Path: j.Point.Path, Layout: j.Point.Layout, Load: arrest.Load{Axes: j.Point.Load.Axes, Up: j.Point.Load.Up}}
 		if slices.Contains(inputKeys(&j), "moving_load.slope_down") {

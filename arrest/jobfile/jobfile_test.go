@@ -35,7 +35,7 @@ func files(t testing.TB, folder string, atLeast int) []string {
 }
 
 func TestGoodJobsAreRead(t *testing.T) {
-	for _, name := range files(t, jobsFolder, 32) {
+	for _, name := range files(t, jobsFolder, 47) {
 		data, err := os.ReadFile(filepath.Join(jobsFolder, name))
 		if err != nil {
 			t.Fatal(err)

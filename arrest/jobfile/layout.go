@@ -6,6 +6,7 @@ import (
 	"strconv"
 
 	"arrestcheck/arrest"
+	"arrestcheck/arrest/connector"
 	"arrestcheck/arrest/quantity"
 	"arrestcheck/arrest/rig"
 )
@@ -171,6 +172,8 @@ func (in *inputs) lockingOf() {
 	l, s := in.layout, in.layout.table
 	part := in.retractable()
 	switch {
+	case part != nil && s.has("travel_before_locking") && !part.has("travel_before_locking"):
+		in.refused = true // the part asks for it
 	case part != nil && s.has("travel_before_locking"):
 		in.refused = true
 		s.fault("travel_before_locking", "", part.key("travel_before_locking")+" says it already", "take out: "+s.key("travel_before_locking"))
@@ -192,9 +195,8 @@ func (t *table) neither(names ...string) {
 	}
 }
 
-// retractable returns the part of the path that states a travel before locking,
-// and sets that of the layout by it; nil where no part does. More than one is
-// refused.
+// retractable returns the part of the path that is one, and takes its travel
+// before locking for the layout; nil where no part is. More than one is refused.
 func (in *inputs) retractable() *table {
 	if in.path == nil {
 		return nil
@@ -202,7 +204,7 @@ func (in *inputs) retractable() *table {
 	var part *table
 	for i := range in.path.plan.Parts {
 		s := in.path.list[i]
-		if !s.has("travel_before_locking") {
+		if in.path.plan.Parts[i].Kind != connector.Retractable {
 			continue
 		}
 		if part != nil {
@@ -211,6 +213,7 @@ func (in *inputs) retractable() *table {
 			continue
 		}
 		part, in.layout.plan.Locking = s, in.path.plan.Parts[i].Locking
+		in.refused = in.refused || in.layout.plan.Locking == arrest.NoFigure
 	}
 	return part
 }
@@ -268,7 +271,8 @@ func (in *inputs) lengths() partLengths {
 	for i := range in.path.plan.Parts {
 		s, n := in.path.list[i], in.path.plan.Parts[i].Length
 		if n == arrest.NoFigure {
-			p.all = p.all && (s.has("length") || slices.Contains(s.meant, "length"))
+			stated := s.has("length") || slices.Contains(s.meant, "length")
+			p.all, in.refused = p.all && stated, in.refused || stated
 			continue
 		}
 		b := in.figures[n]

@@ -2,6 +2,7 @@ package study
 
 import (
 	"errors"
+	"fmt"
 	"math"
 	"math/rand/v2"
 	"slices"
@@ -253,5 +254,67 @@ func TestRankRefuses(t *testing.T) {
 	_, err := Rank(j, sets, 0)
 	if r := (&Refusal{}); !errors.As(err, &r) || r.ID != NoMotion {
 		t.Errorf("%v", err)
+	}
+}
+
+// Row after row by one Ranker is each row by itself: what was tried for one
+// leaves no trace in the next.
+func TestRankerIsRank(t *testing.T) {
+	r := rand.New(rand.NewPCG(53, 54))
+	peak := band(t, quantity.Force, "6 kN")
+	most := band(t, quantity.Mass, "104 kg")
+	for range 8 {
+		j := randomBands(t, r)
+		j.Inputs[r.IntN(2)].Source = arrest.FromAssumed
+		j.Ratings = []arrest.Rating{{Document: "label", TotalMass: band(t, quantity.Mass, "59 kg .. 140 kg"),
+			FreeFallAtMost: band(t, quantity.Length, "1.85 m"), PeakForceAtMost: &peak}}
+		conditional := rule(t, "weight", arrest.ForceOverWeight, "900 %")
+		conditional.TotalMassAtMost = &most
+		sets := []limits.Set{{Limits: []limits.Limit{rule(t, "mean", arrest.MeanForceOverDistance, "3 kN"), rule(t, "peak", arrest.PeakForce, "6.5 kN"), conditional}},
+			{Limits: []limits.Limit{rule(t, "mass", arrest.TotalMass, "100 kg"), rule(t, "speed", arrest.FallSpeed, "6 m/s")}}}
+		res := arrest.Evaluate(j)
+		a := limits.Assess(&res, sets, nil)
+		n := NewRanker(j, &res)
+		for row := range a.Findings {
+			got, gotErr := n.Rank(&a.Findings[row])
+			want, wantErr := Rank(j, sets, row)
+			if gotErr != nil || wantErr != nil {
+				t.Fatal(gotErr, wantErr)
+			}
+			// %v writes every digit, and NaN as NaN.
+			if a, b := fmt.Sprint(got.Influences, got.Zone, got.Column, got.End, got.AtCentres), fmt.Sprint(want.Influences, want.Zone, want.Column, want.End, want.AtCentres); a != b {
+				t.Errorf("row %d:\n%s\nwant\n%s", row, a, b)
+			}
+		}
+	}
+}
+
+// What a document promises is the same wherever an input lies within its band:
+// said without looking, and so where one looks.
+func TestRatedFigureDoesNotMove(t *testing.T) {
+	peak := band(t, quantity.Force, "6 kN")
+	j := entries{"worker.mass": "92 kg ± 2 kg", "worker.tools": "0 kg .. 10 kg", "fall.free_fall": "1.6 m .. 1.8 m"}.job(t)
+	j.Ratings = []arrest.Rating{{Document: "label", TotalMass: band(t, quantity.Mass, "59 kg .. 104 kg"),
+		FreeFallAtMost: band(t, quantity.Length, "1.8 m"), PeakForceAtMost: &peak}}
+	rk := ranked(t, j, rule(t, "peak", arrest.PeakForce, "8 kN"))
+	if rk.Column.Evidence != arrest.Rated || len(rk.Influences) != 3 {
+		t.Fatalf("led by %+v, %d inputs", rk.Column, len(rk.Influences))
+	}
+	for _, i := range rk.Influences {
+		if i.Low != 6000 || i.High != 6000 || i.Spread != 0 {
+			t.Errorf("%s: %v to %v", i.Key, i.Low, i.High)
+		}
+		b := &j.Inputs[i.Input].Band
+		p := newProbe(j, []int{i.Input}, []Column{rk.Column})
+		to := make([]arrest.Ends, 1)
+		for n := range 11 {
+			x := b.Low + (b.High-b.Low)*float64(n)/10
+			if n == 10 {
+				x = b.High
+			}
+			if p.At([]float64{x}, to); to[0].High != 6000 {
+				t.Errorf("%s at %v: %v", i.Key, x, to[0].High)
+			}
+		}
 	}
 }
