@@ -13,10 +13,12 @@ type evaluation struct {
 	lo, hi  Case // every input at its low and at its high end
 	res     Result
 	spans   *spans
-	short   *spans             // of the path with its travels shortened by the allowance, when asked for
-	written Point              // at the figures as written, where they have middles
-	uses    [places][]int      // inputs by place
-	resting [1 << places][]int // inputs by set of places, made when first asked for
+	short   *spans        // of the path with its travels shortened by the allowance, when asked for
+	written Point         // at the figures as written, where they have middles
+	uses    [places][]int // inputs by place
+
+	madeOfParts bool               // the length of the layout is that of the parts
+	resting     [1 << places][]int // inputs by set of places, made when first asked for
 }
 
 // Evaluate works a job out over its bands: every estimate with its ends, the
@@ -56,6 +58,9 @@ func begin(j *Job) (ev *evaluation, partImpossible bool) {
 	ev = &evaluation{job: j, res: Result{Inputs: j.Inputs, Persons: j.Persons, Example: j.Example}}
 	ev.lo, ev.hi = ends(j)
 	ev.sortInputs()
+	if l := j.Point.Layout; l != nil {
+		ev.madeOfParts = j.madeOfParts(l.Length) || j.madeOfParts(l.Locking)
+	}
 	At(&j.Point, &ev.written)
 	ev.spans, partImpossible = overCorners(j)
 	ev.assumedShape()
@@ -101,6 +106,9 @@ func (ev *evaluation) restsOn(r rests) []int {
 	r &= onInputs
 	if r&onFall != 0 && ev.job.Point.Layout != nil {
 		r |= onLayout
+	}
+	if r&onLayout != 0 && ev.madeOfParts {
+		r |= onParts
 	}
 	if ev.resting[r] == nil {
 		list := make([]int, 0, len(ev.job.Inputs))

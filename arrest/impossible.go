@@ -36,18 +36,27 @@ func beyondReach(least, greatest *Case, p *Point) (limit float64, impossible boo
 // drawn, for a part of the entries or for all, and why: out of reach of the
 // connector, or with the anchor inside the structure. It returns rig.Known where
 // there is none. The distance of anchor and D-ring is greatest at a corner of the
-// bands, so that corners say it all.
+// bands, or at the edge itself, behind which the connector may only restrain.
 func LayoutFault(j *Job) (status rig.Status, position int) {
+	lo, hi := ends(j)
+	var p Point
 	for k := range j.Point.Layout.Positions {
 		at := *j
 		at.Point.Position = k
-		s := newSpans(&at)
-		var p Point
-		for n := range s.corners() {
-			c := s.corner(n)
-			At(&c, &p)
-			if st := p.Layout.Place.Status; st == rig.OutOfReach || st == rig.InStructure || st == rig.SlackTwice {
-				return st, k
+		g := newSiting(&at)
+		g.geometry(func(int) bool { return false })
+		g.lo.Position = k
+		out := g.pos.Out
+		for n := range 1 << len(g.axes) {
+			c := cornerOf(&g.lo, g.axes, n)
+			c.Path = nil
+			for _, y := range [...]float64{c.Figures[out], min(max(0, lo.Figures[out]), hi.Figures[out])} {
+				c.Figures[out] = y
+				At(&c, &p)
+				switch p.Layout.Place.Status {
+				case rig.OutOfReach, rig.InStructure, rig.SlackTwice:
+					return p.Layout.Place.Status, k
+				}
 			}
 		}
 	}

@@ -36,7 +36,7 @@ const (
 	OfDrive                     // what goes on driving a moving load: measured, drawing or plan settle
 	OfPart                      // data of a connector part: measured, label or standard settle
 	OfModel                     // the allowance for the error of the model: any source but an assumption settles
-	OfLayout                    // what a tape measure gives: measured, drawing or plan settle
+	OfLayout                    // what a tape measure gives: measured, drawing or plan settle; of the connector itself label or standard too
 	OfClearance                 // items of a clearance: all but an assumption settle, a travel to rest only measured, label or standard
 )
 
@@ -101,7 +101,7 @@ func (in *Input) settles() bool {
 	case FromMeasured:
 		return true
 	case FromLabel, FromStandard:
-		return in.Role == OfPart || in.Role == OfClearance
+		return in.Role == OfPart || in.Role == OfClearance || in.ofConnector()
 	case FromDrawing, FromPlan:
 		switch in.Role {
 		case OfWorker, OfFall, OfDrive, OfLayout:
@@ -114,6 +114,12 @@ func (in *Input) settles() bool {
 }
 
 func (in *Input) exactZero() bool { return in.Band.Low == 0 && in.Band.High == 0 }
+
+// ofConnector reports whether a figure of the layout is one of the connector
+// itself, which its label may state.
+func (in *Input) ofConnector() bool {
+	return in.Key == "layout.connector_length" || in.Key == "layout.travel_before_locking"
+}
 
 // DecelerationItem is the key of the travel to rest among the items of a
 // clearance.

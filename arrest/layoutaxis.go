@@ -91,11 +91,36 @@ func (g *siting) together(up, down []int) {
 	})
 }
 
+// madeOfParts reports whether a figure of the layout is that of parts of the
+// path, or their sum: their inputs then write it as well.
+func (j *Job) madeOfParts(figure int) bool {
+	if figure == NoFigure {
+		return false
+	}
+	for i := range j.Inputs {
+		if in := &j.Inputs[i]; in.Role == OfPart && in.Set != nil {
+			var c Case
+			in.Set(&c, 1)
+			if c.Figures[figure] != 0 {
+				return true
+			}
+		}
+	}
+	return false
+}
+
 // geometry adds the axes that free fall, angles and swing hang on: the offset in
 // plan, the heights, the length, the travel before locking. Every figure is
-// monotone along each of them, but for those of a retractable (see kinks).
-func (g *siting) geometry() {
+// monotone along each of them, but for those of a retractable (see kinks). What
+// is alone has an axis of its own among the inputs.
+func (g *siting) geometry(alone func(figure int) bool) {
 	p := g.plan
+	shared := func(figure int) int {
+		if alone(figure) {
+			return NoFigure
+		}
+		return figure
+	}
 	if g.free(g.pos.Along) || g.free(g.pos.Out) || g.free(p.BehindEdge) {
 		near, far := g.offsets()
 		g.axes = append(g.axes, func(c *Case, high bool) {
@@ -115,8 +140,8 @@ func (g *siting) geometry() {
 		g.together([]int{p.AnchorHeight}, nil)
 		g.together([]int{p.DRing}, nil)
 	}
-	g.together([]int{p.Length, p.Slack}, nil)
-	g.together([]int{p.Locking}, nil)
+	g.together([]int{shared(p.Length), p.Slack}, nil)
+	g.together([]int{shared(p.Locking)}, nil)
 }
 
 // room adds the axes that only a clearance or an obstacle hangs on: all items

@@ -242,11 +242,14 @@ func (n *pathNotes) join(o *pathNotes) {
 // path gives over both together.
 func overSite(j *Job, s *spans) (partImpossible bool) {
 	g := newSiting(j)
-	g.geometry()
+	g.geometry(func(int) bool { return false })
 	g.room()
 	s.overGeometry(g)
 	partImpossible = s.overFalls(g)
 	if j.Point.Path != nil {
+		g := newSiting(j)
+		g.geometry(j.madeOfParts)
+		g.room()
 		s.overRuns(g)
 	}
 	s.boxes(j)
@@ -320,7 +323,7 @@ func (s *spans) overGeometry(g *siting) {
 // overFalls works out what hangs on the fall at its least and greatest height,
 // with every corner of what is not of the layout.
 func (s *spans) overFalls(g *siting) (partImpossible bool) {
-	s.axes = s.alone(func(*Input) bool { return true })
+	s.axes = s.alone(func(in *Input) bool { return in.Role != OfPart })
 	heights := [...]float64{nan, nan}
 	if fall := &s.of[indexOf(FreeFall, Given)]; fall.known() {
 		low, high := s.caseAt(fall.low), s.caseAt(fall.high)

@@ -145,6 +145,64 @@ func TestScanOfAnyFunction(t *testing.T) {
 	}
 }
 
+// Where a part of the entries cannot happen the ends of a function are still
+// those of the corners. 90 kg and up to 10 kg of tools, 1.6 m to 1.8 m of fall.
+func TestScanOfAFunctionWhereAPartCannotHappen(t *testing.T) {
+	j := figures{mass: "92 kg ± 1 kg", tools: "0 kg .. 10 kg", fall: "1.6 m .. 1.8 m", distance: "0.5 m .. 2.2 m", time: "0.30 s .. 0.34 s"}.job(t)
+	if _, part := overCorners(j); !part {
+		t.Fatal("all of it can happen")
+	}
+	s, _ := NewScan(j, []int{0}, []Sought{{Of: func(c *Case, p *Point) float64 { return p.TotalMass * c.FreeFall }}, {Quantity: PeakForce, Evidence: Given}})
+	to := make([]Ends, 2)
+	if !s.At([]float64{90}, to) || to[0].Low != 90*1.6 || to[0].High != 100*1.8 || !math.IsInf(to[1].Reach, 1) {
+		t.Errorf("%+v", to)
+	}
+}
+
+// A range has no middle, wide or not, and neither has what rests on it; nor has
+// what rests on masses of which one, that At does not read, is a range.
+func TestScanOfRanges(t *testing.T) {
+	sought := []Sought{{Quantity: PeakForce, Evidence: Given}, {Quantity: FallSpeed, Evidence: Given}, {Quantity: FallEnergy, Evidence: Given}, {Quantity: TotalMass, Evidence: Given}}
+	several := figures{mass: "80 kg", fall: "1.8 m", distance: "1 m"}.job(t)
+	several.Inputs = append(several.Inputs, Input{Key: "worker[2].mass", Role: OfWorker, Band: parse(t, quantity.Mass, "80 kg .. 90 kg")})
+	for name, j := range map[string]*Job{
+		"wide":    figures{mass: "80 kg", fall: "1.6 m .. 1.8 m", distance: "1 m"}.job(t),
+		"no span": figures{mass: "80 kg", fall: "1.8 m .. 1.8 m", distance: "1 m"}.job(t),
+		"masses":  several,
+	} {
+		const distance = 3
+		s, ok := NewScan(j, []int{distance}, sought)
+		if !ok || j.Inputs[distance].Key != "stop.distance" {
+			t.Fatal(name)
+		}
+		to := make([]Ends, len(sought))
+		for _, x := range []float64{0.5, 1.25} {
+			s.At([]float64{x}, to)
+			for i := range sought {
+				same(t, moveTo(j, distance, x), sought[i], to[i])
+			}
+		}
+		if !math.IsNaN(to[0].Value) && name != "masses" || !math.IsNaN(to[2].Value) {
+			t.Errorf("%s: a middle of the peak %v, of the energy %v", name, to[0].Value, to[2].Value)
+		}
+	}
+}
+
+// The edge of the impossible is that of Impossible: with u = 1 m/s, g = 10 m/s2
+// and t = 1 s a stop is shorter than 6 m, in exact figures.
+func TestScanAtTheEdgeOfTheImpossible(t *testing.T) {
+	j := figures{mass: "100 kg", fall: "0 m", speed: "1 m/s", distance: "5 m", time: "1 s", gravity: "10 m/s2"}.job(t)
+	const distance = 4
+	s, ok := NewScan(j, []int{distance}, []Sought{{Quantity: PeakForce, Evidence: Given}})
+	if !ok || j.Inputs[distance].Key != "stop.distance" {
+		t.Fatal("not scanned")
+	}
+	to := make([]Ends, 1)
+	if !s.At([]float64{5.999}, to) || s.At([]float64{6}, to) {
+		t.Error("5.999 m can happen, 6 m cannot")
+	}
+}
+
 func TestScanRefusesWhatCornersCannotGive(t *testing.T) {
 	j := scanJob(t)
 	j.Point.Pulse = RisingRamp

@@ -107,3 +107,14 @@ func TestShapeWithoutAStop(t *testing.T) {
 		}
 	}
 }
+
+// Half a per cent off the line of a shape is not yet a contradiction. A constant
+// force stops 2 m/s in 1 s over 1 m, in exact figures.
+func TestHalfAPerCentOffAShape(t *testing.T) {
+	for distance, contradicted := range map[string]bool{"1.005 m": false, "1.00500001 m": true, "0.995 m": false, "0.99499999 m": true} {
+		res := Evaluate(figures{mass: "100 kg", fall: "0 m", speed: "2 m/s", distance: distance, time: "1 s", pulse: Constant}.job(t))
+		if hasWarning(&res, ShapeContradicted) != contradicted {
+			t.Errorf("%s: contradicted %v", distance, !contradicted)
+		}
+	}
+}

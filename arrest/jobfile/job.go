@@ -38,6 +38,9 @@ func (t *table) job(f *File) {
 		e.stands()
 	}
 	if !e.refused {
+		e.standsEverywhere(j)
+	}
+	if !e.refused {
 		t.impossible(j)
 	}
 }

@@ -20,7 +20,7 @@ func (in *inputs) stands() {
 		run := arrest.LayoutAt(&c)
 		switch run.Place.Status {
 		case rig.InStructure:
-			in.inStructure()
+			in.inStructure("")
 			return
 		case rig.OutOfReach:
 			// Behind an edge who is not reached is held back, which can be meant.
@@ -91,11 +91,12 @@ func (t *table) unitOf(b quantity.Band) quantity.Unit {
 	return quantity.Length.SI()
 }
 
-// inStructure records an anchor behind the edge and below the surface.
-func (in *inputs) inStructure() {
+// inStructure records an anchor behind the edge and below the surface, for as
+// much of the bands as is said first.
+func (in *inputs) inStructure(where string) {
 	in.refused = true
 	s := in.layout.table
-	s.fault("anchor_height", in.figures[in.layout.plan.AnchorHeight].Text, "the anchor is below the walking surface and behind the edge, inside the structure; how the connector comes out of it is not worked out",
+	s.fault("anchor_height", in.figures[in.layout.plan.AnchorHeight].Text, where+"the anchor is below the walking surface and behind the edge, inside the structure; how the connector comes out of it is not worked out",
 		"measure: anchor_height from the walking surface up, and anchor_behind_edge from the edge back"+or+"write anchor_behind_edge below zero where the anchor is out beyond the edge")
 }
 
@@ -122,4 +123,22 @@ func (in *inputs) swings() bool {
 		}
 	}
 	return false
+}
+
+// standsEverywhere refuses a layout in which for a part of the bands nobody can
+// stand: what the free fall is between there and the rest of the bands, no corner
+// of them tells.
+func (in *inputs) standsEverywhere(j *arrest.Job) {
+	if in.layout == nil {
+		return
+	}
+	switch status, i := arrest.LayoutFault(j); status {
+	case rig.OutOfReach:
+		in.refused = true
+		s := in.layout.positions[i]
+		s.page.fault(s.path, s.path, "", "for a part of the bands out of reach: there the D-ring at "+strconv.Quote(in.layout.plan.Positions[i].Name)+" is farther from the anchor than the connector reaches",
+			"measure: anchor, D-ring, position and connector again, to a tolerance with which the worker can stand there throughout")
+	case rig.InStructure:
+		in.inStructure("for a part of the bands ")
+	}
 }

@@ -12,13 +12,16 @@ import (
 	"arrestcheck/arrest/rig"
 )
 
-// reached says how a layout is read: "read", or why it is refused.
+// reached says how a layout is read: "read", "part" where it is refused for a
+// part of its bands, or why it is refused for all of them.
 func reached(t *testing.T, text string) string {
 	t.Helper()
 	_, err := jobfile.Read("job", []byte(text), nil)
 	switch {
 	case err == nil:
 		return "read"
+	case strings.Contains(err.Error(), "for a part of the bands"):
+		return "part"
 	case strings.Contains(err.Error(), "out of reach"):
 		return "reach"
 	case strings.Contains(err.Error(), "inside the structure"):
@@ -28,7 +31,7 @@ func reached(t *testing.T, text string) string {
 	return ""
 }
 
-// A layout is refused where none of its entries can be, and read where some can.
+// A layout is read where all of its entries can be, and refused else.
 func TestReach(t *testing.T) {
 	const round = "edge = \"round\"\nanchor_behind_edge = \"%s\""
 	for _, c := range []struct {
@@ -38,15 +41,15 @@ func TestReach(t *testing.T) {
 		{"read", []string{`connector_length = "1.5 m"`, `along = "0 m"`}}, // just taut
 		{"reach", []string{`connector_length = "1.4999 m"`, `along = "0 m"`}},
 		{"read", []string{`connector_length = "1.4999 m"`, `slack = "0.0001 m"`, `along = "0 m"`}},
-		{"read", []string{`connector_length = "1.4 m .. 1.5 m"`, `along = "0 m"`}},
-		{"read", []string{`connector_length = "0.1 m"`, `anchor_height = "1 m .. 2 m"`, `along = "-0.05 m .. 1 m"`}},
+		{"part", []string{`connector_length = "1.4 m .. 1.5 m"`, `along = "0 m"`}},
+		{"part", []string{`connector_length = "0.1 m"`, `anchor_height = "1 m .. 2 m"`, `along = "-0.05 m .. 1 m"`}},
 		{"reach", []string{`connector_length = "0.1 m"`, `anchor_height = "1 m .. 2 m"`, `along = "-1 m .. -0.101 m"`}},
 		{"reach", []string{`along = "0 m"`, `out = "-1.4 m .. -1.35 m"`}},
-		{"read", []string{`along = "0 m"`, `out = "-1.4 m .. -1.3 m"`}}, // sqrt(1.5^2 + 1.3^2) = 1.985
+		{"part", []string{`along = "0 m"`, `out = "-1.4 m .. -1.3 m"`}}, // sqrt(1.5^2 + 1.3^2) = 1.985
 		// Behind the edge the worker counts as at the edge, and may be restrained.
 		{"read", []string{fmt.Sprintf(round, "1.3 m"), `along = "0 m"`, `out = "-1 m"`}},
 		{"read", []string{fmt.Sprintf(round, "1.4 m"), `along = "0 m"`, `out = "-1 m"`}},
-		{"read", []string{fmt.Sprintf(round, "1.4 m"), `along = "0 m"`, `out = "-1 m .. 1 m"`}},
+		{"part", []string{fmt.Sprintf(round, "1.4 m"), `along = "0 m"`, `out = "-1 m .. 1 m"`}},
 		{"reach", []string{fmt.Sprintf(round, "1.4 m"), `along = "0 m"`, `out = "0 m"`}},
 		// An anchor beyond the edge is nearer to who is outside.
 		{"read", []string{fmt.Sprintf(round, "-2 m"), `along = "0 m"`, `out = "1 m .. 3 m"`}},
@@ -54,8 +57,8 @@ func TestReach(t *testing.T) {
 		{"reach", []string{fmt.Sprintf(round, "-2 m"), `along = "0 m"`, `out = "3.4 m .. 4 m"`}},
 		// Below the surface the anchor has to be beyond the edge.
 		{"structure", []string{fmt.Sprintf(round, "0.2 m"), `anchor_height = "-0.2 m .. -0.1 m"`, `along = "0 m"`}},
-		{"read", []string{fmt.Sprintf(round, "0.2 m"), `anchor_height = "-0.2 m .. 0 m"`, `along = "0 m"`}},
-		{"read", []string{fmt.Sprintf(round, "-0.2 m .. 0.2 m"), `anchor_height = "-0.2 m"`, `along = "0 m"`}},
+		{"part", []string{fmt.Sprintf(round, "0.2 m"), `anchor_height = "-0.2 m .. 0 m"`, `along = "0 m"`}},
+		{"part", []string{fmt.Sprintf(round, "-0.2 m .. 0.2 m"), `anchor_height = "-0.2 m"`, `along = "0 m"`}},
 		{"read", []string{fmt.Sprintf(round, "0 m"), `anchor_height = "-0.2 m"`, `along = "0 m"`}},
 	} {
 		if is := reached(t, layoutJob(c.lines...)); is != c.want {
@@ -73,17 +76,20 @@ func TestReachAgainstPointsAtRandom(t *testing.T) {
 		d := drawLayout(r)
 		is := reached(t, d.text())
 		count[is]++
-		if want := d.wanted(); is != want {
+		if want := d.wanted(); is != want && (is != "part" || want != "read") {
 			t.Errorf("%s, want %s\n%s", is, want, d.text())
 		}
+		stands := 0
 		for range 500 {
-			s := d.point(r).At(0).Status
-			if is != "read" && s != rig.OutOfReach && s != rig.InStructure {
-				t.Fatalf("%s, and a point of it is %s\n%s", is, s, d.text())
+			if s := d.point(r).At(0).Status; s != rig.OutOfReach && s != rig.InStructure {
+				stands++
 			}
 		}
+		if is == "read" && stands < 500 || is != "read" && is != "part" && stands > 0 {
+			t.Fatalf("%s, and %d of 500 points of it can be\n%s", is, stands, d.text())
+		}
 	}
-	if count["read"] < 50 || count["reach"] < 50 || count["structure"] < 5 {
+	if count["read"] < 20 || count["part"] < 50 || count["reach"] < 50 || count["structure"] < 5 {
 		t.Errorf("too few of a kind: %v", count)
 	}
 }
