@@ -168,6 +168,7 @@ var notOfASchema = map[string]string{
 	"layout-out-of-reach.toml":                     reach,
 	"layout-out-of-reach-beyond-the-edge.toml":     reach,
 	"layout-out-of-reach-in-feet.toml":             reach,
+	"layout-out-of-reach-in-part.toml":             reach,
 	"layout-out-of-reach-over-the-bands.toml":      reach,
 	"layout-retractables-two.toml":                 several,
 	"layout-slack-beside-a-retractable-part.toml":  apart,
