@@ -249,11 +249,11 @@ func TestNotesOfLayouts(t *testing.T) {
 		keys []string
 	}{
 		{layoutJob(fmt.Sprintf(clearance, "0.3 m", "0.6 m .. 1 m")), nil},
-		{layoutJob(`d_ring_height = "1.1 m .. 1.7 m"`, `anchor_height = "2.8 m"`), nil},
+		{layoutJob(`d_ring_height = "1.1 m .. 1.7 m"`, `anchor_height = "2.5 m"`), nil},
 		{layoutJob(`d_ring_height = "1.8 m"`), []string{"layout.d_ring_height"}},
 		{layoutJob(`d_ring_height = "1.0 m"`, `anchor_height = "2.5 m"`), []string{"layout.d_ring_height"}},
 		{layoutJob(fmt.Sprintf(clearance, "0 m", "0.5 m")), []string{"clearance.harness_stretch", "clearance.margin"}},
-		{layoutJob(`out = "0 m ± 11 m"`, `connector_length = "12 m"`), []string{"position[1].out"}},
+		{layoutJob(`out = "0 m ± 11 m"`, `connector_length = "14 m"`), []string{"position[1].out"}},
 	} {
 		f, err := jobfile.Read("job", []byte(c.text), nil)
 		if err != nil {
