@@ -30,7 +30,9 @@ func Evaluate(j *Job) Result {
 	ev.runs()
 	ev.layout()
 	ev.warn(partImpossible)
-	return ev.res
+	res := ev.res
+	res.worked = ev
+	return res
 }
 
 // estimate works out the estimates of a job and the contradictions between them.
@@ -48,7 +50,11 @@ func estimate(j *Job) (ev *evaluation, partImpossible bool) {
 
 // ShowWorking adds to r, the result of j, the working line by line.
 func ShowWorking(j *Job, r *Result) {
-	ev, _ := begin(j)
+	ev := r.worked
+	if ev == nil || ev.job != j {
+		ev, _ = begin(j)
+	}
+	ev.res.Working = nil
 	ev.working()
 	r.Working = ev.res.Working
 }

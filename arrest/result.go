@@ -75,6 +75,8 @@ type Result struct {
 	Layout         *LayoutResult // nil where the job has no layout
 	Persons        int
 	Example        bool
+
+	worked *evaluation // of Evaluate, for ShowWorking
 }
 
 // A LayoutResult is the layout of a job, position by position.

@@ -1,6 +1,9 @@
 package arrest
 
-import "testing"
+import (
+	"math"
+	"testing"
+)
 
 // Of equal extremes the first one found stays, so that a figure is shown at the
 // lowest corner that gives it.
@@ -66,5 +69,33 @@ func TestPointsBesideTheCorners(t *testing.T) {
 	}
 	if s.of[i].low.value != 98 || s.of[i].high.value != 102 {
 		t.Errorf("%+v", s.of[i])
+	}
+}
+
+// Where a part of the entries cannot happen the ends of the means lie on the
+// edge of what can: d = v*t + g*t^2/2, with g = 10 m/s2 the three figures 6 m,
+// 1 m/s and 1 s. The means over the distance, 1000 N + 50 J*v^2/d, and over the
+// time, 1000 N + 100 N*s*v/t, are worked out by hand from M-02 and M-03.
+func TestEndsOnTheEdgeOfWhatCanHappen(t *testing.T) {
+	for _, c := range []struct {
+		speed, distance, time string
+		overDistance          [2]float64
+		overTime              [2]float64
+		ratio                 [2]float64
+	}{
+		{"1 m/s", "5 m .. 7 m", "1 s", [2]float64{1000 + 50./6, 1010}, [2]float64{1100, 1100}, [2]float64{1. / 12, 1. / 10}},
+		{"1 m/s", "6 m", "0.8 s .. 1.25 s", [2]float64{1000 + 50./6, 1000 + 50./6}, [2]float64{1080, 1100}, [2]float64{1. / 12, 1.25 / 12}},
+		{"0.5 m/s .. 2 m/s", "6 m", "1 s", [2]float64{1000 + 50./6, 1000 + 200./6}, [2]float64{1100, 1200}, [2]float64{1. / 12, 2. / 12}},
+	} {
+		res := Evaluate(figures{mass: "100 kg", fall: "0 m", speed: c.speed, distance: c.distance, time: c.time, gravity: "10 m/s2"}.job(t))
+		for q, want := range map[Quantity][2]float64{MeanForceOverDistance: c.overDistance, MeanForceOverTime: c.overTime, ShapeRatio: c.ratio} {
+			e := find(t, &res, q, Given)
+			name := c.speed + ", " + c.distance + ", " + c.time + ": " + string(q)
+			near(t, name, e.Low, want[0], 1e-12)
+			near(t, name, e.High, want[1], 1e-12)
+		}
+		if e := find(t, &res, PeakForce, Given); !math.IsInf(e.Reach, 1) {
+			t.Errorf("%s, %s, %s: the floor reaches %g", c.speed, c.distance, c.time, e.Reach)
+		}
 	}
 }

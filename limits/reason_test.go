@@ -86,6 +86,9 @@ func TestReasonArguments(t *testing.T) {
 		{"model stands against a rating", result(bareModel(peak, 9000), ceiling(peak, 6000)), plain, Reason{ID: NoAllowance}},
 		{"exhausted", result(modelled(peak, 4000, 0.25, func(e *arrest.Estimate) { e.Exhausted = true })), plain, Reason{ID: DeviceExhausted}},
 		{"exhausted, rated governs", result(ceiling(peak, 6000), modelled(peak, 4000, 0.25, func(e *arrest.Estimate) { e.Exhausted = true })), plain, Reason{ID: DeviceExhausted}},
+		{"over an edge", result(doubtful(between(peak, 4000, 5000), func(e *arrest.Estimate) { e.Edge = true })), plain, Reason{ID: EdgeContact}},
+		{"into an obstacle", result(doubtful(between(peak, 4000, 5000), func(e *arrest.Estimate) { e.Strikes = true })), plain, Reason{ID: BodyStrikes}},
+		{"out of the plane", result(doubtful(between(peak, 4000, 5000), func(e *arrest.Estimate) { e.Unreached = true })), plain, Reason{ID: PlaceUnknown}},
 		{"beyond the curve", result(modelled(peak, 4000, 0.25, func(e *arrest.Estimate) { e.Beyond = true })), plain, Reason{ID: BeyondModel}},
 		{"the allowance reaches over", result(modelled(peak, 7000, 0.25, nil)), plain,
 			Reason{Straddles, []arrest.Arg{force(5250, quantity.Nearest), force(8750, quantity.Nearest)}}},
@@ -191,4 +194,9 @@ func TestAllowanceOfTheModel(t *testing.T) {
 	if f.Outcome != Exceeded {
 		t.Errorf("9 kN at least, whatever the model errs: %+v", f)
 	}
+}
+
+func doubtful(e arrest.Estimate, change func(*arrest.Estimate)) arrest.Estimate {
+	change(&e)
+	return e
 }

@@ -37,6 +37,9 @@ func newCompare(o *outcome, in surroundings) *cobra.Command {
 			if err := flags.conflict(); err != nil {
 				return err
 			}
+			if names[0] == "-" && names[1] == "-" {
+				return &usageError{"- stands for standard input and can be named only once", "name a job file beside it"}
+			}
 			a, usedA, errA := side(names[0], limitFiles, in)
 			b, usedB, errB := side(names[1], limitFiles, in)
 			if err := errors.Join(errA, errB, flags.check(append(usedA, usedB...))); err != nil {
@@ -111,7 +114,7 @@ func refusedArchive(name string, reasons ...string) error {
 }
 
 func sideOfResults(name string) (*archive.Results, []fs.FileInfo, error) {
-	file, err := os.Open(name)
+	file, err := openInput(name)
 	if err != nil {
 		return nil, nil, &fileError{"read", fmt.Sprintf("%q", name), err}
 	}

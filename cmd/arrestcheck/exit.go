@@ -42,7 +42,8 @@ var exitHelps = map[string]string{
 const registerExit = `Exit codes: the worst of all jobs, in the order 4, 3, 1, 2, 0
   0    of every job every limit within as entered and nothing left out
   1    of some job a limit is exceeded
-  2    otherwise: something is undecided, not compared or not entered
+  2    otherwise: something is undecided, not compared or not entered, or there
+       is no job at all
   3    a job or the command line is refused; the other jobs have their rows
   4    a file cannot be read or written, or an internal error
   130  interrupted; no file is written

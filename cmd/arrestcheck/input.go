@@ -1,11 +1,13 @@
 package main
 
 import (
+	"errors"
 	"fmt"
 	"io"
 	"io/fs"
 	"os"
 	"path/filepath"
+	"syscall"
 )
 
 // maxInput is one byte more than an input may have: the reader of the file
@@ -35,8 +37,17 @@ func readInput(name string, stdin io.Reader) (input, error) {
 	return in, nil
 }
 
+// openInput opens a file to read. Of a pipe with a name the opening alone would
+// wait, without a word, until somebody writes to it: here one that nobody writes
+// to is empty.
+func openInput(name string) (*os.File, error) {
+	return os.OpenFile(name, os.O_RDONLY|syscall.O_NONBLOCK, 0)
+}
+
+var errNobodyWrites = errors.New("it is a pipe, and nobody writes to it")
+
 func readFile(name string) (input, error) {
-	f, err := os.Open(name)
+	f, err := openInput(name)
 	if err != nil {
 		return input{}, err
 	}
@@ -46,6 +57,9 @@ func readFile(name string) (input, error) {
 		return input{}, err
 	}
 	data, err := io.ReadAll(io.LimitReader(f, maxInput))
+	if err == nil && len(data) == 0 && info.Mode()&fs.ModeNamedPipe != 0 {
+		err = errNobodyWrites
+	}
 	return input{name, data, info}, err
 }
 

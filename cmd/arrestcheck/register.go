@@ -21,8 +21,8 @@ import (
 const registerLong = `Lists many jobs, a row for each: which job it is, what its limits came to, the
 worst of them, what is open or left out, rescue, who is named as checker, and
 the digests of the job and of its results. A folder is searched with all that
-is in it for files that end in .toml; limit files in it are left out. - reads
-the names of files from standard input, one a line.
+is in it for files that end in .toml. - reads the names of files from standard
+input, one a line. Limit files in either are left out, and counted.
 
 The rows stand in the order of the names, however many workers there are. A job
 that is refused has a row with its faults, and the run goes on. --against holds
@@ -107,7 +107,7 @@ func (f *registerFlags) earlier() (*archive.Earlier, fs.FileInfo, error) {
 	if !f.flags.Changed(againstFlag) {
 		return nil, nil, nil
 	}
-	file, err := os.Open(f.against)
+	file, err := openInput(f.against)
 	if err != nil {
 		return nil, nil, &fileError{"read", fmt.Sprintf("%q", f.against), err}
 	}
@@ -137,7 +137,8 @@ type registrar struct {
 	earlier   *archive.Earlier
 	forbidden fs.FileInfo // the file that --out replaces: no job may be it
 
-	leftOut int // limit files in folders
+	jobs    int
+	leftOut int // limit files in folders and lists
 	code    exitCode
 }
 
@@ -218,10 +219,14 @@ func (r *registrar) rows(ctx context.Context, register *archive.Register) error 
 		if r.earlier != nil {
 			r.earlier.Hold(row, func(now, then int) bool { return exitCode(now).worseThan(exitCode(then)) })
 		}
+		r.jobs++
 		r.code = worst(r.code, exitCode(row.Code))
 		count()
 		return register.Add(row)
 	})
+	if r.jobs == 0 {
+		r.code = exitOtherwise // a folder named wrongly must not look like one where all is settled
+	}
 	if err != nil || r.earlier == nil {
 		return err
 	}
@@ -234,10 +239,18 @@ func (r *registrar) rows(ctx context.Context, register *archive.Register) error 
 }
 
 func (r *registrar) remarks() []string {
-	if r.leftOut == 0 {
-		return nil
+	var list []string
+	if r.jobs == 0 {
+		list = append(list, "no job was named or found: the register is empty")
 	}
-	return []string{strconv.Itoa(r.leftOut) + " limit files in the folders are no jobs and have no row"}
+	switch r.leftOut {
+	case 0:
+	case 1:
+		list = append(list, "1 limit file is no job and has no row")
+	default:
+		list = append(list, strconv.Itoa(r.leftOut)+" limit files are no jobs and have no row")
+	}
+	return list
 }
 
 // workersOf returns how many jobs are worked out at a time.

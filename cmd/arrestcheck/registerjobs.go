@@ -21,9 +21,10 @@ import (
 
 // A candidate is a file that may be a job.
 type candidate struct {
-	name  string
-	found bool  // in a folder: a limit file is then no job
-	err   error // why it cannot be looked at
+	name   string
+	found  bool  // in a folder, and a plain file there
+	listed bool  // on standard input
+	err    error // why it cannot be looked at
 }
 
 // A batch is some candidates on their way through a worker, one after the
@@ -159,7 +160,7 @@ func listed(stdin io.Reader, yield func(candidate) bool) bool {
 	scan := bufio.NewScanner(stdin)
 	scan.Buffer(make([]byte, 0, 4096), longestName)
 	for scan.Scan() {
-		if name := strings.TrimSuffix(scan.Text(), "\r"); name != "" && !yield(candidate{name: name}) {
+		if name := strings.TrimSuffix(scan.Text(), "\r"); name != "" && !yield(candidate{name: name, listed: true}) {
 			return false
 		}
 	}
@@ -224,6 +225,9 @@ func (r *registrar) row(c *candidate) (*archive.Row, error) {
 	case errors.Is(err, errIsLimits):
 		return nil, nil
 	case err != nil:
+		if len(data) >= maxInput {
+			data = nil // not all of it
+		}
 		row := archive.BrokenRow(c.name, data, err, int(codeOfError(err)), toolVersion)
 		return &row, nil
 	}
@@ -249,7 +253,8 @@ func (r *registrar) sheet(c *candidate) (*reportgen.Sheet, []byte, error) {
 	if err != nil {
 		return nil, in.data, err
 	}
-	if c.found && archive.IsLimitFile(in.data) {
+	// Folders and lists of what lies in them hold limit files beside the jobs.
+	if (c.found || c.listed) && archive.IsLimitFile(in.data) {
 		return nil, in.data, errIsLimits
 	}
 	folder := &lazyFolder{of: &in}

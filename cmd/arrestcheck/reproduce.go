@@ -11,6 +11,7 @@ import (
 	"io/fs"
 	"os"
 	"path"
+	"syscall"
 
 	"github.com/spf13/cobra"
 
@@ -48,16 +49,9 @@ func newReproduce(o *outcome, in surroundings) *cobra.Command {
 			if err := errors.Join(err, flags.check(used)); err != nil {
 				return flatten(err)
 			}
-			var b bytes.Buffer
-			for _, name := range names {
-				code, err := reproduce(&b, name, later, &flags, in)
-				if err != nil {
-					return err
-				}
-				o.code = worst(o.code, code)
-			}
-			o.deliver(flags.out(), b.Bytes())
-			return nil
+			data, err := reproduceAll(names, later, &flags, o, in)
+			o.deliver(flags.out(), data)
+			return err
 		},
 	}
 	flags.addLayout(cmd)
@@ -65,17 +59,45 @@ func newReproduce(o *outcome, in surroundings) *cobra.Command {
 	return cmd
 }
 
+// reproduceAll works archives out again, one after the other; one that cannot be
+// read does not end the run. Of several the report ends with how many came to what.
+func reproduceAll(names []string, later []limits.Set, flags *reportFlags, o *outcome, in surroundings) ([]byte, error) {
+	var b bytes.Buffer
+	var tally archive.Tally
+	for _, name := range names {
+		code, err := reproduce(&b, name, later, flags, in)
+		if err != nil {
+			return nil, err
+		}
+		switch code {
+		case exitSame:
+			tally.Same++
+		case exitDiffers:
+			tally.Differ++
+		default:
+			tally.Refused++
+		}
+		o.code = worst(o.code, code)
+	}
+	var err error
+	if len(names) > 1 && flags.format.word != "json" {
+		err = flags.write(&b, tally.Report(), in)
+	}
+	return b.Bytes(), err
+}
+
 // reproduce works one archive out again and writes what came of it.
 func reproduce(b *bytes.Buffer, name string, later []limits.Set, flags *reportFlags, in surroundings) (exitCode, error) {
 	opened, err := openArchive(name)
-	if refusal := (*archive.Refusal)(nil); errors.As(err, &refusal) {
-		if flags.format.word == "json" {
-			return exitRefused, archive.RefusedJSON(b, name, refusal)
-		}
-		return exitRefused, flags.write(b, archive.RefusedReport(name, refusal), in)
-	}
 	if err != nil {
-		return exitFile, err
+		code := exitFile
+		if refusal := (*archive.Refusal)(nil); errors.As(err, &refusal) {
+			code = exitRefused
+		}
+		if flags.format.word == "json" {
+			return code, archive.RefusedJSON(b, name, err)
+		}
+		return code, flags.write(b, archive.RefusedReport(name, err), in)
 	}
 	r := archive.Reproduce(name, opened, toolVersion, func(in *archive.Inputs) (*reportgen.Sheet, error) {
 		sheet, _, err := workOut(in)
@@ -100,7 +122,14 @@ func atLeastOne(what string) cobra.PositionalArgs {
 // openArchive reads the folder of an archive. Nothing outside it can be opened,
 // not by ".." and not by a link, and nothing is read that is too large.
 func openArchive(name string) (*archive.Opened, error) {
-	root, err := os.OpenRoot(name)
+	info, err := os.Stat(name)
+	if err == nil && !info.IsDir() {
+		err = syscall.ENOTDIR // of a pipe the opening alone would wait
+	}
+	var root *os.Root
+	if err == nil {
+		root, err = os.OpenRoot(name)
+	}
 	if err != nil {
 		return nil, &fileError{"open the folder", fmt.Sprintf("%q", name), err}
 	}

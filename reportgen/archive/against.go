@@ -38,18 +38,25 @@ type earlierRow struct {
 	seen bool
 }
 
+// byteOrderMark is what spreadsheets put before CSV in UTF-8.
+const byteOrderMark = "\xef\xbb\xbf"
+
 // mostLine is the greatest length of a line of a register that is read, in bytes.
 const mostLine = 16 << 20
 
-// ReadEarlier reads a register as JSON lines or as CSV. The error says on which
-// line it is none.
+// ReadEarlier reads a register as JSON lines or as CSV, also as a spreadsheet
+// saved it. The error says on which line it is none. A file without anything in
+// it is none: it may be what is left of one.
 func ReadEarlier(r io.Reader) (*Earlier, error) {
 	e := &Earlier{rows: make(map[string]*earlierRow)}
 	buffered := bufio.NewReader(r)
+	if mark, _ := buffered.Peek(len(byteOrderMark)); string(mark) == byteOrderMark {
+		_, _ = buffered.Discard(len(byteOrderMark))
+	}
 	first, err := buffered.Peek(1)
 	switch {
 	case errors.Is(err, io.EOF):
-		return e, nil // a register of no jobs
+		return nil, errors.New("the file is empty")
 	case err != nil:
 		return nil, err
 	case first[0] == '{':
@@ -72,7 +79,7 @@ func (e *Earlier) add(line int, row earlierRow) error {
 }
 
 // earlierKey is the name of a file as a CSV register has it.
-func earlierKey(file string) string { return reportgen.Printable(file) }
+func earlierKey(file string) string { return reportgen.Printable(fileName(file)) }
 
 func (e *Earlier) readLines(r io.Reader) error {
 	scan := bufio.NewScanner(r)
@@ -105,7 +112,7 @@ func (e *Earlier) readLines(r io.Reader) error {
 func (j *jsonRow) earlier() earlierRow {
 	r := earlierRow{open: len(j.Open), row: Row{
 		File: j.File, Code: j.Code, Counts: Counts(j.Counts), NotEntered: j.NotEntered, Results: j.Results,
-		Tool: j.Tool.Version, Model: j.Tool.Model,
+		Tool: j.Tool.Version, Model: j.Tool.Model, Rescue: j.Method,
 		Job: Job{SHA256: j.Job, Reference: j.Reference, Revision: j.Revision, Site: j.Site, Title: j.Title},
 	}}
 	if j.Change != nil {
@@ -166,7 +173,8 @@ var neededColumns = []string{
 func earlierCells(cell func(string) string) (earlierRow, error) {
 	r := earlierRow{row: Row{
 		File: cell("file"), Results: cell("results_sha256"), Tool: cell("tool"), Model: cell("model"), Change: Change(cell("change")),
-		Job: Job{SHA256: cell("job_sha256"), Reference: cell("reference"), Revision: cell("revision"), Site: cell("site"), Title: cell("title")},
+		Rescue: Rescue(cell("rescue_method")),
+		Job:    Job{SHA256: cell("job_sha256"), Reference: cell("reference"), Revision: cell("revision"), Site: cell("site"), Title: cell("title")},
 	}}
 	for name, to := range map[string]*int{
 		"code": &r.row.Code, "exceeded": &r.row.Counts.Exceeded, "undecided": &r.row.Counts.Undecided,
@@ -228,6 +236,9 @@ func (was *earlierRow) grown(row *Row, worse func(now, then int) bool) []string 
 		if c.is > c.was && was.row.Results != "" {
 			list = append(list, grew(c.what, c.is, c.was))
 		}
+	}
+	if row.Rescue == RescueNotNamed && was.row.Rescue == RescueNamed {
+		list = append(list, words.RescueLost.Say())
 	}
 	return list
 }

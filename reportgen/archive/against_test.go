@@ -49,6 +49,7 @@ func TestAgainst(t *testing.T) {
 			{"one more not compared", settled, func(r *Row) { r.Counts = Counts{NotCompared: 1, Within: 3} }, Worsened, []string{"not within 1, was 0"}},
 			{"one more open", settled, func(r *Row) { r.Open = []string{"x"} }, Worsened, []string{"open inputs 1, was 0"}},
 			{"one more left out", settled, func(r *Row) { r.NotEntered = []string{"mass"} }, Worsened, []string{"not entered 1, was 0"}},
+			{"rescue lost", settled, func(r *Row) { r.Rescue = RescueNotNamed }, Worsened, []string{"no rescue method, was named"}},
 			{"now broken", settled, func(r *Row) { *r = Row{File: r.File, Code: 3, Errors: []string{"x"}} }, Worsened, []string{"code 3, was 0"}},
 		} {
 			got, worse := hold(c.row, c.to)
@@ -87,7 +88,7 @@ func TestGone(t *testing.T) {
 		}
 	}
 	page := register(t, Text, true, Row{File: "x.toml", Change: Gone}, rows[1])
-	if !strings.Contains(page, "1 jobs:") || !strings.Contains(page, "1 gone") {
+	if !strings.Contains(page, "Jobs: 1.") || !strings.Contains(page, "1 gone") {
 		t.Error(page)
 	}
 }
@@ -105,13 +106,15 @@ func TestReadEarlierRefuses(t *testing.T) {
 		"a job twice in CSV":      {cells + strings.SplitAfter(cells, "\n")[1], "line 3: a second row"},
 		"a word for a number":     {strings.Replace(cells, ",4,", ",four,", 1), "is no number"},
 		"cells that do not match": {cells + "a,b\n", "wrong number of fields"},
+		"nothing":                 {"", "the file is empty"},
+		"a mark and nothing":      {byteOrderMark, "the file is empty"},
 	} {
 		if _, err := ReadEarlier(strings.NewReader(c.data)); err == nil || !strings.Contains(err.Error(), c.why) {
 			t.Errorf("%s: %v, want %q", name, err, c.why)
 		}
 	}
-	if e, err := ReadEarlier(strings.NewReader("")); err != nil || len(e.Gone()) != 0 {
-		t.Errorf("an empty register: %v", err)
+	if e, err := ReadEarlier(strings.NewReader(byteOrderMark + cells)); err != nil || len(e.Gone()) != 1 {
+		t.Errorf("as a spreadsheet saves it: %v", err)
 	}
 }
 

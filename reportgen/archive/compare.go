@@ -17,6 +17,7 @@ type Comparison struct {
 	Inputs    []InputPair    // that differ
 	Estimates []EstimatePair // that differ
 	Rows      []RowPair      // that differ in limit, outcome or demand
+	Texts     []TextPair     // of the document that differ
 }
 
 // A Remark is what can be said of an input that differs.
@@ -52,6 +53,13 @@ type RowPair struct {
 	A, B  *Finding
 }
 
+// A TextPair is a text of the document that differs, empty where nothing is
+// entered.
+type TextPair struct {
+	Key  string
+	A, B string
+}
+
 // Compare sets two results side by side.
 func Compare(a, b *Results) *Comparison {
 	c := &Comparison{A: a, B: b}
@@ -70,11 +78,34 @@ func Compare(a, b *Results) *Comparison {
 			c.Rows = append(c.Rows, RowPair{p.key, p.was, p.is})
 		}
 	}
+	c.Texts = textPairs(&a.Job, &b.Job)
 	return c
 }
 
+// textPairs returns the texts that differ, but for those that stand at the head of
+// a comparison: title, reference and revision.
+func textPairs(a, b *Job) []TextPair {
+	var pairs []TextPair
+	for _, p := range []TextPair{
+		{"document.site", a.Site, b.Site}, {"document.date", a.Date, b.Date}, {"document.rescue", a.Rescue, b.Rescue},
+		{"document.prepared_by", a.PreparedBy, b.PreparedBy}, {"document.checked_by", a.CheckedBy, b.CheckedBy},
+		{"document.review_date", a.ReviewDate, b.ReviewDate},
+	} {
+		if p.A != p.B {
+			pairs = append(pairs, p)
+		}
+	}
+	return pairs
+}
+
+// RescueLost reports whether A names a rescue method and B, which asks for one,
+// does not.
+func (c *Comparison) RescueLost() bool {
+	return reportgen.IsRescue(c.A.Job.Rescue) && rescueOf(c.B.Job.Rescue, c.B.Job.Persons) == RescueNotNamed
+}
+
 // Same reports whether no input, figure, row and nothing of what nobody entered
-// differs.
+// differs. Texts of the document do not count.
 func (c *Comparison) Same() bool {
 	return len(c.Inputs)+len(c.Estimates)+len(c.Rows) == 0 && slices.Equal(c.A.NotEntered, c.B.NotEntered)
 }
@@ -145,9 +176,14 @@ func planned(in *Input) bool {
 	return slices.Contains([]arrest.Source{arrest.FromPlan, arrest.FromDrawing, arrest.FromAssumed}, arrest.Source(in.Source))
 }
 
-// unit is the SI unit of the quantity of an estimate.
+// unit is the unit that an estimate is shown in: that of the SI, but degrees, in
+// which everybody reads an angle.
 func (e *Estimate) unit() quantity.Unit {
 	record, _ := e.Quantity.Record()
+	if record.Dimension == quantity.Angle {
+		degrees, _ := quantity.LookUp("deg")
+		return degrees
+	}
 	return record.Dimension.SI()
 }
 

@@ -3,6 +3,7 @@ package archive
 import (
 	"bytes"
 	"encoding/json"
+	"math"
 	"slices"
 	"strings"
 	"testing"
@@ -89,5 +90,62 @@ func TestCompareRevisions(t *testing.T) {
 	var j jsonComparison
 	if err := json.Unmarshal(out.Bytes(), &j); err != nil || j.Same || len(j.Inputs) != 2 || len(j.Rows) < 3 || j.Cautions[0].ID != "S-84" {
 		t.Errorf("%v\n%s", err, out.Bytes())
+	}
+}
+
+// Each end of a band by itself: what became narrower moved up and down. The shares
+// are worked out by hand: 9/8 - 1, 1 - 10/11, 3/2 - 1, and 4/5 - 1.
+func TestHowFarAFigureMoved(t *testing.T) {
+	nan := math.NaN()
+	e := func(low, high float64) *Estimate { return &Estimate{Low: low, High: high} }
+	for _, c := range []struct {
+		name string
+		a, b *Estimate
+		want string
+	}{
+		{"narrower", e(0.8, 1.1), e(0.9, 1.0), "low +12.5 %\nhigh -9.09 %"},
+		{"only the high end", e(0.8, 1.0), e(0.8, 1.5), "high +50 %"},
+		{"only the low end", e(1, 2), e(0.8, 2), "low -20 %"},
+		{"a single figure", e(1, 1), e(1.5, 1.5), "+50 %"},
+		{"a floor", e(1, nan), e(1.5, nan), "+50 %"},
+		{"a ceiling", e(nan, 1), e(nan, 1.5), "+50 %"},
+		{"from nothing", e(0, 0), e(1, 1), ""},
+		{"only in A", e(1, 1), nil, ""},
+		{"a floor became a band", e(1, nan), e(1.5, 2), "+50 %"},
+	} {
+		if got := (&EstimatePair{A: c.a, B: c.b}).by(); got != c.want {
+			t.Errorf("%s: %q, want %q", c.name, got, c.want)
+		}
+	}
+}
+
+// Texts of the document that differ are shown, and a rescue method that was lost
+// is named; they make no difference of the figures.
+func TestTextsThatDiffer(t *testing.T) {
+	side := func(rescue, checked string, persons int) *Results {
+		return &Results{Job: Job{Title: "x", Rescue: rescue, CheckedBy: checked, Persons: persons}}
+	}
+	for _, c := range []struct {
+		name string
+		a, b *Results
+		keys []string
+		lost bool
+	}{
+		{"the same", side("boat", "a", 1), side("boat", "a", 1), nil, false},
+		{"lost", side("boat", "a", 1), side("n/a", "a", 1), []string{"document.rescue"}, true},
+		{"never there", side("none", "a", 1), side("", "a", 1), []string{"document.rescue"}, false},
+		{"another", side("boat", "a", 1), side("lift", "b", 1), []string{"document.rescue", "document.checked_by"}, false},
+		{"no person", side("boat", "a", 0), side("", "a", 0), []string{"document.rescue"}, false},
+	} {
+		compared := Compare(c.a, c.b)
+		var keys []string
+		for _, p := range compared.Texts {
+			keys = append(keys, p.Key)
+		}
+		page := strings.Join(strings.Fields(text(t, compared.Report())), " ")
+		if !slices.Equal(keys, c.keys) || compared.RescueLost() != c.lost || !compared.Same() ||
+			strings.Contains(page, "no rescue method, was named") != c.lost {
+			t.Errorf("%s: %v, lost %t\n%s", c.name, keys, compared.RescueLost(), page)
+		}
 	}
 }

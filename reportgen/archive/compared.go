@@ -25,6 +25,7 @@ func (c *Comparison) Report() reportgen.Report {
 	add(reportgen.RowsDifferHeading, c.rowTable())
 	add(reportgen.InputsDifferHeading, c.inputTable())
 	add(reportgen.EstimatesDifferHeading, c.estimateTable())
+	add(reportgen.DocumentDiffersHeading, c.textTable())
 	return report
 }
 
@@ -112,7 +113,7 @@ func (in *Input) cell() string {
 }
 
 func (c *Comparison) estimateTable() *reportgen.Table {
-	t := c.table(reportgen.ByHead, 26, 20, 20, 8)
+	t := c.table(reportgen.ByHead, 22, 20, 20, 12)
 	for _, p := range c.Estimates {
 		e := p.A
 		if e == nil {
@@ -131,20 +132,55 @@ func (e *Estimate) cell() string {
 	return reportgen.FigureText(e.Bound, e.Low, e.High, e.unit())
 }
 
-// by is how far a figure moved, as a share: the end that is known of both, the
-// higher one where both are.
+// by is how far a figure moved, as a share, each end of a band by itself: one
+// that became narrower moved up and down.
 func (p *EstimatePair) by() string {
 	if p.A == nil || p.B == nil {
 		return ""
 	}
-	a, b := p.A.High, p.B.High
-	if math.IsNaN(a) || math.IsNaN(b) {
-		a, b = p.A.Low, p.B.Low
+	low, high := share(p.A.Low, p.B.Low), share(p.A.High, p.B.High)
+	switch {
+	case p.A.Low == p.A.High && p.B.Low == p.B.High, !known(p.A.High, p.B.High):
+		return low
+	case !known(p.A.Low, p.B.Low):
+		return high
+	case low == "" || high == "":
+		return strings.TrimSpace(lowEnd(low) + highEnd(high))
 	}
-	if math.IsNaN(a) || math.IsNaN(b) || a == 0 {
+	return lowEnd(low) + "\n" + highEnd(high)
+}
+
+func lowEnd(by string) string  { return end(words.LowBy, by) }
+func highEnd(by string) string { return end(words.HighBy, by) }
+
+func end(which reportgen.Sentence, by string) string {
+	if by == "" {
+		return ""
+	}
+	return which.Say(by)
+}
+
+// share is by how much of a figure another differs from it, empty where it does
+// not, or there is no such share.
+func share(a, b float64) string {
+	if !known(a, b) || a == 0 || a == b {
 		return ""
 	}
 	return signed(100*(b-a)/math.Abs(a)) + " %"
+}
+
+func known(a, b float64) bool { return !math.IsNaN(a) && !math.IsNaN(b) }
+
+func (c *Comparison) textTable() *reportgen.Table {
+	t := c.table(reportgen.SaysHead, 20, 18, 18, 18)
+	for _, p := range c.Texts {
+		remark := ""
+		if p.Key == "document.rescue" && c.RescueLost() {
+			remark = words.RescueLost.Say()
+		}
+		t.Rows = append(t.Rows, reportgen.Row{Cells: []string{p.Key, orNothing(p.A), orNothing(p.B), remark}, Loud: remark != ""})
+	}
+	return t
 }
 
 // ComparisonFormat is the value of the key format of a comparison in JSON.
@@ -158,6 +194,7 @@ type jsonComparison struct {
 	Inputs    []jsonInputPair    `json:"inputs"`
 	Estimates []jsonEstimatePair `json:"estimates"`
 	Rows      []jsonRowPair      `json:"findings"`
+	Texts     []jsonTextPair     `json:"texts"`
 	Cautions  []jsonCaution      `json:"cautions"`
 }
 
@@ -205,6 +242,12 @@ type jsonEstimate struct {
 	High  *float64 `json:"high"`
 }
 
+type jsonTextPair struct {
+	Key string `json:"key"`
+	A   string `json:"a"`
+	B   string `json:"b"`
+}
+
 type jsonRowPair struct {
 	Limit string       `json:"limit"`
 	A     *jsonFinding `json:"a"`
@@ -216,7 +259,7 @@ type jsonRowPair struct {
 func (c *Comparison) JSON(w io.Writer) error {
 	j := jsonComparison{
 		Format: ComparisonFormat, Same: c.Same(), A: c.A.side(), B: c.B.side(),
-		Inputs: []jsonInputPair{}, Estimates: []jsonEstimatePair{}, Rows: []jsonRowPair{}, Cautions: cautionsJSON(c.cautions()),
+		Inputs: []jsonInputPair{}, Estimates: []jsonEstimatePair{}, Rows: []jsonRowPair{}, Texts: []jsonTextPair{}, Cautions: cautionsJSON(c.cautions()),
 	}
 	for _, p := range c.Inputs {
 		j.Inputs = append(j.Inputs, jsonInputPair{p.Key, p.A.json(), p.B.json(), append([]Remark{}, p.Remarks...)})
@@ -226,6 +269,9 @@ func (c *Comparison) JSON(w io.Writer) error {
 	}
 	for _, p := range c.Rows {
 		j.Rows = append(j.Rows, jsonRowPair{p.Limit, p.A.json(), p.B.json()})
+	}
+	for _, p := range c.Texts {
+		j.Texts = append(j.Texts, jsonTextPair(p))
 	}
 	return writeJSON(w, &j)
 }

@@ -39,6 +39,7 @@ type Register struct {
 // A Summary is what all rows of a register come to together.
 type Summary struct {
 	Jobs, Exceeded, Settled, Otherwise, Broken int
+	NoRescue                                   int // with a person and no rescue method
 	New, Changed, Worse, Gone, Same            int
 }
 
@@ -88,8 +89,11 @@ func (r *Register) Close() (Summary, error) {
 		return r.total, err
 	}
 	block := reportgen.Block{Text: r.total.Text()}
+	if n := r.total.NoRescue; n > 0 {
+		block.Lines = append(block.Lines, reportgen.Line{Text: words.WithoutRescue.Say(strconv.Itoa(n)), Loud: true})
+	}
 	if r.early {
-		block.Lines = []reportgen.Line{{Text: r.total.Changes()}}
+		block.Lines = append(block.Lines, reportgen.Line{Text: r.total.Changes()})
 	}
 	if _, err := io.WriteString(r.w, "\n"); err != nil {
 		return r.total, err
@@ -108,6 +112,9 @@ func (r *Register) count(row *Row) {
 		return
 	}
 	t.Jobs++
+	if row.Rescue == RescueNotNamed {
+		t.NoRescue++
+	}
 	switch {
 	case row.Broken():
 		t.Broken++
@@ -149,26 +156,26 @@ func (r *Register) lineRow(row *Row) error {
 // csvHead names the columns of a CSV register.
 var csvHead = []string{
 	"file", "code", "change", "worse", "reference", "revision", "site", "title", "date", "exceeded", "undecided", "not_compared", "within",
-	"worst_outcome", "worst_quantity", "worst_bound", "worst_demand", "worst_unit", "worst_limit", "worst_authority",
-	"inputs", "open_inputs", "open_keys", "not_entered", "rescue", "prepared_by", "checked_by", "checker", "review_date",
+	"worst_outcome", "worst_quantity", "worst_bound", "worst_demand", "worst_unit", "worst_limit", "worst_authority", "worst_reasons",
+	"inputs", "open_inputs", "open_keys", "not_entered", "rescue", "rescue_method", "prepared_by", "checked_by", "checker", "review_date",
 	"persons", "example", "job_sha256", "results_sha256", "tool", "model", "errors",
 }
 
 // csvRow returns the cells of a row, in the order of csvHead.
 func (r *Register) csvRow(row *Row) []string {
 	n := strconv.Itoa
-	worst := [7]string{}
+	worst := [8]string{}
 	if w := row.Worst; w != nil {
 		worst = [...]string{
 			string(w.Outcome), string(w.Quantity), string(w.Bound), w.demandNumber(), w.unit().Symbol,
-			reportgen.SenseWords(w.Sense) + " " + w.LimitAsWritten, w.Authority,
+			reportgen.SenseWords(w.Sense) + " " + w.LimitAsWritten, w.Authority, strings.Join(w.Reasons, "; "),
 		}
 	}
 	cells := []string{
-		row.File, n(row.Code), string(row.Change), strings.Join(row.Worse, "; "), row.Job.Reference, row.Job.Revision, row.Job.Site,
+		fileName(row.File), n(row.Code), string(row.Change), strings.Join(row.Worse, "; "), row.Job.Reference, row.Job.Revision, row.Job.Site,
 		row.Job.Title, row.Job.Date, n(row.Counts.Exceeded), n(row.Counts.Undecided), n(row.Counts.NotCompared), n(row.Counts.Within),
-		worst[0], worst[1], worst[2], worst[3], worst[4], worst[5], worst[6],
-		n(row.Inputs), n(len(row.Open)), strings.Join(row.Open, "; "), strings.Join(row.NotEntered, "; "), row.Job.Rescue,
+		worst[0], worst[1], worst[2], worst[3], worst[4], worst[5], worst[6], worst[7],
+		n(row.Inputs), n(len(row.Open)), strings.Join(row.Open, "; "), strings.Join(row.NotEntered, "; "), row.Job.Rescue, string(row.Rescue),
 		row.Job.PreparedBy, row.Job.CheckedBy, string(row.Checker), row.Job.ReviewDate,
 		n(row.Job.Persons), strconv.FormatBool(row.Job.Example), row.Job.SHA256, row.Results, row.Tool, row.Model, strings.Join(row.Errors, "; "),
 	}
@@ -239,18 +246,41 @@ func (r *Register) numberCell(row *Row) string {
 	return strconv.Itoa(r.rows) + "\n" + string(row.Change)
 }
 
+// shownDigits is how many digits of a digest a register for people shows; the
+// other forms have all of them.
+const shownDigits = 12
+
 // jobCell is which job it is.
 func (r *Row) jobCell() string {
 	var lines []string
 	if reference := strings.TrimSpace(r.Job.Reference + " " + r.Job.Revision); reference != "" {
 		lines = append(lines, reference)
 	}
-	for _, text := range []string{r.Job.Site, r.Job.Title, r.File} {
+	for _, text := range []string{r.Job.Site, r.Job.Title, fileName(r.File)} {
 		if text != "" {
 			lines = append(lines, text)
 		}
 	}
+	if sum := r.Job.SHA256; len(sum) > shownDigits {
+		lines = append(lines, words.FileDigest.Say(sum[:shownDigits]))
+	}
+	if sum := r.Results; len(sum) > shownDigits {
+		lines = append(lines, words.ResultsDigest.Say(sum[:shownDigits]))
+	}
 	return strings.Join(lines, "\n")
+}
+
+// rescueText is what is entered about rescue, empty where nobody asks.
+func (r *Row) rescueText() string {
+	switch text := r.Job.Rescue; {
+	case r.Rescue == RescueNotNamed && text != "":
+		return words.RescueIsNone.Say(text)
+	case r.Rescue == RescueNotNamed:
+		return words.NoRescue.Say()
+	case text != "":
+		return words.RescueLine.Say(text)
+	}
+	return ""
 }
 
 // limitsCell is how many limits came to each outcome, and the worst of them; or
@@ -267,7 +297,7 @@ func (r *Row) limitsCell() string {
 		lines = append(lines, words.ExampleLine.Say())
 	}
 	if w := r.Worst; w != nil {
-		lines = append(lines, words.WorstLine.Say(titleOf(&w.Finding, r.Job.Persons), w.demand(), w.limit()), w.Authority)
+		lines = append(lines, words.WorstLine.Say(w.outcome(), titleOf(&w.Finding, r.Job.Persons), w.demand(), w.limit()), w.Authority)
 	}
 	return strings.Join(lines, "\n")
 }
@@ -297,11 +327,8 @@ func (r *Row) openCell() string {
 	if len(r.NotEntered) > 0 {
 		lines = append(lines, words.LeftOut.Say(leftOut(r.NotEntered, r.Job.Persons)))
 	}
-	switch {
-	case r.Job.Rescue != "":
-		lines = append(lines, words.RescueLine.Say(r.Job.Rescue))
-	case r.Job.Persons > 0:
-		lines = append(lines, words.NoRescue.Say())
+	if text := r.rescueText(); text != "" {
+		lines = append(lines, text)
 	}
 	switch r.Checker {
 	case Another:

@@ -15,6 +15,7 @@ import (
 
 	"arrestcheck/arrest/jobfile"
 	"arrestcheck/limits"
+	"arrestcheck/reportgen"
 )
 
 // register writes rows in one form.
@@ -156,7 +157,7 @@ func TestRegisterForms(t *testing.T) {
 			t.Errorf("%d wide: %s", n, line)
 		}
 	}
-	if !strings.Contains(page, "S-83") || !strings.Contains(page, fmt.Sprintf("%d jobs", len(rows))) {
+	if !strings.Contains(page, "S-83") || !strings.Contains(page, fmt.Sprintf("Jobs: %d.", len(rows))) {
 		t.Error("the statement or the count is missing")
 	}
 }
@@ -188,6 +189,44 @@ func TestRegisterWithoutPersons(t *testing.T) {
 	for _, word := range []string{"the body", "person", "rescue"} {
 		if strings.Contains(rows, word) {
 			t.Errorf("%q in\n%s", word, rows)
+		}
+	}
+}
+
+// A word for none is no rescue method in any form of the register, and a job
+// without a person is not asked for one.
+func TestRegisterRescue(t *testing.T) {
+	for _, c := range []struct {
+		job, text string
+		want      Rescue
+		line      string
+	}{
+		{"settled.toml", "hoist on the rail, two persons", RescueNamed, "rescue: hoist on the"},
+		{"settled.toml", "", RescueNotNamed, "rescue: nothing"},
+		{"settled.toml", "n/a", RescueNotNamed, `rescue: "n/a", which`},
+		{"settled.toml", "TBD", RescueNotNamed, `rescue: "TBD", which`},
+		{"settled.toml", "-", RescueNotNamed, `rescue: "-", which is`},
+		{"settled.toml", "None.", RescueNotNamed, `rescue: "None.",`},
+		{"tool-tether.toml", "", RescueNotAsked, ""},
+		{"tool-tether.toml", "none", RescueNotAsked, "rescue: none"},
+	} {
+		s := sheet(t, c.job)
+		s.File.Document.Rescue = c.text
+		row := RowOf(c.job, s, 2)
+		if row.Rescue != c.want {
+			t.Errorf("%q: %s, want %s", c.text, row.Rescue, c.want)
+		}
+		page := register(t, Text, false, row)
+		if !strings.Contains(page, c.line) || strings.Contains(page, "Without a rescue method: 1.") != (c.want == RescueNotNamed) {
+			t.Errorf("%q:\n%s", c.text, page)
+		}
+		if lines := register(t, Lines, false, row); !strings.Contains(lines, `"rescue_method":"`+string(c.want)+`"`) {
+			t.Errorf("%q:\n%s", c.text, lines)
+		}
+		cells, err := csv.NewReader(strings.NewReader(register(t, CSV, false, row))).ReadAll()
+		if err != nil || cells[1][slices.Index(csvHead, "rescue_method")] != string(c.want) ||
+			cells[1][slices.Index(csvHead, "rescue")] != reportgen.GuardCell(c.text) {
+			t.Errorf("%q: %q, %v", c.text, cells, err)
 		}
 	}
 }

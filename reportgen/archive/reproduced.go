@@ -188,8 +188,8 @@ func (r *Reproduction) textBlocks() []reportgen.Block {
 		blocks = append(blocks, reportgen.Block{
 			Text: words.TextDiffers.Say(t.Path, strconv.Itoa(t.Lines), strconv.Itoa(t.Line)),
 			Lines: []reportgen.Line{
-				{Label: reportgen.ArchivedHead, Text: orDash(t.Was)},
-				{Label: reportgen.NowHead, Text: orDash(t.Is)},
+				{Label: reportgen.InArchiveLabel, Text: orDash(t.Was)},
+				{Label: reportgen.AnewLabel, Text: orDash(t.Is)},
 			},
 		})
 	}
@@ -337,4 +337,14 @@ func RefusedReport(name string, err error) reportgen.Report {
 			{Heading: reportgen.RefusedHeading, Blocks: []reportgen.Block{{Lines: bullets(slices.Clone(faultTexts(err)))}}},
 		},
 	}
+}
+
+// A Tally is what several archives came to together.
+type Tally struct{ Same, Differ, Refused int }
+
+// Report says in one sentence what they came to.
+func (t Tally) Report() reportgen.Report {
+	n := strconv.Itoa
+	text := words.ArchivesCounted.Say(n(t.Same+t.Differ+t.Refused), n(t.Same), n(t.Differ), n(t.Refused))
+	return reportgen.Report{Head: []reportgen.Block{{Text: text}}}
 }

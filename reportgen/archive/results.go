@@ -7,6 +7,7 @@ import (
 	"fmt"
 	"io"
 	"math"
+	"strings"
 
 	"arrestcheck/arrest"
 	"arrestcheck/limits"
@@ -78,7 +79,11 @@ type Counts struct{ Exceeded, Undecided, NotCompared, Within int }
 type Override struct{ Key, Value string }
 
 // ErrFormat is the error of a file that is no result file of a known format.
-var ErrFormat = errors.New("archive: no result file of a format that is known here")
+var ErrFormat = errors.New("no result file of a format that is known here")
+
+// ErrNotWhole is the error of a file that calls itself a result file and does not
+// hold what every result has.
+var ErrNotWhole = errors.New("no whole result file")
 
 // readers holds the formats that are known, so that old results stay readable
 // when the form changes.
@@ -87,12 +92,16 @@ var readers = map[string]func([]byte) (Results, error){
 }
 
 // ReadResults reads a result file, one JSON document. The error wraps ErrFormat
-// where its format line names none that is known.
+// where it is none, or its format line names none that is known, and ErrNotWhole
+// where something is missing that every result has.
 func ReadResults(data []byte) (Results, error) {
 	var head struct {
 		Format string `json:"format"`
 	}
-	if err := json.Unmarshal(data, &head); err != nil {
+	if len(bytes.TrimSpace(data)) == 0 {
+		return Results{}, fmt.Errorf("%w: the file is empty", ErrFormat)
+	}
+	if err := json.NewDecoder(bytes.NewReader(data)).Decode(&head); err != nil {
 		return Results{}, fmt.Errorf("%w: %v", ErrFormat, err)
 	}
 	read, known := readers[head.Format]
@@ -154,7 +163,7 @@ type document1 struct {
 		Bound                         arrest.Bound
 		Demand, Ratio                 number
 	}
-	OutcomeCounts struct {
+	OutcomeCounts *struct {
 		Exceeded, Undecided, Within int
 		NotCompared                 int `json:"not_compared"`
 	} `json:"outcome_counts"`
@@ -171,7 +180,29 @@ func readResults1(data []byte) (Results, error) {
 	if _, err := decoder.Token(); !errors.Is(err, io.EOF) {
 		return Results{}, fmt.Errorf("%w: more than one result", ErrFormat)
 	}
+	if missing := d.missing(); len(missing) > 0 {
+		return Results{}, fmt.Errorf("%w: missing: %s", ErrNotWhole, strings.Join(missing, ", "))
+	}
 	return d.results(), nil
+}
+
+// missing names what every result has and this one lacks. Lists may be empty
+// but for the inputs: there is no job without a figure.
+func (d *document1) missing() []string {
+	var list []string
+	for _, c := range []struct {
+		key  string
+		lack bool
+	}{
+		{"tool.version", d.Tool.Version == ""}, {"tool.model", d.Tool.Model == ""}, {"job.sha256", d.Job.SHA256 == ""},
+		{"inputs", len(d.Inputs) == 0}, {"estimates", d.Estimates == nil}, {"findings", d.Findings == nil},
+		{"outcome_counts", d.OutcomeCounts == nil},
+	} {
+		if c.lack {
+			list = append(list, c.key)
+		}
+	}
+	return list
 }
 
 func (d *document1) results() Results {

@@ -1,8 +1,11 @@
 package archive
 
 import (
+	"encoding/json"
 	"errors"
+	"maps"
 	"os"
+	"slices"
 	"strings"
 	"testing"
 
@@ -77,6 +80,39 @@ func TestNoResults(t *testing.T) {
 		if _, err := ReadResults([]byte(data)); !errors.Is(err, ErrFormat) {
 			t.Errorf("%s: %v", name, err)
 		}
+	}
+}
+
+// A file that calls itself a result and holds none would be compared with
+// another such without a difference.
+func TestHalfResults(t *testing.T) {
+	whole := map[string]any{}
+	if err := json.Unmarshal([]byte(old), &whole); err != nil {
+		t.Fatal(err)
+	}
+	for _, key := range []string{"tool", "job", "inputs", "estimates", "findings", "outcome_counts"} {
+		for _, value := range []any{nil, map[string]any{}} {
+			if _, isList := whole[key].([]any); isList && value != nil {
+				value = []any{}
+			}
+			half := maps.Clone(whole)
+			half[key] = value
+			data, err := json.Marshal(half)
+			if err != nil {
+				t.Fatal(err)
+			}
+			_, err = ReadResults(data)
+			// Lists of what came out may be empty, and so may counts: of a job without limits.
+			if may := value != nil && slices.Contains([]string{"estimates", "findings", "outcome_counts"}, key); may != (err == nil) {
+				t.Errorf("%s %v: %v", key, value, err)
+			}
+			if err != nil && (!errors.Is(err, ErrNotWhole) || !strings.Contains(err.Error(), key)) {
+				t.Errorf("%s %v: %v", key, value, err)
+			}
+		}
+	}
+	if _, err := ReadResults([]byte(`{"format":"arrestcheck result 1"}`)); !errors.Is(err, ErrNotWhole) {
+		t.Errorf("nothing but the format: %v", err)
 	}
 }
 

@@ -24,6 +24,7 @@ type Row struct {
 	Inputs     int
 	Open       []string // keys of the inputs that are open
 	NotEntered []string // subjects that nobody entered a limit for
+	Rescue     Rescue
 	Checker    Checker
 	Sets       []string // digests of the limit sets; empty ones are the limits of the job itself
 	Results    string   // digest of the canonical results; empty of a broken job
@@ -46,6 +47,26 @@ const (
 	Nobody      Checker = "not_named"
 )
 
+// A Rescue says whether a job names a rescue method. The text itself is Job.Rescue.
+type Rescue string
+
+const (
+	RescueNamed    Rescue = "named"
+	RescueNotNamed Rescue = "not_named" // nothing, or a word for none such as "n/a"
+	RescueNotAsked Rescue = "not_asked" // no person is part of the job
+)
+
+// rescueOf is told by the same function as the warning on the sheet.
+func rescueOf(text string, persons int) Rescue {
+	switch {
+	case persons == 0:
+		return RescueNotAsked
+	case reportgen.IsRescue(text):
+		return RescueNamed
+	}
+	return RescueNotNamed
+}
+
 // A Worst is the row of a sheet that is furthest from settled.
 type Worst struct {
 	Finding
@@ -58,6 +79,7 @@ func RowOf(name string, s *reportgen.Sheet, code int) Row {
 	r := unsnapped(s)
 	row := Row{
 		File: name, Code: code, Job: r.Job, Counts: r.Counts, Inputs: len(r.Inputs), NotEntered: r.NotEntered,
+		Rescue:  rescueOf(r.Job.Rescue, r.Job.Persons),
 		Checker: checkerOf(r.Job.PreparedBy, r.Job.CheckedBy), Results: r.Digest(), Tool: r.Tool, Model: r.Model,
 	}
 	for i := range r.Inputs {
@@ -76,9 +98,10 @@ func RowOf(name string, s *reportgen.Sheet, code int) Row {
 }
 
 // BrokenRow returns the row of a job that is refused or cannot be read. data is
-// what was read of it, nil where nothing was.
+// the whole file, nil where it was not read to its end: a digest of a part of it
+// would be that of another file.
 func BrokenRow(name string, data []byte, err error, code int, tool string) Row {
-	row := Row{File: name, Code: code, Tool: tool, Model: arrest.ModelVersion, Checker: Nobody, Errors: faultTexts(err)}
+	row := Row{File: name, Code: code, Tool: tool, Model: arrest.ModelVersion, Rescue: RescueNotAsked, Checker: Nobody, Errors: faultTexts(err)}
 	if data != nil {
 		row.Job.SHA256 = digest(data)
 	}
@@ -156,6 +179,7 @@ type jsonRow struct {
 	Open       []string   `json:"open_inputs"`
 	NotEntered []string   `json:"not_entered"`
 	Rescue     string     `json:"rescue"`
+	Method     Rescue     `json:"rescue_method"`
 	PreparedBy string     `json:"prepared_by"`
 	CheckedBy  string     `json:"checked_by"`
 	Checker    Checker    `json:"checker"`
@@ -186,10 +210,10 @@ type jsonWorst struct {
 // json returns the row as it stands in a JSON register, lists never null.
 func (r *Row) json() *jsonRow {
 	j := &jsonRow{
-		Format: RegisterFormat, File: r.File, Code: r.Code, Worse: list(r.Worse),
+		Format: RegisterFormat, File: jsonName(r.File), Code: r.Code, Worse: list(r.Worse),
 		Reference: r.Job.Reference, Revision: r.Job.Revision, Site: r.Job.Site, Title: r.Job.Title, Date: r.Job.Date,
 		Persons: r.Job.Persons, Example: r.Job.Example, Counts: jsonCounts(r.Counts),
-		Inputs: r.Inputs, Open: list(r.Open), NotEntered: list(r.NotEntered), Rescue: r.Job.Rescue,
+		Inputs: r.Inputs, Open: list(r.Open), NotEntered: list(r.NotEntered), Rescue: r.Job.Rescue, Method: r.Rescue,
 		PreparedBy: r.Job.PreparedBy, CheckedBy: r.Job.CheckedBy, Checker: r.Checker, Review: r.Job.ReviewDate,
 		Job: r.Job.SHA256, Sets: list(r.Sets), Results: r.Results, Tool: Versions{r.Tool, r.Model}, Errors: list(r.Errors),
 	}
