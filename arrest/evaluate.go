@@ -26,7 +26,7 @@ type evaluation struct {
 // ShowWorking. The job must be one that Impossible does not refuse. Equal jobs
 // give equal results, to the last bit, on every machine.
 func Evaluate(j *Job) Result {
-	ev, partImpossible := estimate(j)
+	ev, partImpossible := estimate(j, nil, false)
 	ev.runs()
 	ev.layout()
 	ev.warn(partImpossible)
@@ -35,9 +35,10 @@ func Evaluate(j *Job) Result {
 	return res
 }
 
-// estimate works out the estimates of a job and the contradictions between them.
-func estimate(j *Job) (ev *evaluation, partImpossible bool) {
-	ev, partImpossible = begin(j)
+// estimate works out the estimates of a job and the contradictions between them,
+// within spans where they are known already.
+func estimate(j *Job, known *spans, inPart bool) (ev *evaluation, partImpossible bool) {
+	ev, partImpossible = begin(j, known, inPart)
 	ev.res.Estimates = make([]Estimate, 0, len(outputs)+4*(1+len(j.Ratings)))
 	ev.closedForms()
 	ev.entered()
@@ -52,7 +53,7 @@ func estimate(j *Job) (ev *evaluation, partImpossible bool) {
 func ShowWorking(j *Job, r *Result) {
 	ev := r.worked
 	if ev == nil || ev.job != j {
-		ev, _ = begin(j)
+		ev, _ = begin(j, nil, false)
 	}
 	ev.res.Working = nil
 	ev.working()
@@ -60,7 +61,7 @@ func ShowWorking(j *Job, r *Result) {
 }
 
 // begin does what results and working share: the spans of all outputs.
-func begin(j *Job) (ev *evaluation, partImpossible bool) {
+func begin(j *Job, known *spans, inPart bool) (ev *evaluation, partImpossible bool) {
 	ev = &evaluation{job: j, res: Result{Inputs: j.Inputs, Persons: j.Persons, Example: j.Example}}
 	ev.lo, ev.hi = ends(j)
 	ev.sortInputs()
@@ -68,7 +69,9 @@ func begin(j *Job) (ev *evaluation, partImpossible bool) {
 		ev.madeOfParts = j.madeOfParts(l.Length) || j.madeOfParts(l.Locking)
 	}
 	At(&j.Point, &ev.written)
-	ev.spans, partImpossible = overCorners(j)
+	if ev.spans, partImpossible = known, inPart; known == nil {
+		ev.spans, partImpossible = overCorners(j)
+	}
 	ev.assumedShape()
 	return ev, partImpossible
 }

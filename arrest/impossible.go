@@ -13,12 +13,20 @@ func Impossible(j *Job) (limit float64, impossible bool) {
 	if !bothGiven(j) {
 		return 0, false
 	}
-	least, greatest := ends(j)
-	var p Point
 	if j.Point.Layout != nil {
 		spans, _ := overCorners(j)
-		greatest = atSpeed(greatest, greatest.Mass+greatest.Tools, spans.speeds()[1])
+		return impossibleWithin(j, spans)
 	}
+	least, greatest := ends(j)
+	var p Point
+	return beyondReach(&least, &greatest, &p)
+}
+
+// impossibleWithin is Impossible for a layout, of which the spans are known.
+func impossibleWithin(j *Job, s *spans) (limit float64, impossible bool) {
+	least, greatest := ends(j)
+	greatest = atSpeed(greatest, greatest.Mass+greatest.Tools, s.speeds()[1])
+	var p Point
 	return beyondReach(&least, &greatest, &p)
 }
 

@@ -86,7 +86,7 @@ func (in *Input) Open() OpenReason {
 		return Settled
 	case in.Source == NoSource:
 		return OpenNoSource
-	case in.Role == OfModel && in.Source != FromAssumed:
+	case (in.Role == OfModel || in.Key == marginItem) && in.Source != FromAssumed:
 		return Settled
 	case !in.settles():
 		return OpenSource
@@ -124,6 +124,10 @@ func (in *Input) ofConnector() bool {
 // DecelerationItem is the key of the travel to rest among the items of a
 // clearance.
 const DecelerationItem = "clearance.deceleration_distance"
+
+// marginItem is the key of the margin, which a rule or a plan sets to one
+// figure: it has no tolerance.
+const marginItem = "clearance.margin"
 
 // HasValue reports whether a middle figure was written.
 func (in *Input) HasValue() bool { return !math.IsNaN(in.Band.Value) }

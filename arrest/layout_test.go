@@ -252,7 +252,7 @@ func TestDatumsApart(t *testing.T) {
 		tl.items = map[rig.Item]string{rig.ItemDeceleration: "1 m", rig.ItemLineStretch: "0 m", rig.ItemHarness: "0 m", rig.ItemAnchor: "0 m", rig.ItemMargin: "0 m"}
 		j := laidOutJob(t, tl)
 		res := Evaluate(j)
-		ev, _ := begin(j)
+		ev, _ := begin(j, nil, false)
 		if got := ev.datumsApart(j.Point.Layout); math.Abs(got-want) > 1e-12 {
 			t.Errorf("%s: %g, want %g", feet, got, want)
 		}

@@ -242,7 +242,7 @@ func (ev *evaluation) tightest() *LayoutPlace {
 			continue
 		}
 		p := &LayoutPlace{Index: c.Position, Corner: AtHigh, Case: c, Run: *LayoutAt(&c)}
-		if c == ev.job.Point || left.known() && left.low.value == left.high.value && needed.low.value == needed.high.value {
+		if left.known() && left.low.value == left.high.value && needed.low.value == needed.high.value {
 			p.Corner = AtWritten
 		}
 		return p

@@ -40,7 +40,7 @@ type Room struct {
 	Left   float64 // the least that is left to an obstacle; NaN where none is in the way
 	Lefts  rig.Lefts
 
-	below float64 // the room needed below the feet, whatever the datum
+	below float64 // the room needed below the feet; where both datums are known, the greater
 }
 
 // Inextensible stands in Estimate.From of what holds only if the connector
@@ -146,6 +146,11 @@ func (room *Room) sum(plan *ClearancePlan, r *LayoutRun) {
 		room.Floor, room.Needed = true, s.Present
 	}
 	room.below = room.Needed - below
+	for _, x := range [...]float64{room.Feet.Needed, room.Anchor.Needed - r.Layout.Anchor.Z} {
+		if x > room.below {
+			room.below = x // where the datums differ, the greater room counts
+		}
+	}
 	room.Lefts = r.Layout.Left(&r.Place, room.below)
 	room.Left = nan
 	if room.Lefts.Count > 0 {

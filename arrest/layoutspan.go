@@ -328,13 +328,13 @@ func (s *spans) overFalls(g *siting) (partImpossible bool) {
 	if fall := &s.of[indexOf(FreeFall, Given)]; fall.known() {
 		low, high := s.caseAt(fall.low), s.caseAt(fall.high)
 		heights = [...]float64{s.fallAt(&low), s.fallAt(&high)}
+		figures := g.plan.figures(g.pos) // of the layout, none of the path
 		s.axes = append(s.axes, func(c *Case, end bool) {
 			from := &low
 			if end {
 				from = &high
 			}
-			// All figures of the layout, none of the path.
-			for _, n := range g.plan.figures(g.pos) {
+			for _, n := range figures {
 				c.Figures[n] = from.Figures[n]
 			}
 		})

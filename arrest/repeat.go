@@ -15,7 +15,10 @@ type Repeat struct {
 	ev     evaluation
 	spans  spans
 	corner Case
-	at     Point
+	laid   *spans // of a layout, worked out by Impossible for the next Evaluate
+
+	laidInPart bool
+	at         Point
 }
 
 // NewRepeat prepares a Repeat of j.
@@ -29,13 +32,18 @@ func NewRepeat(j *Job) *Repeat {
 }
 
 // Impossible reports whether nothing in the whole of the bands can happen, as
-// the function Impossible does. Evaluate must not be asked then.
+// the function Impossible does. Evaluate must not be asked then; else it is to be
+// asked of the same figures.
 func (r *Repeat) Impossible() bool {
 	if !bothGiven(&r.Job) {
 		return false
 	}
 	if r.Job.Point.Layout != nil {
-		_, never := Impossible(&r.Job)
+		r.laid, r.laidInPart = overCorners(&r.Job)
+		_, never := impossibleWithin(&r.Job, r.laid)
+		if never {
+			r.laid = nil
+		}
 		return never
 	}
 	r.restart()
@@ -51,7 +59,8 @@ func (r *Repeat) Impossible() bool {
 // time.
 func (r *Repeat) Evaluate() *Result {
 	if r.Job.Point.Path != nil || r.Job.Point.Layout != nil {
-		ev, _ := estimate(&r.Job)
+		ev, _ := estimate(&r.Job, r.laid, r.laidInPart)
+		r.laid = nil
 		r.ev.res = ev.res
 		r.ev.res.Warnings = nil
 		return &r.ev.res

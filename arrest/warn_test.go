@@ -29,3 +29,13 @@ func TestEdgeOfASteepFloor(t *testing.T) {
 		}
 	}
 }
+
+// The drag of the air is told of above 6 m of fall (M-01).
+func TestEdgeOfTheDrag(t *testing.T) {
+	for fall, told := range map[string]bool{"6 m": false, "6.001 m": true} {
+		res := Evaluate(figures{mass: "100 kg", fall: fall, distance: "2 m"}.job(t))
+		if hasWarning(&res, DragLeftOut) != told {
+			t.Errorf("%s: told %v", fall, !told)
+		}
+	}
+}

@@ -12,7 +12,8 @@ import (
 func (b *builder) behind() []Section {
 	sections := append([]Section{{Heading: behindHeading}}, b.longTexts()...)
 	sections = append(sections, Section{inputsHeading, []Block{{Table: b.inputTable()}}})
-	sections = append(append(sections, b.pathSections()...), b.comparedSection(false)...)
+	sections = append(append(sections, b.layoutSections()...), b.pathSections()...)
+	sections = append(sections, b.comparedSection(false)...)
 	if len(b.asd().Findings) > 0 {
 		sections = append(sections, Section{limitTextsHeading, b.limitTexts()})
 	}
@@ -25,7 +26,7 @@ func (b *builder) behind() []Section {
 	}
 	sections = append(sections, b.sensitivitySections()...)
 	return append(sections,
-		Section{notCheckedHeading, []Block{{Lines: bullets(notChecked[b.sub])}}},
+		Section{notCheckedHeading, []Block{{Lines: bullets(b.notLookedAt())}}},
 		Section{referencesHeading, []Block{{Lines: b.references()}}},
 		Section{filesHeading, []Block{{Lines: b.files()}}},
 	)
@@ -189,7 +190,7 @@ func (b *builder) register() []Line {
 		}
 	}
 	if b.plan() != nil {
-		texts = append(texts, pathAssumption)
+		texts = append(texts, b.pathAssumption())
 	}
 	if in := b.s.File.Job.AllowanceInput(); in != nil {
 		texts = append(texts, b.say(allowanceAssumption, in.Band.Text))
@@ -200,7 +201,7 @@ func (b *builder) register() []Line {
 		}
 	}
 	var list []Line
-	for i, t := range append(texts, standingAssumptions[b.sub]...) {
+	for i, t := range append(texts, b.standing()...) {
 		list = append(list, Line{Label: "A" + strconv.Itoa(i+1), Text: t + " " + needsConfirmation})
 	}
 	return list
@@ -209,7 +210,7 @@ func (b *builder) register() []Line {
 // assumedShape returns the shape that figures of the sheet were made from.
 func (b *builder) assumedShape() string {
 	for i := range b.res().Estimates {
-		if e := &b.res().Estimates[i]; e.Evidence == arrest.Shape {
+		if e := &b.res().Estimates[i]; e.Evidence == arrest.Shape && e.From != arrest.Inextensible {
 			return e.From
 		}
 	}
@@ -225,7 +226,7 @@ func (b *builder) references() []Line {
 	for i := range b.res().Working {
 		used[b.res().Working[i].Method] = true
 	}
-	used[measuringMethod] = b.s.File.Job.Point.Path == nil && b.anyBand()
+	used[measuringMethod] = !b.s.takesLonger() && b.anyBand()
 	var list []Line
 	for _, m := range everyMethod() {
 		if used[m.ID] {

@@ -83,8 +83,11 @@ func (b *builder) pageOne() []Section {
 		sections = append(sections, Section{meansHeading, blocks})
 	}
 	sections = append(sections, b.vectorSections()...)
+	sections = append(sections, Section{motionHeading[b.sub], b.estimateBlocks("", isMotion)})
+	if blocks := b.estimateBlocks("", isLayout); len(blocks) > 0 {
+		sections = append(sections, Section{layoutHeading, blocks})
+	}
 	return append(sections,
-		Section{motionHeading[b.sub], b.estimateBlocks("", isMotion)},
 		Section{openHeading, []Block{b.openBlock()}},
 		Section{statusHeading, []Block{{Lines: b.status()}}},
 		Section{beforeHeading, []Block{{Text: stopMeasureAgain[b.sub], Loud: true}}},

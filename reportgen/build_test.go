@@ -153,7 +153,7 @@ func TestEstimateTexts(t *testing.T) {
 func TestEveryQuantityHasItsTable(t *testing.T) {
 	for _, q := range arrest.Quantities() {
 		n := 0
-		for _, in := range []bool{isPeak(q.ID), isMean(q.ID), isMotion(q.ID), isOfVector(q.ID)} {
+		for _, in := range []bool{isPeak(q.ID), isMean(q.ID), isMotion(q.ID), isOfVector(q.ID), isLayout(q.ID)} {
 			if in {
 				n++
 			}

@@ -28,7 +28,8 @@ func newDocument(s *Sheet) document {
 		Cautions: each(b.d.statements(s), func(one *said) jsonCaution {
 			return jsonCaution{one.number, breakable(one.text)}
 		}),
-		NotChecked:  notChecked[b.sub],
+		NotChecked:  b.notLookedAt(),
+		Layout:      b.jsonLayout(),
 		ModelRuns:   each(s.Result.Runs, b.jsonRun),
 		Vectors:     b.jsonVectors(),
 		Overrides:   each(s.File.Overrides, newOverride),
@@ -92,6 +93,10 @@ func (b *builder) jsonEstimate(e *arrest.Estimate) jsonEstimate {
 		Uses:      each(e.Uses, func(i *int) string { return b.res().Inputs[*i].Key }),
 		Allowance: figure(math.NaN()), ComparedLow: figure(math.NaN()), ComparedHigh: figure(math.NaN()),
 		Exhausted: e.Exhausted, BeyondModel: e.Beyond,
+		Position: text(e.Place), Travel: figure(math.NaN()), Edge: e.Edge, Strikes: e.Strikes, Unreached: e.Unreached,
+	}
+	if e.Travel > 0 {
+		j.Travel = figure(e.Travel)
 	}
 	if widened(e) {
 		low, high := e.Ends()

@@ -26,7 +26,9 @@ func isMean(q arrest.Quantity) bool {
 	return false
 }
 
-func isMotion(q arrest.Quantity) bool { return !isPeak(q) && !isMean(q) && !isOfVector(q) }
+func isMotion(q arrest.Quantity) bool {
+	return !isPeak(q) && !isMean(q) && !isOfVector(q) && !isLayout(q)
+}
 
 // estimateBlocks are a table of the estimates of some quantities, or the
 // paragraph none where there are no such estimates.
@@ -65,7 +67,11 @@ func (b *builder) estimate(e *arrest.Estimate, digits int) string {
 		return bare
 	}
 	low, high := e.Ends()
-	return b.say(withAllowance, bare, percent(e.Allowance), b.d.span(rec.Dimension, e.Typed, low, high, digits))
+	wider := withAllowance
+	if e.Travel > 0 {
+		wider = travelAllowance
+	}
+	return b.say(wider, bare, percent(e.Allowance), b.d.span(rec.Dimension, e.Typed, low, high, digits))
 }
 
 // widened reports whether the user's allowance is added to the estimate before
@@ -84,11 +90,28 @@ func percent(share float64) string {
 	return text + noBreak + "%"
 }
 
-// from says what an estimate rests on.
+// from says what an estimate rests on, and of which of several positions it is.
 func (b *builder) from(e *arrest.Estimate) string {
+	text := b.restsOn(e)
+	if e.Place != "" {
+		text += ", " + b.say(fromPlace, cut(e.Place))
+	}
+	return text
+}
+
+// assumed says under which assumption of a user, or of the program, a figure
+// holds.
+func (d display) assumed(from string) string {
+	if from == arrest.Inextensible {
+		return noStretchRemark
+	}
+	return d.say(shapeRemark, from)
+}
+
+func (b *builder) restsOn(e *arrest.Estimate) string {
 	switch e.Evidence {
 	case arrest.Shape:
-		return b.say(shapeRemark, e.From) + ", " + e.Method
+		return b.d.assumed(e.From) + ", " + e.Method
 	case arrest.Rated:
 		return b.say(ratedRemark, cut(e.From)) + ", " + e.Method
 	case arrest.Modelled:

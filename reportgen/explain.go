@@ -96,6 +96,9 @@ func (b *builder) settling(f *limits.Finding, r *limits.Reason) string {
 		case b.sub == aLoad && isPeak(f.Limit.Quantity):
 			return peakOfLoadWanted
 		}
+		if r.ID == limits.AssumedShape && r.Args[0].Text == arrest.Inextensible {
+			words = noStretchWanted
+		}
 		return b.say(words, upperFirst(b.entryWanted(f.Limit.Quantity)))
 	case limits.OpenInput:
 		return b.say(words, b.howToSettle(b.input(r.Args[0].Text)))
@@ -116,6 +119,11 @@ type ways struct{ other, rating, path string }
 // sides; what is entered already is not asked for again.
 func (b *builder) entryWanted(q arrest.Quantity) string {
 	w, known := waysTo[q]
+	if b.hasLayout() {
+		if way, is := b.layoutWay(q); is {
+			return way
+		}
+	}
 	if !known {
 		return otherWay
 	}

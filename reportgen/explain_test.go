@@ -194,7 +194,7 @@ func TestWaysToAnEntry(t *testing.T) {
 		{rated, arrest.PeakForce, pathWay},
 		{both, arrest.PeakForce, nothingMissing},
 		{floor, arrest.DecelerationDistance, measureDistance + ", or " + travelRating + ", or " + pathWay},
-		{floor, arrest.SwingDrop, otherWay},
+		{floor, arrest.LineSag, otherWay},
 	} {
 		b := newBuilder(c.s, SIUnits)
 		if got := b.entryWanted(c.q); got != c.want {

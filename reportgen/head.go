@@ -26,7 +26,7 @@ func (b *builder) identity() []Line {
 		if l.Label == systemLabel {
 			list = append(list,
 				Line{Label: sheetLabel, Text: b.say(sheetOf, strconv.Itoa(b.s.Number), strconv.Itoa(b.s.Of))},
-				Line{Label: datumLabel, Text: holdsFor[b.sub]})
+				Line{Label: datumLabel, Text: b.datum()})
 		}
 		if l.Text = b.onPageOne(l); l.Text != "" {
 			list = append(list, l)
@@ -104,7 +104,7 @@ func (b *builder) rescue() string {
 	switch {
 	case text == "" && b.sub == aPerson:
 		return nothingEntered
-	case text != "" && b.sub == aPerson && !isRescue(text):
+	case text != "" && b.sub == aPerson && !IsRescue(text):
 		return b.say(noRescueText, cut(text))
 	}
 	return quote(text)
@@ -259,6 +259,10 @@ func (b *builder) reasonOnRow(f *limits.Finding, r *limits.Reason, further bool)
 	switch {
 	case r.ID == limits.NotComputed && len(r.Args) > 0:
 		p = untestedCondition
+	case r.ID == limits.AssumedShape && r.Args[0].Text == arrest.Inextensible && further:
+		return b.say(noStretchBeside)
+	case r.ID == limits.AssumedShape && r.Args[0].Text == arrest.Inextensible:
+		return b.say(noStretchReason)
 	case r.ID == limits.AssumedShape && further:
 		p = shapeBeside
 	case r.ID == limits.Contradicted && r.Args[0] == r.Args[1]:

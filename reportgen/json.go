@@ -1,11 +1,10 @@
 package reportgen
 
 import (
-	"bytes"
-	"encoding/json"
 	"fmt"
 	"io"
 	"math"
+	"reflect"
 	"strconv"
 	"strings"
 	"unicode/utf8"
@@ -28,30 +27,30 @@ func JSON(w io.Writer, s *Sheet) error { return encode(w, newDocument(s)) }
 
 // encode writes one JSON document on one line.
 func encode(w io.Writer, document any) error {
-	var b bytes.Buffer
-	e := json.NewEncoder(&b)
-	e.SetEscapeHTML(false)
-	if err := e.Encode(document); err != nil {
-		panic("reportgen: json: " + err.Error()) // a struct of texts and numbers
-	}
-	_, err := io.WriteString(w, escapeJSON(b.String()))
+	_, err := w.Write(append(appendJSON(make([]byte, 0, 32<<10), reflect.ValueOf(document)), '\n'))
 	return err
 }
 
 // escapeJSON escapes what is not visible, which stands in strings only.
 func escapeJSON(s string) string {
 	var b strings.Builder
-	for _, r := range s {
-		switch {
-		case r == '\n' || r != utf8.RuneError && visible(r) && r != noBreakRune:
-			b.WriteRune(r)
-		case r > 0xffff:
+	b.Grow(len(s))
+	from := 0 // what stands before it is written
+	for i, r := range s {
+		if r >= ' ' && r <= '~' || r == '\n' || r != utf8.RuneError && visible(r) && r != noBreakRune {
+			continue
+		}
+		_, size := utf8.DecodeRuneInString(s[i:])
+		b.WriteString(s[from:i])
+		from = i + size
+		if r > 0xffff {
 			r -= 0x10000
 			fmt.Fprintf(&b, `\u%04x\u%04x`, 0xd800+r>>10, 0xdc00+r&0x3ff)
-		default:
-			fmt.Fprintf(&b, `\u%04x`, r)
+			continue
 		}
+		fmt.Fprintf(&b, `\u%04x`, r)
 	}
+	b.WriteString(s[from:])
 	return b.String()
 }
 
@@ -59,12 +58,14 @@ func escapeJSON(s string) string {
 type figure float64
 
 // MarshalJSON writes the 12 significant digits of the number.
-func (f figure) MarshalJSON() ([]byte, error) {
+func (f figure) MarshalJSON() ([]byte, error) { return f.append(nil), nil }
+
+func (f figure) append(to []byte) []byte {
 	x := float64(f)
 	if math.IsNaN(x) || math.IsInf(x, 0) {
-		return []byte("null"), nil
+		return append(to, "null"...)
 	}
-	return strconv.AppendFloat(nil, quantity.Snap(x), 'g', -1, 64), nil
+	return strconv.AppendFloat(to, quantity.Snap(x), 'g', -1, 64)
 }
 
 // document is the JSON of one sheet. The order of the fields is the order of
@@ -87,6 +88,7 @@ type document struct {
 	Vectors       []jsonVector   `json:"vectors"`
 	Overrides     []jsonOverride `json:"overrides"`
 	Sensitivity   []jsonRanking  `json:"sensitivity"`
+	Layout        *jsonLayout    `json:"layout"`
 }
 
 type jsonTool struct {
@@ -159,6 +161,15 @@ type jsonEstimate struct {
 	ComparedHigh figure `json:"compared_high"`
 	Exhausted    bool   `json:"exhausted"`
 	BeyondModel  bool   `json:"beyond_model"`
+
+	// Of a job with a layout: the position that the figure is of, of several; what
+	// of the length the path gives, which alone the allowance is taken on; and what
+	// keeps a row from being within.
+	Position  *string `json:"position"`
+	Travel    figure  `json:"travel"`
+	Edge      bool    `json:"edge_contact"`
+	Strikes   bool    `json:"strikes"`
+	Unreached bool    `json:"place_unknown"`
 }
 
 type jsonFinding struct {

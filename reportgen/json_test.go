@@ -28,12 +28,12 @@ func asJSON(t testing.TB, s *Sheet) string {
 // place is a new format.
 func TestJSONKeys(t *testing.T) {
 	keys := map[string]string{
-		"":               "format tool job limit_sets inputs estimates findings outcome_counts not_entered elsewhere working cautions not_checked model_runs vectors overrides sensitivity",
+		"":               "format tool job limit_sets inputs estimates findings outcome_counts not_entered elsewhere working cautions not_checked model_runs vectors overrides sensitivity layout",
 		"tool":           "version model",
 		"job":            "name title site reference revision date purpose system rescue prepared_by checked_by review_date persons example sha256 subject",
 		"limit_sets":     "name title jurisdiction entered_by entered_on checked_on note example sha256",
 		"inputs":         "key as_written unit low value high source note open open_reason",
-		"estimates":      "quantity method evidence bound unit low value high reach from outside uses allowance compared_low compared_high exhausted beyond_model",
+		"estimates":      "quantity method evidence bound unit low value high reach from outside uses allowance compared_low compared_high exhausted beyond_model position travel edge_contact strikes place_unknown",
 		"findings":       "limit set group quantity sense limit_as_written limit_value authority outcome reason reasons bound demand unit ratio used",
 		"reasons":        "id text",
 		"outcome_counts": "exceeded undecided not_compared within",

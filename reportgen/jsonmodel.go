@@ -97,7 +97,7 @@ func settledAt(x float64) figure {
 func (b *builder) jsonRun(r *arrest.ModelRun) jsonRun {
 	run, c := &r.Run, &r.Case
 	j := jsonRun{
-		Corner: r.Corner, TotalMass: figure(c.Mass + c.Tools), FreeFall: figure(c.FreeFall), InitialSpeed: figure(c.InitialSpeed),
+		Corner: r.Corner, TotalMass: figure(c.Mass + c.Tools), FreeFall: figure(caseFall(c)), InitialSpeed: figure(c.InitialSpeed),
 		End: run.Status.String(), PeakForce: figure(run.Peak), PeakTime: figure(run.PeakTime - run.FirstPull),
 		AnchorForce: figure(run.AnchorForce), StoppingTime: figure(run.StoppingTime),
 		StoppingDistance: figure(run.StoppingDistance), DecelerationDistance: figure(run.DecelerationDistance),

@@ -121,11 +121,19 @@ func (b *builder) runBlocks(r *arrest.ModelRun) []Block {
 
 // runCase says for which mass and fall the run holds.
 func (b *builder) runCase(c *arrest.Case) string {
-	mass := b.three(quantity.Mass, c.Mass+c.Tools)
+	mass, fall := b.three(quantity.Mass, c.Mass+c.Tools), b.length(caseFall(c))
 	if c.InitialSpeed > 0 {
-		return b.say(thrownCase, mass, b.length(c.FreeFall), b.three(quantity.Speed, c.InitialSpeed))
+		return b.say(thrownCase, mass, fall, b.three(quantity.Speed, c.InitialSpeed))
 	}
-	return b.say(droppedCase, mass, b.length(c.FreeFall))
+	return b.say(droppedCase, mass, fall)
+}
+
+// caseFall returns the free fall of a case, m: as entered, or that of its layout.
+func caseFall(c *arrest.Case) float64 {
+	if c.Layout == nil {
+		return c.FreeFall
+	}
+	return arrest.LayoutAt(c).Place.FreeFall
 }
 
 // runTable is what the run came to.

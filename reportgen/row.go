@@ -116,6 +116,8 @@ func (b *builder) byModel(f *limits.Finding) string {
 	switch e := &b.res().Estimates[f.Used[0]]; {
 	case e.Evidence != arrest.Modelled:
 		return ""
+	case widened(e) && e.Travel > 0:
+		return ", " + b.say(travelAllowanceNote, percent(e.Allowance))
 	case widened(e):
 		return ", " + b.say(allowanceNote, percent(e.Allowance))
 	}

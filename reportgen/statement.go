@@ -26,7 +26,7 @@ func (d display) statements(s *Sheet) []said {
 		all = append(all, said{st.number, st.fill(d, typed, shortened(st.phrase, args)), st.weight})
 	}
 	d.aboutJob(s, add)
-	for _, st := range slices.Concat([]statement{whoDecides, limitsAreTheUsers, notLookedAt}, layoutOnly[sub]) {
+	for _, st := range slices.Concat([]statement{whoDecides, limitsAreTheUsers, notLookedAt}, s.layoutOnly()) {
 		add(st, quantity.Unit{})
 	}
 	all = d.meansOnRows(s, all)
@@ -69,7 +69,7 @@ func shortened(p phrase, args []arrest.Arg) []arrest.Arg {
 }
 
 // namedByUser are the arguments of statements that a user has typed freely.
-var namedByUser = []string{"document", "part", "parts"}
+var namedByUser = []string{"document", "part", "parts", "position", "obstacle"}
 
 // aboutJob adds the statements that this job calls for.
 func (d display) aboutJob(s *Sheet, add func(statement, quantity.Unit, ...arrest.Arg)) {
@@ -92,7 +92,7 @@ func (d display) aboutJob(s *Sheet, add func(statement, quantity.Unit, ...arrest
 		}
 		add(setOutside, noUnit, arrest.Text(strings.Join(keys, ", ")))
 	}
-	for _, w := range res.Warnings {
+	for _, w := range joined(res.Warnings) {
 		if w.ID != arrest.ExampleValues && w.ID != arrest.MeansAreNotPeaks && !derived(w, res.Warnings) {
 			tell(w.ID, typedUnit(res, w), d.arguments(s, w)...)
 		}
@@ -104,7 +104,7 @@ func (d display) aboutJob(s *Sheet, add func(statement, quantity.Unit, ...arrest
 	if open := openInputs(res.Inputs); len(open) > 0 {
 		add(measureFirst, noUnit, arrest.Text(strconv.Itoa(len(open))), arrest.Text(strconv.Itoa(len(res.Inputs))))
 	}
-	if res.Persons > 0 && !isRescue(s.File.Document.Rescue) {
+	if res.Persons > 0 && !IsRescue(s.File.Document.Rescue) {
 		add(noRescueEntered, noUnit)
 	}
 	if has.floor {
@@ -125,6 +125,11 @@ func (d display) arguments(s *Sheet, w arrest.Warning) []arrest.Arg {
 		return []arrest.Arg{shareLeft(w.Args[0]), shareLeft(w.Args[1])}
 	case arrest.NoAllowanceEntered:
 		return publishedArguments()
+	case arrest.LayoutRestrained, arrest.LayoutRestrainedInPart, arrest.LayoutNothingBelow, arrest.LayoutNoClearance,
+		arrest.LayoutFeetStanding, arrest.LayoutWidthUnknown:
+		return append(slices.Clone(w.Args), arrest.Text(string(w.ID)))
+	case arrest.LayoutStrikes, arrest.LayoutDatumsApart:
+		return layoutArguments(w)
 	case arrest.EstimatesDisjoint:
 		return append(slices.Clone(w.Args), boundOf(s.Result, w.Args[0], w.Args[1], w.Args[2]), boundOf(s.Result, w.Args[0], w.Args[3], w.Args[4]))
 	}

@@ -64,7 +64,7 @@ func (b *builder) columnTitle(c *study.Column) string {
 	text := b.title(c.Quantity)
 	switch c.Evidence {
 	case arrest.Shape:
-		text += ", " + b.say(shapeRemark, c.From)
+		text += ", " + b.d.assumed(c.From)
 	case arrest.Rated:
 		text += ", " + b.say(byDocument, c.From)
 	case arrest.Modelled:

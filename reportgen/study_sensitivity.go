@@ -15,28 +15,43 @@ import (
 )
 
 // rankings says of every row which inputs move it, in the order of the findings;
-// nil for a row that nothing moves. ok is false for a job with a connector path:
-// each figure would take a run of the model, and the sheet many thousand.
+// nil for a row that nothing moves. ok is false for a job with a connector path
+// or a layout: each figure would take a run of the model, or a search for the
+// worst of the positions, and the sheet many thousand.
 func (b *builder) rankings() (list []*study.Ranking, ok bool) {
-	if b.s.File.Job.Point.Path != nil {
+	if b.s.takesLonger() {
 		return nil, false
 	}
 	return rank(b.s), true
 }
 
-// rank ranks the inputs of every row, the rows side by side.
+// takesLonger reports whether what to measure first is left to its own command.
+func (s *Sheet) takesLonger() bool {
+	return s.File.Job.Point.Path != nil || s.hasLayout()
+}
+
+// rank ranks the inputs of every row; the rows side by side where each takes
+// long, for else to start beside each other takes longer than the work.
 func rank(s *Sheet) []*study.Ranking {
 	list := make([]*study.Ranking, len(s.Assessment.Findings))
 	if !slices.ContainsFunc(s.File.Job.Inputs, unsettledOrWide) {
 		return list
 	}
+	of := func(i int, n *study.Ranker) {
+		if r, err := n.Rank(&s.Assessment.Findings[i]); err == nil && moves(r) {
+			list[i] = r
+		}
+	}
+	if !s.takesLonger() {
+		n := study.NewRanker(&s.File.Job, s.Result)
+		for i := range list {
+			of(i, n)
+		}
+		return list
+	}
 	var all sync.WaitGroup
 	for i := range list {
-		all.Go(func() {
-			if r, err := study.Rank(&s.File.Job, s.File.Sets, i); err == nil && moves(r) {
-				list[i] = r
-			}
-		})
+		all.Go(func() { of(i, study.NewRanker(&s.File.Job, s.Result)) })
 	}
 	all.Wait()
 	return list
@@ -61,7 +76,7 @@ func (b *builder) sensitivitySections() []Section {
 	list, ok := b.rankings()
 	switch {
 	case !ok && b.anyBand():
-		return []Section{{measureHeading, []Block{{Text: pathTakesLonger}}}}
+		return []Section{{measureHeading, []Block{{Text: b.whyLonger()}}}}
 	case !ok:
 		return nil
 	}
@@ -70,6 +85,14 @@ func (b *builder) sensitivitySections() []Section {
 		return nil
 	}
 	return []Section{{measureHeading, append([]Block{{Text: measureIntro}}, blocks...)}}
+}
+
+// whyLonger says why what to measure first is not on the sheet.
+func (b *builder) whyLonger() string {
+	if b.plan() == nil {
+		return layoutTakesLonger
+	}
+	return pathTakesLonger
 }
 
 // measuringMethod is the method behind what to measure first.

@@ -5,7 +5,7 @@ import (
 	"io"
 	"strings"
 
-	"github.com/olekukonko/tablewriter"
+	"github.com/olekukonko/tablewriter/renderer"
 )
 
 // TextOptions say what the place can show that a text report goes to.
@@ -39,8 +39,8 @@ type page struct {
 	ascii bool
 	paint paint
 
-	tables *tablewriter.Table // nil before the first table
-	tabled bytes.Buffer       // what it has written
+	tables *renderer.Blueprint // nil before the first table
+	tabled bytes.Buffer        // what it has written
 }
 
 // gap leaves a blank line, except at the very top.
@@ -107,7 +107,7 @@ func (p *page) block(b *Block) {
 		p.table(b.Table)
 	}
 	if b.Figure != nil {
-		p.out.Write(b.Figure.Characters(figureCells(p.ascii)))
+		p.out.Write(b.Figure.Characters(figureCells(b.Figure, p.ascii)))
 	}
 }
 

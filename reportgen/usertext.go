@@ -50,9 +50,9 @@ func (b *builder) longTexts() []Section {
 	return []Section{{longTextsHeading, []Block{{Lines: list}}}}
 }
 
-// isRescue reports whether a text names a rescue method: that nobody has one,
+// IsRescue reports whether a text names a rescue method: that nobody has one,
 // or not yet, does not.
-func isRescue(text string) bool {
+func IsRescue(text string) bool {
 	if !strings.ContainsFunc(text, unicode.IsLetter) {
 		return false
 	}

@@ -46,7 +46,7 @@ func TestNoRescueMethod(t *testing.T) {
 		"not yet": false, "To be  decided.": false, "--": false, "": false, "1": false,
 		"none needed below 2 m: ladder team stands by": true, "ladder team": true, "no. 3 crane and two trained persons": true, "梯": true,
 	} {
-		if isRescue(text) != is {
+		if IsRescue(text) != is {
 			t.Errorf("%q: %t", text, !is)
 		}
 		s := fixture(t)

@@ -136,7 +136,25 @@ var ofWarnings = map[arrest.WarningID]statement{
 		"The model exceeds what \"{document}\" promises: {quantity} at most {rated} by the document, up to {modelled} in the model. Find out which of them describes this device."}},
 	arrest.LedgersClose: {"S-44", quiet, phrase{[]string{"momentum", "energy"},
 		"In the model a share of {momentum} of the momentum and of {energy} of the energy is not accounted for. That measures the arithmetic, not whether the model is like the real stop."}},
-	arrest.MeansAreNotPeaks: meansAreNotPeaks,
+	arrest.LayoutRestrained:       layoutRestrained,
+	arrest.LayoutRestrainedInPart: layoutRestrained,
+	arrest.LayoutEdge:             layoutEdge,
+	arrest.LayoutEdgeUnrated:      layoutEdgeUnrated,
+	arrest.LayoutAnchorLow:        layoutAnchorLow,
+	arrest.LayoutOutOfPlane:       layoutOutOfPlane,
+	arrest.LayoutIntoFace:         layoutIntoFace,
+	arrest.LayoutStrikes:          layoutStrikes,
+	arrest.LayoutStrikesFalling:   layoutStrikesFalling,
+	arrest.LayoutStrikeForce:      layoutStrikeForce,
+	arrest.LayoutNothingBelow:     roomUnknown,
+	arrest.LayoutNoClearance:      roomUnknown,
+	arrest.LayoutItemsMissing:     layoutItemsMissing,
+	arrest.LayoutDatumsApart:      layoutDatumsApart,
+	arrest.LayoutFeetStanding:     bodySizeUnknown,
+	arrest.LayoutWidthUnknown:     bodySizeUnknown,
+	arrest.LayoutLaterSwing:       layoutLaterSwing,
+	arrest.LayoutInextensible:     layoutInextensible,
+	arrest.MeansAreNotPeaks:       meansAreNotPeaks,
 	arrest.NoMiddle: {"S-33", quiet, phrase{[]string{"keys"},
 		"Entered as ranges: {keys}. A range has no middle figure, and none was made up; results stand at both ends."}},
 }
@@ -164,6 +182,9 @@ var reasons = map[limits.ReasonID]phrase{
 	limits.NoAllowance:          {nil, "the figure of the model needs the user's own allowance for its error (model.allowance), and none is entered"},
 	limits.DeviceExhausted:      {nil, "somewhere in the entries a device is exhausted"},
 	limits.BeyondModel:          {nil, "somewhere in the entries a part is loaded beyond what is known of it, or the stop is a blow on something rigid"},
+	limits.EdgeContact:          edgeContact,
+	limits.BodyStrikes:          bodyStrikes,
+	limits.PlaceUnknown:         placeUnknown,
 	limits.NotComputed:          {nil, "nothing entered gives this figure"},
 }
 
@@ -210,7 +231,7 @@ var (
 
 	idArguments = map[string]map[string]string{
 		"why": openWords, "evidence A": evidenceWords, "evidence B": evidenceWords, "bound A": namedEnd, "bound B": namedEnd,
-		"condition": conditionWords, "reach": reachWords,
+		"condition": conditionWords, "reach": reachWords, "evidence": evidenceWords, "extent": extentWords, "room": roomWords, "size": sizeWords,
 	}
 )
 

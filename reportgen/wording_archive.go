@@ -44,7 +44,7 @@ var ArchiveWords = struct {
 	SameIsNotRight, NoSignature, LaterLimits, RowsAreNotSheets, NarrowerBand, TouchedFiles Sentence
 
 	// What a reproduction came to.
-	SameDigits, SameFiguresOnly, Differs, NotRead, NotAnArchive, ResultUnreadable Sentence
+	SameDigits, SameFiguresOnly, Differs, NotRead, NotAnArchive, ResultUnreadable, ArchivesCounted Sentence
 
 	// Why something can differ, by the id of the cause.
 	Causes map[string]Sentence
@@ -53,10 +53,10 @@ var ArchiveWords = struct {
 	TextDiffers, OtherVersion, OneVersion, CountLine, JobLine, NothingDiffers, AgainLine, SetLine, KeepDigest Sentence
 
 	// What can be said of an input in a comparison.
-	Narrower, InsidePlan, BeyondPlan, AcrossPlan, NowOpen, NowSettled, OnlyA, OnlyB Sentence
+	Narrower, InsidePlan, BeyondPlan, AcrossPlan, NowOpen, NowSettled, OnlyA, OnlyB, LowBy, HighBy Sentence
 
 	// The register.
-	JobsCounted, BrokenCounted, ChangesCounted, Worse, Grew, OpenOf, LeftOut, NothingLeftOut, RescueLine, NoRescue, CheckerLine, CheckerIsPreparer, NoChecker, ReviewLine, MoreFaults, WasThere, WorstLine, NoLimits, ExampleLine Sentence
+	JobsCounted, ChangesCounted, Grew, OpenOf, LeftOut, RescueLine, RescueIsNone, RescueLost, WithoutRescue, FileDigest, ResultsDigest, NoRescue, CheckerLine, CheckerIsPreparer, NoChecker, ReviewLine, MoreFaults, WorstLine, NoLimits, ExampleLine Sentence
 }{
 	SameIsNotRight:   Sentence{sameIsNotRight},
 	NoSignature:      Sentence{noSignature},
@@ -82,16 +82,19 @@ var ArchiveWords = struct {
 		"no_cause":       sentence("No reason is known: files and versions are those of then. Report it as a wrong number, as SAFETY.md says."),
 	},
 
-	TextDiffers:    sentence("{file}: {lines} lines differ, the first is line {line}", "file", "lines", "line"),
-	OtherVersion:   sentence("{archived} then, {now} now", "archived", "now"),
-	OneVersion:     sentence("{version}, then and now", "version"),
-	CountLine:      sentence("{exceeded} exceeded, {undecided} undecided, {not compared} not compared, {within} within as entered", "exceeded", "undecided", "not compared", "within"),
-	JobLine:        sentence("{title}; reference {reference}, revision {revision}", "title", "reference", "revision"),
-	NothingDiffers: sentence("Nothing differs in inputs, figures and outcomes."),
-	AgainLine:      sentence("{n} of {all} rows come to another outcome, or stand on one side only.", "n", "all"),
-	KeepDigest:     sentence("The digest of {file} stands for the archive as a whole. Write it down somewhere else: the archive is not signed.", "file"),
-	SetLine:        sentence("{title} ({name})", "title", "name"),
+	TextDiffers:     sentence("{file}: lines that differ: {lines}, the first is line {line}", "file", "lines", "line"),
+	OtherVersion:    sentence("{archived} then, {now} now", "archived", "now"),
+	OneVersion:      sentence("{version}, then and now", "version"),
+	CountLine:       sentence("{exceeded} exceeded, {undecided} undecided, {not compared} not compared, {within} within as entered", "exceeded", "undecided", "not compared", "within"),
+	JobLine:         sentence("{title}; reference {reference}, revision {revision}", "title", "reference", "revision"),
+	ArchivesCounted: sentence("Archives: {all}. The same: {same}; something differs: {differ}; refused or not read: {refused}.", "all", "same", "differ", "refused"),
+	NothingDiffers:  sentence("Nothing differs in inputs, figures and outcomes."),
+	AgainLine:       sentence("{n} of {all} rows come to another outcome, or stand on one side only.", "n", "all"),
+	KeepDigest:      sentence("The digest of {file} stands for the archive as a whole. Write it down somewhere else: the archive is not signed.", "file"),
+	SetLine:         sentence("{title} ({name})", "title", "name"),
 
+	LowBy:      sentence("low {by}", "by"),
+	HighBy:     sentence("high {by}", "by"),
 	Narrower:   sentence("narrower, and the source is the same"),
 	InsidePlan: sentence("as found: inside what was planned"),
 	BeyondPlan: sentence("as found: outside what was planned"),
@@ -101,20 +104,24 @@ var ArchiveWords = struct {
 	OnlyA:      sentence("in A only"),
 	OnlyB:      sentence("in B only"),
 
-	JobsCounted:       sentence("{jobs} jobs: {exceeded} with something exceeded, {settled} with every limit within as entered and nothing left out, {rest} otherwise, {broken} refused or not read.", "jobs", "exceeded", "settled", "rest", "broken"),
+	JobsCounted:       sentence("Jobs: {jobs}. With something exceeded: {exceeded}; with every limit within as entered and nothing left out: {settled}; otherwise: {rest}; refused or not read: {broken}.", "jobs", "exceeded", "settled", "rest", "broken"),
 	ChangesCounted:    sentence("Against the earlier register: {new} new, {changed} changed, {worse} worse, {gone} gone, {same} as before.", "new", "changed", "worse", "gone", "same"),
 	Grew:              sentence("{what} {is}, was {was}", "what", "is", "was"),
 	OpenOf:            sentence("open inputs: {open} of {all}", "open", "all"),
 	LeftOut:           sentence("no limit on: {subjects}", "subjects"),
-	NothingLeftOut:    sentence("no limit left out"),
 	RescueLine:        sentence("rescue: {text}", "text"),
+	RescueIsNone:      sentence("rescue: \"{text}\", which is no method", "text"),
+	RescueLost:        sentence("no rescue method, was named"),
+	WithoutRescue:     sentence("Without a rescue method: {n}.", "n"),
+	FileDigest:        sentence("file {digest}", "digest"),
+	ResultsDigest:     sentence("results {digest}", "digest"),
 	NoRescue:          sentence("rescue: nothing entered"),
 	CheckerLine:       sentence("checker: {name}", "name"),
 	CheckerIsPreparer: sentence("checker: is the preparer"),
 	NoChecker:         sentence("checker: nobody named"),
 	ReviewLine:        sentence("review: {date}", "date"),
 	MoreFaults:        sentence("and {n} more", "n"),
-	WorstLine:         sentence("Worst: {quantity}, {demand}; limit {limit}", "quantity", "demand", "limit"),
+	WorstLine:         sentence("Worst, {outcome}: {quantity}, {demand}; limit {limit}", "outcome", "quantity", "demand", "limit"),
 	NoLimits:          sentence("no limit was entered"),
 	ExampleLine:       sentence("EXAMPLE VALUES"),
 }
@@ -132,7 +139,9 @@ const (
 	TextsHeading, AgainHeading, RefusedHeading   = "Reports that differ", "Held against later limits", "Why it is refused"
 	InputsDifferHeading, EstimatesDifferHeading  = "Inputs that differ", "Figures that differ"
 	RowsDifferHeading, LeftOutHeading            = "Rows that differ", "Limits that nobody entered"
+	DocumentDiffersHeading                       = "Texts that differ"
 	RegisterHeading                              = "Register of jobs"
+	InArchiveLabel, AnewLabel                    = "in the archive", "made anew"
 	WhatHead, ArchivedHead, NowHead, ByHead      = "what", "archived", "now", "by"
 	LaterHead, SaysHead, DigestThenHead          = "later limit", "which says", "digest"
 	NumberHead, JobHead, WorstHead               = "no", "job", "limits, and the worst one"

@@ -53,7 +53,7 @@ var explainLast = texts{
 // byImportance is the order in which the reasons of a row are to be looked at:
 // what is wrong, what is missing, what is not settled, what is about the limit.
 var byImportance = []limits.ReasonID{
-	limits.DeviceExhausted, limits.BeyondModel, limits.Contradicted, limits.AlsoBeyond,
+	limits.DeviceExhausted, limits.BodyStrikes, limits.EdgeContact, limits.BeyondModel, limits.Contradicted, limits.AlsoBeyond, limits.PlaceUnknown,
 	limits.ConditionUnfulfilled, limits.ConditionStraddles, limits.OutsideRating, limits.SeveralPersons,
 	limits.NotComputed, limits.OnlyFloor, limits.OnlyCeiling, limits.Straddles, limits.FloorReaches,
 	limits.NoAllowance, limits.OpenInput, limits.AssumedShape, limits.PairDiffers,
@@ -64,6 +64,9 @@ var byImportance = []limits.ReasonID{
 // argument that the reason has not, it is what to enter.
 var settledWhen = map[limits.ReasonID]phrase{
 	limits.DeviceExhausted:      {nil, "Change the system: less free fall, less mass, or a device with more travel or a greater force within its document. A row is never within while a device is used up anywhere in the entries; narrow them by measuring if it is used up only at their end."},
+	limits.BodyStrikes:          {nil, "Bring the obstacle out of the way of fall and swing, bring the anchor nearer to above the place of work, or shorten the connector. Narrow the entries by measuring if the body comes to it only at their end."},
+	limits.EdgeContact:          {nil, "Not by a figure: move the anchor or shorten the connector, so that it comes to no edge. A document that rates a part for the edge is named on the sheet and leaves the row open all the same, as what the edge does to the forces is not worked out."},
+	limits.PlaceUnknown:         {nil, "Measure anchor, length and positions more closely, so that over all of the entries the connector either ends before the edge or lets a body over it; or choose an anchor from which the swing stays in a plane."},
 	limits.BeyondModel:          {nil, "Enter loading points up to the forces that occur, or a part that gives way, so that the model stays within what is known."},
 	limits.Contradicted:         {[]string{"evidence A", "evidence B"}, "Find out which is wrong, the figure {evidence A} or the one {evidence B}, and mend the entry behind it. Neither is left out by the program."},
 	limits.AlsoBeyond:           {nil, "Do not look for a way round the condition: change the system first."},
@@ -104,6 +107,13 @@ var waysTo = map[arrest.Quantity]ways{
 	arrest.StrengthOverArrestForce: {other: anchorWay},
 	arrest.ClearanceLeft:           {other: clearanceWay},
 	arrest.ClearanceNeeded:         {other: clearanceWay},
+	arrest.TotalFallDistance:       {other: clearanceWay},
+	arrest.OffsetAngle:             {other: layoutWay},
+	arrest.SwingAngle:              {other: layoutWay},
+	arrest.SwingDrop:               {other: layoutWay},
+	arrest.RestraintReach:          {other: layoutWay},
+	arrest.SwingSpeed:              {other: swingWay},
+	arrest.SpeedAtObstacle:         {other: swingWay},
 	arrest.FallFactor:              {other: "enter the connector path with the length of its parts"},
 	arrest.StoppingForce:           {other: measureLoad},
 	arrest.MeanDeceleration:        {other: measureLoad},
@@ -117,7 +127,9 @@ const (
 	travelRating    = "enter from its document a rating with its travel"
 	pathWay         = "enter the connector path with an allowance of your own"
 	anchorWay       = "enter the anchor with a known rating; or name under [[elsewhere]] the document that handles it"
-	clearanceWay    = "enter the clearance item by item; or name under [[elsewhere]] the document that handles it"
+	layoutWay       = "enter the layout: anchor, edge, D-ring, connector and positions; or name under [[elsewhere]] the document that handles it"
+	swingWay        = "enter the layout and the connector path, with an allowance of your own; or name under [[elsewhere]] the document that handles it"
+	clearanceWay    = "enter the layout, what lies below, and the clearance item by item; or name under [[elsewhere]] the document that handles it"
 	otherWay        = "enter what this figure is worked out from; or name under [[elsewhere]] the document that handles it"
 	orWord          = ", or "
 	nothingMissing  = "nothing of this kind is missing: mend what is entered, by the other lines of this list"

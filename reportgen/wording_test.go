@@ -138,12 +138,21 @@ var warningArguments = map[arrest.WarningID]int{
 	arrest.PathExhausted: 3, arrest.PathRigid: 0, arrest.PathBeyondCurve: 1, arrest.StaticStretchOnly: 1,
 	arrest.SeveralAbsorbers: 1, arrest.AbsorberOnRetractable: 1, arrest.NothingAbsorbs: 1, arrest.NoAllowanceEntered: 0,
 	arrest.RatedAgainstModel: 4, arrest.LedgersClose: 2, arrest.NoMiddle: 1, arrest.PathExhaustedInAllowance: 3,
+	arrest.LayoutRestrained: 1, arrest.LayoutRestrainedInPart: 1, arrest.LayoutEdge: 2,
+	arrest.LayoutEdgeUnrated: 1, arrest.LayoutAnchorLow: 2, arrest.LayoutOutOfPlane: 1, arrest.LayoutIntoFace: 1,
+	arrest.LayoutStrikes: 4, arrest.LayoutStrikesFalling: 3, arrest.LayoutStrikeForce: 3, arrest.LayoutNothingBelow: 0,
+	arrest.LayoutNoClearance: 0, arrest.LayoutItemsMissing: 3, arrest.LayoutDatumsApart: 2, arrest.LayoutFeetStanding: 0,
+	arrest.LayoutWidthUnknown: 0, arrest.LayoutLaterSwing: 2, arrest.LayoutInextensible: 0,
 }
 
 // addedArguments counts what the report itself puts into the sentence of a
-// warning: what its comparison with published drops came to, and which ends of
-// two figures contradict each other.
-var addedArguments = map[arrest.WarningID]int{arrest.NoAllowanceEntered: 4, arrest.EstimatesDisjoint: 2}
+// warning: what its comparison with published drops came to, which ends of two
+// figures contradict each other, and what a warning says that shares its
+// statement with another.
+var addedArguments = map[arrest.WarningID]int{
+	arrest.NoAllowanceEntered: 4, arrest.EstimatesDisjoint: 2, arrest.LayoutRestrained: 1, arrest.LayoutRestrainedInPart: 1,
+	arrest.LayoutNothingBelow: 1, arrest.LayoutNoClearance: 1, arrest.LayoutFeetStanding: 1, arrest.LayoutWidthUnknown: 1,
+}
 
 func TestEveryWarningHasWords(t *testing.T) {
 	for _, id := range arrest.WarningIDs() {
@@ -164,6 +173,7 @@ var reasonArguments = map[limits.ReasonID]int{
 	limits.ExampleValues: 0, limits.NotChecked: 0, limits.Superseded: 1, limits.IsProductTest: 0,
 	limits.ConditionUnfulfilled: 3, limits.ConditionStraddles: 4, limits.AlsoBeyond: 0, limits.NotComputed: 0,
 	limits.NoAllowance: 0, limits.DeviceExhausted: 0, limits.BeyondModel: 0,
+	limits.EdgeContact: 0, limits.BodyStrikes: 0, limits.PlaceUnknown: 0,
 }
 
 func TestEveryReasonHasWords(t *testing.T) {

@@ -22,32 +22,40 @@ func width(s string) int {
 	return n
 }
 
+// runeWidth asks the library for what is beyond Latin-1, whose letters and
+// signs are all one wide but for the hyphen that is not seen.
 func runeWidth(r rune) int {
-	if r < 0x7f {
+	if r < 0x7f || noBreakRune <= r && r <= 0xff && r != softHyphen {
 		return 1
 	}
 	return twwidth.WidthWithOptions(string(r), twwidth.Options{})
 }
 
+const softHyphen = '\u00ad'
+
 // wrap breaks s into lines of at most columns, between words where it can and
 // within a word that is longer than a line. It returns at least one line.
 func wrap(s string, columns int) []string {
 	var lines []string
-	line, used := "", 0
-	for _, word := range words(s) {
+	var room [160]byte
+	line, used := room[:0], 0
+	for word := range strings.FieldsFuncSeq(s, isBlank) {
 		w := width(word)
-		if line != "" && used+1+w <= columns {
-			line, used = line+" "+word, used+1+w
+		if len(line) > 0 && used+1+w <= columns {
+			line, used = append(append(line, ' '), word...), used+1+w
 			continue
 		}
-		if line != "" {
-			lines = append(lines, line)
+		if len(line) > 0 {
+			lines = append(lines, string(line))
 		}
-		var full []string
-		full, line = split(word, columns)
-		lines, used = append(lines, full...), width(line)
+		if w > columns {
+			var full []string
+			full, word = split(word, columns)
+			lines, w = append(lines, full...), width(word)
+		}
+		line, used = append(line[:0], word...), w
 	}
-	return append(lines, line)
+	return append(lines, string(line))
 }
 
 // noBreak is a blank that keeps a figure and its unit on one line. It is
@@ -57,8 +65,10 @@ const (
 	noBreakRune = '\u00a0'
 )
 
+func isBlank(r rune) bool { return r == ' ' }
+
 func words(s string) []string {
-	return strings.FieldsFunc(s, func(r rune) bool { return r == ' ' })
+	return strings.FieldsFunc(s, isBlank)
 }
 
 // split cuts a word that is longer than a line into full lines of at most

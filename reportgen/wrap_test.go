@@ -49,3 +49,15 @@ func TestWrapKeepsEverything(t *testing.T) {
 		}
 	})
 }
+
+// What is taken to be one wide without asking is so.
+func TestWidthOfLatinLetters(t *testing.T) {
+	for r := rune(' '); r <= 0x17f; r++ {
+		if r >= 0x7f && r < noBreakRune {
+			continue // control characters are escaped before
+		}
+		if want := twwidth.WidthWithOptions(string(r), twwidth.Options{}); runeWidth(r) != want {
+			t.Errorf("%q is %d wide, want %d", r, runeWidth(r), want)
+		}
+	}
+}

@@ -24,12 +24,17 @@ report says so, and the figure is open: it has lost its source. --explain
 prints, in place of the report, what keeps one row from being settled and what
 would settle it. --series writes the modelled arrest of a job with a connector
 path as CSV: time, force, speed and travel.
+
+--figure draws one job: elevation and plan of a layout to scale, force-time and
+force-travel of a modelled arrest. With =FILE behind the kind it is a new SVG
+file, else it stands in characters behind the report.
 `
 
 // checkFlags are the flags of check that are not those of a report.
 type checkFlags struct {
 	limits, sets []string
 	explain      string
+	figures      figureList
 }
 
 func newCheck(o *outcome, in surroundings) *cobra.Command {
@@ -45,6 +50,7 @@ func newCheck(o *outcome, in surroundings) *cobra.Command {
   arrestcheck check --set 'worker.mass=104 kg ± 1 kg' job.toml
   arrestcheck check --explain peak-on-body job.toml
   arrestcheck check --series arrest.csv path.toml
+  arrestcheck check --figure elevation=e.svg --figure plan=p.svg layout.toml
   generate-job | arrestcheck check -`,
 		DisableFlagsInUseLine: true,
 		Args:                  filesAndStdin,
@@ -54,6 +60,7 @@ func newCheck(o *outcome, in surroundings) *cobra.Command {
 	}
 	flags.add(cmd)
 	flags.file(seriesFlag, "write the modelled arrest to this new `FILE`")
+	more.figures.add(cmd, &flags)
 	cmd.Flags().StringArrayVar(&more.limits, "limits", nil, "a limit `FILE` for every job; repeatable")
 	cmd.Flags().StringArrayVar(&more.sets, setFlag, nil, "put `KEY=VALUE` into every job; repeatable")
 	cmd.Flags().StringVar(&more.explain, explainFlag, "", "print what would settle the row of `LIMIT`")
@@ -62,7 +69,8 @@ func newCheck(o *outcome, in surroundings) *cobra.Command {
 
 // check reads everything, works everything out and leaves the results in o.
 func check(cmd *cobra.Command, names []string, flags *reportFlags, more *checkFlags, o *outcome, in surroundings) error {
-	if err := errors.Join(flags.conflict(), more.conflict(cmd, flags, names)); err != nil {
+	drawn := more.figures.parse(flags, cmd.Flags().Changed(explainFlag), names)
+	if err := errors.Join(drawn, flags.conflict(), more.conflict(cmd, flags, names)); err != nil {
 		return err
 	}
 	overrides, err := overrides(more.sets)
@@ -84,6 +92,9 @@ func check(cmd *cobra.Command, names []string, flags *reportFlags, more *checkFl
 		}
 		o.deliver(to, data)
 		o.remarks = append(o.remarks, remark)
+	}
+	if err := more.figures.draw(&sheets[0], flags.unitChoice(), o); err != nil {
+		return err
 	}
 	result, err := more.result(cmd, sheets, flags, in)
 	o.deliver(flags.out(), result)

@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"io/fs"
+	"slices"
 	"strings"
 
 	"github.com/spf13/cobra"
@@ -16,7 +17,9 @@ const outFlag = "out"
 // --out first, and --force.
 type fileFlags struct {
 	flags *pflag.FlagSet
-	named []string // the flags that name a file
+	named []string       // the flags that name a file
+	lists []string       // the flags that name several
+	more  []*destination // what these name, known once they are parsed
 	force bool
 }
 
@@ -30,13 +33,26 @@ func (f *fileFlags) add(cmd *cobra.Command) {
 func (f *fileFlags) file(name, usage string) {
 	f.flags.String(name, "", usage)
 	f.named = append(f.named, name)
+	f.usage()
+}
+
+// repeated tells of a flag that names several files to write.
+func (f *fileFlags) repeated(name string) {
+	f.lists = append(f.lists, name)
+	f.usage()
+}
+
+// usage lists the flags in the help of --force.
+func (f *fileFlags) usage() {
 	if force := f.flags.Lookup("force"); force != nil {
 		force.Usage = "let " + f.list(", ") + " replace a file"
 	}
 }
 
 // list is the flags that name a file.
-func (f *fileFlags) list(joint string) string { return "--" + strings.Join(f.named, joint+"--") }
+func (f *fileFlags) list(joint string) string {
+	return "--" + strings.Join(slices.Concat(f.named, f.lists), joint+"--")
+}
 
 // destination returns the file that the flag names, nil where it is not given.
 func (f *fileFlags) destination(name string) *destination {
@@ -57,7 +73,7 @@ func (f *fileFlags) destinations() []*destination {
 			all = append(all, d)
 		}
 	}
-	return all
+	return append(all, f.more...)
 }
 
 // conflict refuses flags that contradict each other.

@@ -9,10 +9,10 @@ import (
 	"arrestcheck/arrest/jobfile"
 )
 
-const newLong = `Prints a commented file to begin with: a job for a fall, for a moving load or
-for a connector path, or a set of limits. Every key is in it, with what it
-holds and an example. All values are EXAMPLE VALUES and no limit is within
-until you have put in your own and taken out the line example = true.
+const newLong = `Prints a commented file to begin with: a job for a fall, for a moving load, for
+a connector path or for a layout, or a set of limits. Every key is in it, with
+what it holds and an example. All values are EXAMPLE VALUES and no limit is
+within until you have put in your own and taken out the line example = true.
 
 With limits, --example NAME prints the figures of published documents in place
 of the pattern, each with its clause and how it was read. Hold them against the

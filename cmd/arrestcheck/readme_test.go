@@ -17,8 +17,8 @@ var update = flag.Bool("update", false, "write what the program prints now into 
 func TestReadmeIsTrue(t *testing.T) {
 	readme := readText(t, "../../README.md")
 	toml, shown := blocks(readme, "toml"), blocks(readme, "text")
-	if len(toml) != 3 || len(shown) != 4 {
-		t.Fatalf("%d toml and %d text blocks, want 3 and 4", len(toml), len(shown))
+	if len(toml) != 4 || len(shown) != 4 {
+		t.Fatalf("%d toml and %d text blocks, want 4 and 4", len(toml), len(shown))
 	}
 	dir := t.TempDir()
 	job := filepath.Join(dir, "job.toml")
@@ -49,6 +49,18 @@ func TestReadmeIsTrue(t *testing.T) {
 	code, stdout, _ = try("check", "--series", series, path)
 	if code != int(exitExceeded) || !strings.Contains(stdout, "absorber") || !strings.HasPrefix(readText(t, series), seriesHeader) {
 		t.Errorf("with a connector path: exit code %d", code)
+	}
+
+	// So is the layout, whose free fall fits the one typed. The least of its heights
+	// leave the least fall, 1.45 - 1.62 + sqrt(1.8^2 - 0.4^2) = 1.58 m, the greatest
+	// 1.55 - 1.58 + sqrt(1.8^2 - 0.2^2) = 1.76 m.
+	layout := filepath.Join(dir, "layout.toml")
+	writeText(t, layout, toml[0]+toml[3])
+	code, stdout, _ = try("check", "--units", "si", layout)
+	for _, want := range []string{"1.58 to 1.76 m", "Clearance by the entries", "stop.distance", "would do by the", `"slipway"`} {
+		if code != int(exitExceeded) || !strings.Contains(strings.ReplaceAll(stdout, "\u00a0", " "), want) {
+			t.Errorf("with a layout: exit code %d, no %q", code, want)
+		}
 	}
 	for line := range strings.Lines(shown[3]) {
 		if !strings.Contains(exitHelp, "  "+line) {

@@ -36,6 +36,7 @@ func (c *choice) Set(word string) error {
 type reportFlags struct {
 	format, units, color choice
 	ascii                bool
+	drawn                []string // kinds of figures that stand in the report
 	fileFlags
 }
 
@@ -70,7 +71,13 @@ func (f *reportFlags) render(sheets []reportgen.Sheet, in surroundings) ([]byte,
 			}
 			continue
 		}
-		if err := f.write(&b, reportgen.Build(&sheets[i], f.unitChoice()), in); err != nil {
+		r := reportgen.Build(&sheets[i], f.unitChoice())
+		for _, kind := range f.drawn {
+			if err := r.Draw(kind, &sheets[i], f.unitChoice()); err != nil {
+				return nil, noFigure(kind, &sheets[i], err)
+			}
+		}
+		if err := f.write(&b, r, in); err != nil {
 			return nil, err
 		}
 	}

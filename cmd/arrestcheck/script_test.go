@@ -23,6 +23,7 @@ var scriptsOf = map[string]int{
 	"compare":     1,
 	"completion":  1,
 	"demo":        3,
+	"drawing":     2,
 	"envelope":    1,
 	"fault":       2,
 	"figure":      8,

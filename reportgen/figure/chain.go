@@ -55,7 +55,7 @@ func (s *Scene) Chain(c Chain) {
 		}
 	}
 	s.chainTexts(&c, stops)
-	s.chainDatum(&c)
+	s.chainDatum(&c, !c.Level && c.Datum == slices.Min(stops))
 }
 
 // point returns the point at a place along the chain and a distance across it,
@@ -75,8 +75,9 @@ func (c *Chain) side() float64 {
 	return 1
 }
 
-// chainDatum writes the name of the datum on the side where no dimensions are.
-func (s *Scene) chainDatum(c *Chain) {
+// chainDatum writes the name of the datum: above an upright chain that begins
+// with it, else on the side where no dimensions are.
+func (s *Scene) chainDatum(c *Chain, first bool) {
 	at := c.point(c.Datum, -c.side()*chainTick)
 	spots := Around(at, 0.4)
 	if !c.Level {
@@ -86,6 +87,9 @@ func (s *Scene) chainDatum(c *Chain) {
 		}
 		on := c.point(c.Datum, 0)
 		spots = append([]Spot{{At: at, Anchor: anchor}}, spots...)
+		if first {
+			spots = append([]Spot{{At: c.point(c.Datum, -c.side()*3), Anchor: Start + End - anchor, Lift: Above, Gap: chainTick}}, spots...)
+		}
 		spots = append(spots, Spot{At: on, Anchor: Middle, Lift: Above, Lines: 1}, Spot{At: on, Anchor: Middle, Lift: Below, Lines: 1})
 	}
 	s.Text(Text{Text: c.Name, Rank: RankAxis, Spots: spots})

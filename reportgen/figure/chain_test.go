@@ -117,3 +117,28 @@ func TestChainWithoutEnd(t *testing.T) {
 	}()
 	NewScene("", 50).Chain(Chain{Parts: []Dimension{{End: math.NaN()}}})
 }
+
+// The name of the datum stands above an upright chain that goes down from it, and
+// beside one that has parts on both sides.
+func TestChainDatum(t *testing.T) {
+	for _, c := range []struct {
+		name  string
+		ends  []float64
+		above bool
+	}{{"down", []float64{50, 80}, true}, {"both ways", []float64{50, 20}, false}} {
+		s := NewScene("", 100)
+		chain := Chain{At: 60, Datum: 30, Name: "datum: here", Low: 30, High: 100}
+		for _, end := range c.ends {
+			chain.Parts = append(chain.Parts, Dimension{End: end, Text: "1 m"})
+		}
+		s.Chain(chain)
+		for _, p := range s.place(paper{}).placed {
+			if p.text != chain.Name {
+				continue
+			}
+			if above := p.box.Bottom < 30 && p.box.Right > 60; above != c.above {
+				t.Errorf("%s: the name of the datum is at %v", c.name, p.box)
+			}
+		}
+	}
+}

@@ -65,7 +65,7 @@ func anyLevel(t *rapid.T, name string) Level {
 func anyPlot(t *rapid.T) (*Plot, []string) {
 	p := &Plot{
 		Title: anyText(t, "title"), Desc: anyText(t, "desc"), Stamp: anyText(t, "stamp"), Statement: anyText(t, "statement"),
-		Notes: []string{anyText(t, "note")}, X: anyAxis(t, "x"), Y: anyAxis(t, "y"),
+		Notes: []string{anyText(t, "note")}, X: anyAxis(t, "x"), Y: anyAxis(t, "y"), Aside: rapid.Bool().Draw(t, "aside"),
 	}
 	labels := []string{p.Title, p.Stamp, p.Statement, p.Notes[0], p.X.label(), p.Y.label()}
 	for range rapid.IntRange(0, 4).Draw(t, "curves") {

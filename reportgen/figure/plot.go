@@ -22,6 +22,10 @@ type Plot struct {
 	Points   []Marked
 
 	Height float64 // of the drawing, mm; 0 is 95
+
+	// Aside puts the labels of Levels at the right of the frame, each at the end of
+	// a fine line: for levels that stand close together, or in the way of a curve.
+	Aside bool
 }
 
 // A Curve is a line through points. Where a figure is not finite, or not
@@ -80,8 +84,12 @@ func (p *Plot) Scene() (*Scene, error) {
 	}
 	f.regions(p.Regions)
 	f.axes()
-	for i := range p.Levels {
-		f.level(&p.Levels[i])
+	if p.Aside {
+		f.levelsAside(p.Levels)
+	} else {
+		for i := range p.Levels {
+			f.level(&p.Levels[i])
+		}
 	}
 	for i := range p.Uprights {
 		f.upright(&p.Uprights[i])
@@ -142,6 +150,11 @@ func (p *Plot) rightMargin() float64 {
 	for _, c := range p.Curves {
 		if c.Label != "" {
 			margin = max(margin, min(RoomFor(c.Label), 45)+2*cellWidth)
+		}
+	}
+	for _, l := range p.Levels {
+		if p.Aside {
+			margin = max(margin, min(RoomFor(l.Label), asideMost)+asideLeader+2*cellWidth)
 		}
 	}
 	return margin

@@ -217,6 +217,6 @@ func elevation(t testing.TB) *Scene {
 		Level: true, At: anchor.Y - 3.5, Datum: anchor.X, Far: true,
 		Parts: []Dimension{{v.At(offset, 0).X, "offset 1.20 m", v.At(offset, start).Y}},
 	})
-	s.ScaleBar(Point{8, 114}, v)
+	s.ScaleBar(Point{8, 114}, v, "m", 1)
 	return s
 }

@@ -90,15 +90,15 @@ func (s *Scene) Arrow(a, b Point, pen Pen) {
 	}
 }
 
-// ScaleBar adds a bar of a round length, at most 40 mm, with its figures in
-// metres and the scale, its left end at a point.
-func (s *Scene) ScaleBar(at Point, v View) {
+// ScaleBar adds a bar of a round length, at most 40 mm, with its figures in a
+// unit of so many metres, and the scale; its left end is at a point.
+func (s *Scene) ScaleBar(at Point, v View, unit string, metres float64) {
 	const longest = 40
-	st := step{1, int(math.Floor(math.Log10(longest*v.Denominator/1000))) - 1}
-	for v.Length(st.next().times(1)) <= longest {
+	st := step{1, int(math.Floor(math.Log10(longest*v.Denominator/1000/metres))) - 1}
+	for v.Length(st.next().times(1)*metres) <= longest {
 		st = st.next()
 	}
-	end := Point{at.X + v.Length(st.times(1)), at.Y}
+	end := Point{at.X + v.Length(st.times(1)*metres), at.Y}
 	mid := Point{(at.X + end.X) / 2, at.Y}
 	s.Line(at, end, Pen{Weight: Medium})
 	for _, p := range []Point{at, mid, end} {
@@ -108,6 +108,6 @@ func (s *Scene) ScaleBar(at Point, v View) {
 		s.Text(Text{Text: text, Rank: RankAxis, Spots: []Spot{{At: p, Anchor: Middle, Lift: Below}}})
 	}
 	below("0", at)
-	below(st.tick(1).Label+" m", end)
+	below(st.tick(1).Label+" "+unit, end)
 	s.Text(Text{Text: "scale " + v.Ratio(), Rank: RankAxis, Spots: []Spot{{At: end, Anchor: Start, Gap: 4}, {At: mid, Anchor: Middle, Lift: Above, Gap: 2}}})
 }

@@ -78,24 +78,30 @@ func TestArc(t *testing.T) {
 	}
 }
 
-// A bar at 1:50 that may be 40 mm long is 2 m; at 1:30 it is 1 m, 33.3 mm.
+// A bar at 1:50 that may be 40 mm long is 2 m; at 1:30 it is 1 m, 33.3 mm. A
+// foot is 0.3048 m: 5 ft at 1:50 are 30.48 mm.
 func TestScaleBar(t *testing.T) {
 	for _, c := range []struct {
 		wide   float64
-		metres string
+		unit   string
+		metres float64
+		figure string
 		length float64
-	}{{5, "2 m", 40}, {3, "1 m", 100. / 3}, {0.1, "0.02 m", 20}, {75, "20 m", 80. / 3}} {
+	}{
+		{5, "m", 1, "2 m", 40}, {3, "m", 1, "1 m", 100. / 3}, {0.1, "m", 1, "0.02 m", 20}, {75, "m", 1, "20 m", 80. / 3},
+		{5, "ft", 0.3048, "5 ft", 30.48},
+	} {
 		v, err := Fit(0, c.wide, 0, 0, Box{0, 0, 100, 100})
 		if err != nil {
 			t.Fatal(err)
 		}
 		s := NewScene("", 30)
-		s.ScaleBar(Point{10, 15}, v)
+		s.ScaleBar(Point{10, 15}, v, c.unit, c.metres)
 		bar := s.strokes[0].points
 		if got := bar[1].X - bar[0].X; math.Abs(got-c.length) > 0.002 {
 			t.Errorf("%s: the bar is %v mm, not %v", v.Ratio(), got, c.length)
 		}
-		if s.texts[1].Text != c.metres || s.texts[2].Text != "scale "+v.Ratio() {
+		if s.texts[1].Text != c.figure || s.texts[2].Text != "scale "+v.Ratio() {
 			t.Errorf("%s: %v", v.Ratio(), s.texts)
 		}
 	}
