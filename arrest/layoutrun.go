@@ -40,7 +40,9 @@ type Room struct {
 	Left   float64 // the least that is left to an obstacle; NaN where none is in the way
 	Lefts  rig.Lefts
 
-	below float64 // the room needed below the feet; where both datums are known, the greater
+	// Counts is the room below the feet that is held against what lies below: where
+	// both datums are known, the greater of their two sums.
+	Counts float64
 }
 
 // Inextensible stands in Estimate.From of what holds only if the connector
@@ -145,13 +147,13 @@ func (room *Room) sum(plan *ClearancePlan, r *LayoutRun) {
 	if s.Missing != 0 && s.Twice == 0 {
 		room.Floor, room.Needed = true, s.Present
 	}
-	room.below = room.Needed - below
+	room.Counts = room.Needed - below
 	for _, x := range [...]float64{room.Feet.Needed, room.Anchor.Needed - r.Layout.Anchor.Z} {
-		if x > room.below {
-			room.below = x // where the datums differ, the greater room counts
+		if x > room.Counts {
+			room.Counts = x // where the datums differ, the greater room counts
 		}
 	}
-	room.Lefts = r.Layout.Left(&r.Place, room.below)
+	room.Lefts = r.Layout.Left(&r.Place, room.Counts)
 	room.Left = nan
 	if room.Lefts.Count > 0 {
 		room.Left = room.Lefts.List[0].Left

@@ -114,7 +114,7 @@ func (n *layoutNotes) places(r *LayoutRun) {
 	}
 	for k, room := range [...]*Room{&r.Given, &r.Modelled} {
 		if room.Known {
-			n.need[k] = greater(n.need[k], room.below)
+			n.need[k] = greater(n.need[k], room.Counts)
 		}
 	}
 }

@@ -317,9 +317,9 @@ func (b *builder) leftRow(l *arrest.LayoutResult, c *clearing, left *rig.Left) R
 	if o.Moving {
 		name = b.say(movesToo, name)
 	}
-	needed, rest := b.room(c.room.Needed, quantity.Up), b.leftText(left.Left)
+	needed, rest := b.room(c.room.Counts+c.datumHeight(), quantity.Up), b.leftText(left.Left)
 	if c.room.Floor {
-		needed = boundWords[arrest.AtLeast] + " " + b.room(c.room.Needed, quantity.Down)
+		needed = boundWords[arrest.AtLeast] + " " + b.room(c.room.Counts+c.datumHeight(), quantity.Down)
 		rest = boundWords[arrest.AtMost] + " " + b.room(left.Left, quantity.Up)
 	}
 	return Row{Loud: !(left.Left > 0), Cells: []string{name, b.room(left.Room+c.datumHeight(), quantity.Down), needed, rest}}

@@ -67,6 +67,9 @@ func (f *drawnFall) dimensions() chain {
 		near := f.plan.Clearance.Datum == rig.BelowAnchor && (it == rig.ItemConnector || it == rig.ItemDeceleration)
 		c.add(f, f.itemWord(it), length, near)
 	}
+	if more := c.end() + f.room.Counts; !f.room.Floor && more > noise {
+		c.add(f, otherDatumPart, more, false)
+	}
 	f.left(&c)
 	if f.room.Floor {
 		c.notes = append(c.notes, f.say(missingNote, f.missing(sum.Missing)))

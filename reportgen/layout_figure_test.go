@@ -381,7 +381,7 @@ func TestElevationIsToScale(t *testing.T) {
 	}
 	mustHold(t, textOf(scene), "anchor (+3.00 m)", "D-ring at the start (+1.50 m)", "first pull (+1.40 m)", "at rest (+0.200 m)", "floor (-3.50 m)",
 		"datum: feet at the start", "free fall 0.100 m", "swing drop 0.400 m", "deceleration distance 0.800 m", "harness stretch 0.300 m", "margin 0.600 m",
-		"left 1.30 m to floor", "offset 1.20 m", "Offset angle 38.7 deg at the start, swing angle 36.9 deg at the first pull.")
+		"by the other datum more 0.100 m", "left 1.20 m to floor", "offset 1.20 m", "Offset angle 38.7 deg at the start, swing angle 36.9 deg at the first pull.")
 }
 
 // textOf returns all texts of a figure, one a line.

@@ -90,6 +90,9 @@ var drawnItems = map[rig.Item]string{
 	rig.ItemMargin:       "margin",
 }
 
+// otherDatumPart is what the sum from the other datum has more, which counts.
+const otherDatumPart = "by the other datum more"
+
 // Labels with figures.
 var (
 	atHeight      = phrase{[]string{"what", "height"}, "{what} ({height})"}
