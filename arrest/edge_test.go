@@ -143,3 +143,14 @@ func TestRoutesThatAgreeOverARange(t *testing.T) {
 		}
 	}
 }
+
+// The edge of what can happen goes exactly through the corner of the shorter
+// time: 1 m/s and 10 m/s2 cover 1 + 5 = 6 m in 1 s. The mean over the time comes
+// as near as one likes to W + m v/t there: 1000 + 100 N, and 1000 + 80 N at 1.25 s.
+func TestEdgeThroughACorner(t *testing.T) {
+	j := figures{mass: "100 kg", fall: "0 m", speed: "1 m/s", distance: "6 m", time: "1 s .. 1.25 s", gravity: "10 m/s2"}.job(t)
+	res := Evaluate(j)
+	e := given(t, &res, MeanForceOverTime, Given)
+	near(t, "least mean", e.Low, 1080, 1e-12)
+	near(t, "greatest mean", e.High, 1100, 1e-12)
+}

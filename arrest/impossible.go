@@ -40,12 +40,26 @@ func beyondReach(least, greatest *Case, p *Point) (limit float64, impossible boo
 	return limit, least.Distance >= limit
 }
 
+// Refused reports whether no result can be had of the job with these bands:
+// nothing in them can happen (Impossible), or for a part of them nobody can
+// stand where the layout says (LayoutFault).
+func Refused(j *Job) bool {
+	if _, position := LayoutFault(j); position >= 0 {
+		return true
+	}
+	_, never := Impossible(j)
+	return never
+}
+
 // LayoutFault returns the first position, from 0, that nobody can stand at as
 // drawn, for a part of the entries or for all, and why: out of reach of the
 // connector, or with the anchor inside the structure. It returns rig.Known where
-// there is none. The distance of anchor and D-ring is greatest at a corner of the
+// there is none, and for a job without a layout. The distance of anchor and D-ring is greatest at a corner of the
 // bands, or at the edge itself, behind which the connector may only restrain.
 func LayoutFault(j *Job) (status rig.Status, position int) {
+	if j.Point.Layout == nil {
+		return rig.Known, -1
+	}
 	lo, hi := ends(j)
 	var p Point
 	for k := range j.Point.Layout.Positions {

@@ -146,7 +146,7 @@ var methods = [...]Method{
 	{
 		ID: "M-50", Title: "bands: corners and turning points",
 		Valid:  "every figure lies somewhere in its band, in any combination",
-		Errs:   "wide: the ends are those of the least and most favourable combination. A range has no middle figure unless one was written",
+		Errs:   "wide: the ends are those of the least and most favourable combination. A range has no middle figure unless one was written. The ends of a model are searched for, not proved: where a travel is used up for a part of the bands, those of the onset can fall short by about a tenth of their spread",
 		Source: derived + "each output but the floor is monotone in every input; the floor's least is at m = m1, t = t2, v = clamp(2*d1/t2, v1, v2), d = clamp(v*t2/2, d1, d2)",
 	},
 	{

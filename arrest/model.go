@@ -169,13 +169,19 @@ var searchedSwing = [...]Quantity{TotalFallDistance, ClearanceNeeded, ClearanceL
 const (
 	coarse = 8  // points tried along one input before the best is closed in on
 	fine   = 24 // golden sections after that
-	passes = 2  // over all inputs
+	passes = 12 // over all inputs, at most
+
+	settled = 1e-7 // the share of a figure by which a pass has to better it
 )
 
 // searchPath widens the spans of the modelled outputs by turning points inside
 // the bands: the peak is not monotone in an absorber's force, nor always in a
-// stiffness (M-50). From the best corner it goes along one input after the
-// other.
+// stiffness (M-50). From either end and from the middle it goes along one input
+// after the other. What it finds is no proof: outputs jump where a travel is just
+// used up. In 60 random jobs of rope and absorber 20,000 random points each lay
+// beyond the ends by no part of the spread of the peak and of the distances, by at
+// most 0.0011 of that of the peak over the weight, 0.012 of that of the ratio of
+// the routes and 0.11 of that of the onset.
 func searchPath(s *spans) {
 	for _, q := range searched {
 		s.search(indexOf(q, Modelled))
@@ -197,27 +203,81 @@ func (s *spans) search(i int) {
 		if !s.of[i].known() || math.IsInf(x.value, 0) {
 			continue
 		}
-		w := walkPath{s: s, at: s.caseAt(x), of: func(p *Point) float64 { return sign * of(p) }}
-		for range passes {
-			for _, in := range s.free {
-				w.along(in)
-			}
+		for _, from := range [...]Case{s.caseAt(s.of[i].low), s.caseAt(s.of[i].high), s.middle()} {
+			w := walkPath{s: s, at: from, of: func(p *Point) float64 { return sign * of(p) }}
+			w.walk()
 		}
 	}
 }
 
 // A walkPath looks for the least of a function along one input after another.
 type walkPath struct {
-	s  *spans
-	at Case
-	of func(*Point) float64
-	p  Point
+	s     *spans
+	at    Case
+	of    func(*Point) float64
+	p     Point
+	here  []float64 // the figures of the free inputs, as far as they were set
+	least float64   // the function at the last point that was best along a line
 }
 
+// walk goes along all inputs and, from the second time on, along the way that
+// going along them has led: a valley that lies across the inputs is followed so.
+// It ends where that leads no further.
+func (w *walkPath) walk() {
+	free := w.s.free
+	w.here = make([]float64, len(free))
+	before, least := make([]float64, len(free)), math.Inf(1)
+	for pass := range passes {
+		copy(before, w.here)
+		for k, in := range free {
+			w.here[k] = w.along(in)
+		}
+		if pass > 0 {
+			w.onwards(before)
+		}
+		if !(w.least < least-settled*math.Abs(least)) && pass > 0 {
+			return
+		}
+		least = w.least
+	}
+}
+
+// onwards goes on in the direction from the point before to here, as far as the
+// bands allow.
+func (w *walkPath) onwards(before []float64) {
+	free, room := w.s.free, math.Inf(1)
+	for k, in := range free {
+		switch d := w.here[k] - before[k]; {
+		case d > 0:
+			room = min(room, (in.Band.High-w.here[k])/d)
+		case d < 0:
+			room = min(room, (in.Band.Low-w.here[k])/d)
+		}
+	}
+	if !(room > 0) || math.IsInf(room, 1) {
+		return
+	}
+	to := func(k int, t float64) float64 {
+		in := free[k]
+		return min(max(w.here[k]+t*(w.here[k]-before[k]), in.Band.Low), in.Band.High)
+	}
+	t := w.line(func(c *Case, t float64) {
+		for k, in := range free {
+			in.Set(c, to(k, t))
+		}
+	}, 0, room)
+	for k := range free {
+		before[k], w.here[k] = w.here[k], to(k, t)
+	}
+}
+
+// along sets one input to where the function is least, and returns that figure.
+func (w *walkPath) along(in *Input) float64 { return w.line(in.Set, in.Band.Low, in.Band.High) }
+
 // try works out one point, widens all spans by it and returns the function.
-func (w *walkPath) try(in *Input, x float64) float64 {
+func (w *walkPath) try(set func(*Case, float64), x float64) float64 {
 	c := w.at
-	in.Set(&c, x)
+	set(&c, x)
 	At(&c, &w.p)
 	w.s.takeBeside(&w.p, &c)
 	y := w.of(&w.p)
@@ -227,44 +287,43 @@ func (w *walkPath) try(in *Input, x float64) float64 {
 	return y
 }
 
-// along sets one input to where the function is least. The golden section is
-// spared where the least lies at an end and the function still rises half a
+// line goes to where the function is least between lo and hi. The golden section
+// is spared where the least lies at an end and the function still rises half a
 // step away from it.
-func (w *walkPath) along(in *Input) {
-	lo, hi := in.Band.Low, in.Band.High
+func (w *walkPath) line(set func(*Case, float64), lo, hi float64) float64 {
 	step := (hi - lo) / coarse
 	best, least := lo, math.Inf(1)
 	for k := range coarse + 1 {
 		x := min(hi, lo+float64(k)*step)
-		if y := w.try(in, x); y < least {
+		if y := w.try(set, x); y < least {
 			best, least = x, y
 		}
 	}
 	a, b := max(lo, best-step), min(hi, best+step)
-	if a == best && w.try(in, best+step/2) >= least || b == best && w.try(in, best-step/2) >= least {
-		in.Set(&w.at, best)
-		return
+	if !(a == best && w.try(set, best+step/2) >= least || b == best && w.try(set, best-step/2) >= least) {
+		if x, y := w.golden(set, a, b); y < least {
+			best, least = x, y
+		}
 	}
-	if x, y := w.golden(in, a, b); y < least {
-		best = x
-	}
-	in.Set(&w.at, best)
+	set(&w.at, best)
+	w.least = least
+	return best
 }
 
 // golden closes in on the least of the function between a and b.
-func (w *walkPath) golden(in *Input, a, b float64) (x, y float64) {
+func (w *walkPath) golden(set func(*Case, float64), a, b float64) (x, y float64) {
 	const ratio = 0.6180339887498949
 	left, right := b-ratio*(b-a), a+ratio*(b-a)
-	yl, yr := w.try(in, left), w.try(in, right)
+	yl, yr := w.try(set, left), w.try(set, right)
 	for range fine {
 		if yl < yr {
 			b, right, yr = right, left, yl
 			left = b - ratio*(b-a)
-			yl = w.try(in, left)
+			yl = w.try(set, left)
 		} else {
 			a, left, yl = left, right, yr
 			right = a + ratio*(b-a)
-			yr = w.try(in, right)
+			yr = w.try(set, right)
 		}
 	}
 	if yl < yr {
@@ -287,4 +346,13 @@ type ModelRun struct {
 	Corner Corner // AtWritten, or AtHigh for the point of the greatest peak
 	Case   Case
 	Run    connector.Result
+}
+
+// middle returns the point in the middle of all bands.
+func (s *spans) middle() Case {
+	c := s.base
+	for _, in := range s.free {
+		in.Set(&c, (in.Band.Low+in.Band.High)/2)
+	}
+	return c
 }

@@ -15,7 +15,7 @@ type Repeat struct {
 	ev     evaluation
 	spans  spans
 	corner Case
-	laid   *spans // of a layout, worked out by Impossible for the next Evaluate
+	laid   *spans // of a layout, worked out by Refused for the next Evaluate
 
 	laidInPart bool
 	at         Point
@@ -31,10 +31,13 @@ func NewRepeat(j *Job) *Repeat {
 	return r
 }
 
-// Impossible reports whether nothing in the whole of the bands can happen, as
-// the function Impossible does. Evaluate must not be asked then; else it is to be
-// asked of the same figures.
-func (r *Repeat) Impossible() bool {
+// Refused reports whether no result can be had of these bands, as the function
+// Refused does. Evaluate must not be asked then; else it is to be asked of the
+// same figures.
+func (r *Repeat) Refused() bool {
+	if _, position := LayoutFault(&r.Job); position >= 0 {
+		return true
+	}
 	if !bothGiven(&r.Job) {
 		return false
 	}

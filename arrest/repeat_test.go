@@ -48,7 +48,7 @@ func TestRepeatIsEvaluate(t *testing.T) {
 		repeat := NewRepeat(j)
 		for range 4 {
 			_, never := Impossible(&repeat.Job)
-			if repeat.Impossible() != never {
+			if repeat.Refused() != never {
 				t.Fatalf("impossible %v, want %v: %+v", !never, never, repeat.Job.Point)
 			}
 			if !never {

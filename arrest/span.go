@@ -241,7 +241,9 @@ func overEdge(j *Job, s *spans) {
 	}
 }
 
-func inside(ends [2]float64, x float64) bool { return ends[0] < x && x < ends[1] }
+// inside reports whether x lies between the ends, or is one of them: the edge
+// may go exactly through a corner.
+func inside(ends [2]float64, x float64) bool { return ends[0] <= x && x <= ends[1] }
 
 // edgePoint widens the spans that hang on the stop by one point of the edge,
 // for the lightest and the heaviest mass. The floor has no upper end there.

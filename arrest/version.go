@@ -3,4 +3,4 @@ package arrest
 // ModelVersion is raised whenever a printed number of an unchanged job
 // changes. Results carry it, so that an old archive can be told from a new
 // calculation.
-const ModelVersion = "1"
+const ModelVersion = "2"

@@ -103,7 +103,7 @@ func newDrawnFall(b *builder, plan *arrest.LayoutPlan, run *arrest.LayoutRun, in
 	f := &drawnFall{builder: *b, plan: plan, run: run, index: index, where: where, travel: nan64}
 	f.unit = b.d.pair(quantity.Length, quantity.Unit{}, 1)[0]
 	switch given, modelled := &run.Given, &run.Modelled; {
-	case modelled.Known && !(given.Known && given.Needed > modelled.Needed):
+	case modelled.Known && !(given.Known && given.Counts > modelled.Counts):
 		f.room, f.modelled = modelled, true
 	case given.Known:
 		f.room = given

@@ -44,7 +44,7 @@ const (
 
 const (
 	noPlace      = "No figure crosses a limit or turns in this range."
-	cannotHappen = "cannot happen: no pull could do this"
+	cannotHappen = "cannot be: a check refuses it"
 	cannotShort  = "cannot be"
 	noneShort    = "-"
 	rowLabel     = "row"
@@ -55,7 +55,7 @@ const (
 	bandNote     = "Two figures in a cell: the least and the greatest over the bands of the other entries."
 	bareNote     = "Figures by the model stand as they are; with limits they are compared after the allowance for its error is added."
 	noneNote     = "-: nothing entered gives this figure at this point."
-	cannotNote   = "cannot be: with these figures no force that only pulls could stop the body."
+	cannotNote   = "cannot be: a check refuses these figures. No force that only pulls could stop the body so, or, for a part of the other entries or for all, nobody could stand where the layout then is."
 )
 
 // endWords say which figure over the bands of the other entries is meant.
@@ -184,7 +184,7 @@ var (
 		study.Within:      "within as entered",
 	}
 	zoneMeaning = map[study.Zone]string{
-		study.Impossible:  "no force that only pulls could stop the body so.",
+		study.Impossible:  "a check refuses it: no force that only pulls could stop the body so, or, for a part of the other entries or for all, nobody could stand where the layout then is.",
 		study.NotCompared: "no figure, or a condition of the limit is not fulfilled.",
 		study.Exceeded:    "even the most favourable of what the other entries allow is beyond the limit.",
 		study.Undecided:   "the figures leave it open.",

@@ -2,6 +2,7 @@ package study
 
 import (
 	"math"
+	"slices"
 	"strings"
 
 	"arrestcheck/arrest"
@@ -100,12 +101,23 @@ func snap(x, scale float64) float64 {
 	return math.Round(x*scale) / scale
 }
 
+// Of a layout, what can lie on either side of zero and what may be zero; the
+// rest, as the length of the connector, is above.
+var (
+	signedInLayout = []string{"anchor_height", "anchor_behind_edge", "along", "out", "below", "along_from", "along_to", "out_from", "out_to"}
+	zeroInLayout   = []string{"slack", "travel_before_locking"}
+)
+
 // possible reports whether an input can have the figure x at all. Distance and
 // time of a stop, masses and gravity are above zero, as 0 stands for "not
 // given"; tools, free fall and speed may be 0.
 func possible(in *arrest.Input, x float64) bool {
 	if math.IsNaN(x) || math.IsInf(x, 0) {
 		return false
+	}
+	if in.Role == arrest.OfLayout {
+		name := in.Key[strings.LastIndexByte(in.Key, '.')+1:]
+		return x > 0 || slices.Contains(signedInLayout, name) || x == 0 && slices.Contains(zeroInLayout, name)
 	}
 	positive := in.Role == arrest.OfPlace
 	switch in.Band.Unit.Dimension {

@@ -102,4 +102,17 @@ func TestWhatAnInputCanBe(t *testing.T) {
 	if !possible(&side, -3) {
 		t.Error("a velocity has a direction")
 	}
+	for key, least := range map[string]float64{
+		"layout.anchor_height": -1, "layout.anchor_behind_edge": -1, "layout.slack": 0, "layout.travel_before_locking": 0,
+		"layout.d_ring_height": 0.5, "layout.d_ring_to_feet": 0.5, "layout.half_width": 0.5, "layout.connector_length": 0.5,
+		"position[1].along": -1, "position[2].out": -1, "obstacle[1].below": -1, "obstacle[1].height": 0.5,
+		"obstacle[2].along_from": -1, "obstacle[2].out_to": -1, "obstacle[1].stop_over": 0.5,
+	} {
+		in := arrest.Input{Key: key, Role: arrest.OfLayout, Band: band(t, quantity.Length, "1 m")}
+		for _, x := range []float64{-1, 0, 0.5} {
+			if possible(&in, x) != (x >= least) {
+				t.Errorf("%s %v: %v", key, x, !(x >= least))
+			}
+		}
+	}
 }

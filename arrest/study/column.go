@@ -21,7 +21,7 @@ type Column struct {
 // not hold (arrest.Estimate.Outside) are among them: they may hold elsewhere.
 // A job that cannot happen as entered gives none.
 func Columns(j *arrest.Job, quantities ...arrest.Quantity) []Column {
-	if _, never := arrest.Impossible(j); never {
+	if arrest.Refused(j) {
 		return nil
 	}
 	res := arrest.Evaluate(j)
@@ -122,7 +122,7 @@ func (c *checks) At(x []float64, to []arrest.Ends) bool {
 		in.Band = arrest.Single(in, x[i])
 		in.Set(&job.Point, x[i])
 	}
-	if c.repeat.Impossible() {
+	if c.repeat.Refused() {
 		return false
 	}
 	res := c.repeat.Evaluate()

@@ -71,7 +71,7 @@ type Ranking struct {
 //
 // The error is a *Refusal.
 func Rank(j *arrest.Job, sets []limits.Set, row int) (*Ranking, error) {
-	if _, never := arrest.Impossible(j); never {
+	if arrest.Refused(j) {
 		return nil, &Refusal{ID: NoMotion}
 	}
 	res := arrest.Evaluate(j)

@@ -137,13 +137,13 @@ func Substitute(j *arrest.Job, moves ...Move) (arrest.Job, error) {
 
 // Check evaluates j with some inputs replaced and compares it with the sets:
 // what a single check of that job gives. It reports false where nothing the
-// entries allow can happen (arrest.Impossible); there is no result then.
+// entries allow can happen (arrest.Refused); there is no result then.
 func Check(j *arrest.Job, sets []limits.Set, moves ...Move) (res arrest.Result, a limits.Assessment, can bool, err error) {
 	to, err := Substitute(j, moves...)
 	if err != nil {
 		return res, a, false, err
 	}
-	if _, never := arrest.Impossible(&to); never {
+	if arrest.Refused(&to) {
 		return res, a, false, nil
 	}
 	res = arrest.Evaluate(&to)
@@ -156,7 +156,7 @@ func Working(j *arrest.Job, moves ...Move) (res arrest.Result, can bool, err err
 	if err != nil {
 		return res, false, err
 	}
-	if _, never := arrest.Impossible(&to); never {
+	if arrest.Refused(&to) {
 		return res, false, nil
 	}
 	res = arrest.Evaluate(&to)

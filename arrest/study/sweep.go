@@ -77,7 +77,7 @@ type Swept struct {
 	Job        *arrest.Job
 	Axes       []Axis
 	Series     []Series
-	Impossible []bool // points at which nothing the entries allow can happen; nil where there are none
+	Impossible []bool // points at which a check refuses the job (arrest.Refused); nil where there are none
 	Turns      []Turn
 	Crossings  []Crossing // by column, end, row and place
 

@@ -13,7 +13,7 @@ import (
 type Zone uint8
 
 const (
-	Impossible  Zone = iota // nothing the entries allow can happen: a job with these figures is refused
+	Impossible  Zone = iota // a job with these figures is refused (arrest.Refused)
 	NotCompared             // limits.NotCompared
 	Exceeded                // limits.Exceeded
 	Undecided               // limits.Undecided, by the figures
@@ -99,7 +99,7 @@ func (t *trial) suppose(k int, low, x, high float64) {
 // assess compares the job as it stands with every limit; nil where it cannot
 // happen. The findings hold until the next call.
 func (t *trial) assess() []limits.Finding {
-	if t.repeat.Impossible() {
+	if t.repeat.Refused() {
 		return nil
 	}
 	res := t.repeat.Evaluate()
@@ -114,7 +114,7 @@ func (t *trial) assess() []limits.Finding {
 
 // zone is what one limit of a set comes to for the job as it stands.
 func (t *trial) zone(set *limits.Set, l *limits.Limit) Zone {
-	if t.repeat.Impossible() {
+	if t.repeat.Refused() {
 		return Impossible
 	}
 	f := t.comparison.Compare(t.repeat.Evaluate(), set, l)

@@ -90,7 +90,7 @@ func (f *fileFlags) conflict() error {
 		}
 	}
 	if f.force && len(all) == 0 {
-		return &usageError{"--force without " + f.list(" or "), "--force lets " + f.list(" FILE or ") + " FILE replace an existing file"}
+		return &usageError{"--force without " + f.list(" or "), "--force lets " + f.list(", ") + " replace an existing file"}
 	}
 	return nil
 }
