@@ -174,6 +174,36 @@ func TestOpenInputs(t *testing.T) {
 	}
 }
 
+// What settles a layout: a tape, a drawing or a plan, and of the connector itself
+// its label; and a clearance: anything that somebody stands for, but for the
+// travel to rest a measurement or a document. A margin is one figure.
+func TestOpenClearance(t *testing.T) {
+	for _, c := range []struct {
+		key    string
+		role   Role
+		source Source
+		text   string
+		want   OpenReason
+	}{
+		{"layout.anchor_height", OfLayout, FromPlan, "1 m ± 1 cm", Settled},
+		{"layout.anchor_height", OfLayout, FromLabel, "1 m ± 1 cm", OpenSource},
+		{"layout.anchor_height", OfLayout, FromMeasured, "1 m", OpenNoTolerance},
+		{"layout.connector_length", OfLayout, FromLabel, "1 m ± 1 cm", Settled},
+		{"layout.travel_before_locking", OfLayout, FromStandard, "0 m .. 1 m", Settled},
+		{"clearance.harness_stretch", OfClearance, FromPlan, "0.3 m ± 0 m", Settled},
+		{"clearance.harness_stretch", OfClearance, FromAssumed, "0.3 m ± 0 m", OpenSource},
+		{DecelerationItem, OfClearance, FromPlan, "1 m ± 0 m", OpenSource},
+		{DecelerationItem, OfClearance, FromLabel, "0 m .. 1 m", Settled},
+		{"clearance.margin", OfClearance, FromStandard, "1 m", Settled},
+		{"clearance.margin", OfClearance, FromAssumed, "1 m", OpenSource},
+	} {
+		in := Input{Key: c.key, Role: c.role, Source: c.source, Band: parse(t, quantity.Length, c.text)}
+		if got := in.Open(); got != c.want {
+			t.Errorf("%s %q %q: %q, want %q", c.key, c.source, c.text, got, c.want)
+		}
+	}
+}
+
 // Scaling: twice the mass doubles the forces and leaves ratio and deceleration;
 // the mean over the distance goes to the weight as the distance grows.
 func TestScalingAndLimits(t *testing.T) {
