@@ -23,6 +23,7 @@ import (
 
 const (
 	job    = "testdata/jobs/rated.toml"
+	layout = "testdata/jobs/layout-two-positions.toml"
 	rounds = 41
 	times  = 5 // runs of each program in a round
 
@@ -96,7 +97,8 @@ func programs() ([]program, error) {
 	return append(list,
 		program{name: "arrestcheck version", args: []string{"version"}},
 		program{name: "arrestcheck check --format json", args: []string{"check", "--format", "json", job}},
-		program{name: "arrestcheck check", args: []string{"check", job}}), nil
+		program{name: "arrestcheck check", args: []string{"check", job}},
+		program{name: "arrestcheck check, a layout", args: []string{"check", layout}}), nil
 }
 
 // libraries returns the packages of others that the program links, and those of
