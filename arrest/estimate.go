@@ -108,10 +108,19 @@ func (e *Estimate) Ends() (low, high float64) {
 	if e.Quantity == ClearanceLeft && e.Harder < low {
 		low = e.Harder
 	}
-	if e.Travel > 0 {
+	if e.sum() { // of which nothing but the travel is modelled, where there is one
 		return low - float64(e.Allowance*e.Travel), high + float64(e.Allowance*e.Travel)
 	}
 	return low - float64(e.Allowance*low), high + float64(e.Allowance*high)
+}
+
+// sum reports whether the estimate is a sum of M-21.
+func (e *Estimate) sum() bool {
+	switch e.Quantity {
+	case TotalFallDistance, ClearanceNeeded, ClearanceLeft:
+		return true
+	}
+	return false
 }
 
 // Conditional reports whether the estimate holds only under an assumption of

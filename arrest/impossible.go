@@ -1,6 +1,10 @@
 package arrest
 
-import "arrestcheck/arrest/rig"
+import (
+	"math"
+
+	"arrestcheck/arrest/rig"
+)
 
 // Impossible reports whether nothing in the whole of the job's bands can
 // happen (M-05): a force that only pulls needs
@@ -54,33 +58,61 @@ func Refused(j *Job) bool {
 // LayoutFault returns the first position, from 0, that nobody can stand at as
 // drawn, for a part of the entries or for all, and why: out of reach of the
 // connector, or with the anchor inside the structure. It returns rig.Known where
-// there is none, and for a job without a layout. The distance of anchor and D-ring is greatest at a corner of the
-// bands, or at the edge itself, behind which the connector may only restrain.
+// there is none, and for a job without a layout. The distance of anchor and D-ring
+// is greatest at a corner of the bands, or at the edge itself, behind which the
+// connector may only restrain.
 func LayoutFault(j *Job) (status rig.Status, position int) {
 	if j.Point.Layout == nil {
 		return rig.Known, -1
 	}
-	lo, hi := ends(j)
 	var p Point
 	for k := range j.Point.Layout.Positions {
 		at := *j
 		at.Point.Position = k
 		g := newSiting(&at)
 		g.geometry(func(int) bool { return false })
-		g.lo.Position = k
-		out := g.pos.Out
+		g.lo.Position, g.lo.Path = k, nil
 		for n := range 1 << len(g.axes) {
-			c := cornerOf(&g.lo, g.axes, n)
-			c.Path = nil
-			for _, y := range [...]float64{c.Figures[out], min(max(0, lo.Figures[out]), hi.Figures[out])} {
-				c.Figures[out] = y
+			corner := cornerOf(&g.lo, g.axes, n)
+			for _, c := range g.about(corner) {
 				At(&c, &p)
-				switch p.Layout.Place.Status {
-				case rig.OutOfReach, rig.InStructure, rig.SlackTwice:
-					return p.Layout.Place.Status, k
+				switch s := p.Layout.Place.Status; {
+				case s == rig.OutOfReach || s == rig.InStructure || s == rig.SlackTwice:
+					return s, k
+				case s == rig.Restrained && tooFar(&c, &p.Layout.Layout):
+					return rig.OutOfReach, k
 				}
 			}
 		}
 	}
 	return rig.Known, -1
+}
+
+// tooFar reports whether a worker who is held back behind the edge could not even
+// stand upright where the layout says: the position itself, not the edge beside
+// it, is farther from the anchor than the connector reaches.
+func tooFar(c *Case, l *rig.Layout) bool {
+	at := l.Positions[c.Position]
+	plan := math.Hypot(at.X-l.Anchor.X, at.Y-l.Anchor.Y)
+	return math.Hypot(plan, l.Anchor.Z-l.DRing) > l.Length+l.Slack
+}
+
+// about returns the points that a corner of the axes stands for square to the
+// edge: position and anchor each at its ends, the position at the edge too.
+func (g *siting) about(corner Case) []Case {
+	out, behind := g.pos.Out, g.plan.BehindEdge
+	lo, hi := &g.lo.Figures, &g.hi.Figures
+	var list []Case
+	for _, y := range [...]float64{lo[out], hi[out], min(max(0, lo[out]), hi[out])} {
+		corner.Figures[out] = y
+		if behind == NoFigure {
+			list = append(list, corner)
+			continue
+		}
+		for _, b := range [...]float64{lo[behind], hi[behind]} {
+			corner.Figures[behind] = b
+			list = append(list, corner)
+		}
+	}
+	return list
 }

@@ -422,6 +422,16 @@ func TestLayoutFault(t *testing.T) {
 	if got, k := LayoutFault(laidOutJob(t, inside)); got != rig.InStructure || k != 0 {
 		t.Errorf("inside the structure: %s at %d", got, k)
 	}
+	// hypot(2, 4 - 1.5) = 3.2 m from the anchor in plan, on 3 m of connector, though
+	// the edge beside would be farther still.
+	back := testLayout{anchor: "1.5 m", behind: "4 m", edge: rig.RoundEdge, dring: "1.5 m", length: "3 m", slack: "0 m", positions: [][2]string{{"2 m", "-1.5 m"}}}
+	if got, _ := LayoutFault(laidOutJob(t, back)); got != rig.OutOfReach {
+		t.Errorf("behind the edge, too far: %s", got)
+	}
+	back.length = "3.3 m"
+	if got, _ := LayoutFault(laidOutJob(t, back)); got != rig.Known {
+		t.Errorf("behind the edge, within reach: %s", got)
+	}
 }
 
 // A saying is a layout of which something has to be said, for its own reason.
@@ -443,6 +453,8 @@ func sayings() (quiet testLayout, list []saying) {
 	return base, []saying{
 		{LayoutRestrained, with(edge, func(l *testLayout) { l.behind, l.positions = "3 m", [][2]string{{"0 m", "-1.5 m"}} })},
 		{LayoutRestrainedInPart, with(edge, func(l *testLayout) { l.behind, l.positions = "1 m .. 3 m", [][2]string{{"0 m", "-0.5 m"}} })},
+		{LayoutGoneOver, with(edge, func(l *testLayout) { l.behind, l.positions = "1.9 m", [][2]string{{"0 m", "-0.5 m"}} })},
+		{LayoutShort, with(base, func(l *testLayout) { l.obstacles = []testObstacle{{below: "2.2 m", moving: true}} })},
 		{LayoutEdge, with(edge, func(l *testLayout) { l.rated = "document of the lanyard" })},
 		{LayoutEdgeUnrated, edge},
 		{LayoutAnchorLow, with(base, func(l *testLayout) { l.anchor = "0 m" })},
@@ -479,6 +491,52 @@ func TestLayoutWarnings(t *testing.T) {
 		if tells(&plain, c.id) {
 			t.Errorf("%s is told of a layout that has nothing of it", c.id)
 		}
+	}
+}
+
+// An upright body 1.5 m tall to the D-ring, on 2.00 m +- 0.15 m from an anchor on
+// the surface 2.10 m +- 0.02 m behind the edge, does not get to it: its D-ring
+// would have to be sqrt(2.10^2 + 1.5^2) = 2.58 m away. On its knees it gets over:
+// 2.15 m reach against 2.08 m of way. The figures as written, 2.00 m and 2.10 m,
+// do not tell.
+func TestAnEdgeThatIsGoneOverOnTheKnees(t *testing.T) {
+	tl := testLayout{edge: rig.SharpEdge, anchor: "0 m", behind: "2.10 m ± 0.02 m", dring: "1.5 m", length: "2.00 m ± 0.15 m",
+		slack: "0 m", positions: [][2]string{{"0.5 m ± 0.5 m", "-0.5 m"}, {"3 m", "-0.5 m"}}}
+	res := Evaluate(laidOutJob(t, tl))
+	if !tells(&res, LayoutGoneOver) || !tells(&res, LayoutRestrained) || tells(&res, LayoutRestrainedInPart) {
+		t.Errorf("%v", res.Warnings)
+	}
+	for k, way := range []float64{2.08, math.Hypot(3, 2.08)} {
+		r := &res.Layout.Places[k].Farthest
+		if !quantity.Close(r.Reach, 2.15, 1e-12) || !quantity.Close(r.EdgeDistance[k], way, 1e-12) || !r.Passed {
+			t.Errorf("position %d: %+v", k, r)
+		}
+	}
+	for i := range res.Estimates {
+		if e := &res.Estimates[i]; e.Quantity == RestraintReach && !e.Unreached {
+			t.Error("the reach is taken to settle a row")
+		}
+	}
+	tl.behind = "2.20 m ± 0.02 m"
+	if res = Evaluate(laidOutJob(t, tl)); tells(&res, LayoutGoneOver) || !tells(&res, LayoutRestrained) {
+		t.Errorf("%v", res.Warnings)
+	}
+}
+
+// Of two levels the room needed reaches one: 0.5 m free fall, 1 m to rest, 0.3 m
+// in the harness and 1 m margin below the feet, 2.8 m in all, above 2.2 m.
+func TestWhatIsShortIsNamed(t *testing.T) {
+	tl, _ := sayings()
+	tl.obstacles = []testObstacle{{below: "2.9 m"}, {below: "2.2 m"}}
+	res := Evaluate(laidOutJob(t, tl))
+	var short []Warning
+	for _, w := range res.Warnings {
+		if w.ID == LayoutShort {
+			short = append(short, w)
+		}
+	}
+	if len(short) != 1 || short[0].Args[1].Text != "thing 2" || !quantity.Close(short[0].Args[2].SI, 0.6, 1e-12) {
+		t.Errorf("%v", short)
 	}
 }
 

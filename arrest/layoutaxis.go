@@ -121,27 +121,42 @@ func (g *siting) geometry(alone func(figure int) bool) {
 		}
 		return figure
 	}
-	if g.free(g.pos.Along) || g.free(g.pos.Out) || g.free(p.BehindEdge) {
-		near, far := g.offsets()
-		g.axes = append(g.axes, func(c *Case, high bool) {
-			from := &near
-			if high {
-				from = &far
-			}
-			c.Figures[g.pos.Along], c.Figures[g.pos.Out] = from.Figures[g.pos.Along], from.Figures[g.pos.Out]
-			if p.BehindEdge != NoFigure {
-				c.Figures[p.BehindEdge] = from.Figures[p.BehindEdge]
-			}
-		})
-	}
 	if p.Edge == rig.NoEdge {
-		g.together([]int{p.AnchorHeight}, []int{p.DRing}) // only their difference counts
+		g.apart(g.pos.Along, g.pos.Out)
+	} else { // along an edge and square to it are not one offset to a connector over it
+		g.apart(g.pos.Along)
+		g.apart(g.pos.Out, p.BehindEdge)
+	}
+	// The greater of the two rooms is lower with a higher anchor, and of a retractable
+	// with a higher D-ring as well; else only their difference counts.
+	if p.Edge == rig.NoEdge && p.Locking == NoFigure {
+		g.together([]int{p.AnchorHeight}, []int{p.DRing})
 	} else {
 		g.together([]int{p.AnchorHeight}, nil)
 		g.together([]int{p.DRing}, nil)
 	}
 	g.together([]int{shared(p.Length), p.Slack}, nil)
 	g.together([]int{shared(p.Locking)}, nil)
+}
+
+// apart adds an axis from the least to the greatest offset in plan by the figures;
+// none where all have one end.
+func (g *siting) apart(figures ...int) {
+	near, far := g.offsets()
+	for _, n := range figures {
+		if g.free(n) {
+			g.axes = append(g.axes, func(c *Case, high bool) {
+				from := &near
+				if high {
+					from = &far
+				}
+				for _, n := range figures {
+					c.Figures[n] = from.Figures[n]
+				}
+			})
+			return
+		}
+	}
 }
 
 // room adds the axes that only a clearance or an obstacle hangs on: all items
@@ -203,15 +218,16 @@ func (g *siting) offsets() (near, far Case) {
 	}
 	behind := g.plan.BehindEdge
 	at := func(c *Case, y, b float64) { c.Figures[out], c.Figures[behind] = y, b }
-	switch y := max(lo[out], -hi[behind]); {
-	case y <= min(hi[out], -lo[behind]): // they can be at one place
-		at(&near, y, -y)
-	case lo[out] > -lo[behind]:
+	// Behind the edge a worker goes over it at the edge line itself.
+	least, most := max(lo[out], 0), max(hi[out], 0)
+	switch y := max(least, -hi[behind]); {
+	case y <= min(most, -lo[behind]): // they can be at one place
+		at(&near, min(y, hi[out]), -y)
+	case least > -lo[behind]:
 		at(&near, lo[out], lo[behind])
 	default:
 		at(&near, hi[out], hi[behind])
 	}
-	// Behind the edge a worker goes over it at the edge line itself.
 	apart := func(y, b float64) float64 { return math.Abs(max(y, 0) + b) }
 	at(&far, hi[out], hi[behind])
 	if apart(lo[out], lo[behind]) > apart(hi[out], hi[behind]) {
@@ -220,15 +236,83 @@ func (g *siting) offsets() (near, far Case) {
 	return near, far
 }
 
-// kinks calls the function with the points beside a corner at which a figure of
-// a retractable has an end between corners: its line comes to its end on the way
-// from the nearest to the farthest offset, where the free fall is greatest; or
-// anchor and D-ring are at one height.
+// kinks calls the function with the points beside a corner at which a figure has
+// an end between corners: those of a retractable, and those of a connector that
+// comes to an edge.
 func (g *siting) kinks(corner *Case, yield func(*Case)) {
-	p := g.plan
-	if p.Locking == NoFigure {
+	if g.plan.Edge != rig.NoEdge {
+		g.square(corner, yield)
+		g.grazing(corner, yield)
+	}
+	if g.plan.Locking != NoFigure {
+		g.lineEnds(corner, yield)
+	}
+}
+
+// square calls the function with the other points square to the edge. To a
+// connector over the edge place and anchor are two distances from it, each at its
+// end, and an anchor straight above it may be the nearest.
+func (g *siting) square(corner *Case, yield func(*Case)) {
+	out, behind := g.pos.Out, g.plan.BehindEdge
+	near, _ := g.offsets()
+	is := func(c *Case) bool {
+		return corner.Figures[out] == c.Figures[out] && corner.Figures[behind] == c.Figures[behind]
+	}
+	if !g.free(behind) || !is(&near) {
 		return
 	}
+	c := *corner
+	lo, hi := &g.lo.Figures, &g.hi.Figures
+	for _, y := range [...]float64{lo[out], hi[out]} {
+		for _, b := range [...]float64{lo[behind], hi[behind], min(max(0, lo[behind]), hi[behind])} {
+			c.Figures[out], c.Figures[behind] = y, b
+			if !is(&c) {
+				yield(&c)
+			}
+		}
+	}
+}
+
+// grazing calls the function with the points on both sides of where, on the way
+// from one corner to the next, the connector just comes to the edge: the swing
+// turns about another point there, and its figures leap.
+func (g *siting) grazing(corner *Case, yield func(*Case)) {
+	var l rig.Layout
+	over := func(c *Case) bool {
+		g.plan.fill(c, &l)
+		return l.At(c.Position).OverEdge
+	}
+	for _, to := range g.axes {
+		low, high := *corner, *corner
+		to(&low, false)
+		to(&high, true)
+		if low != *corner || over(&low) == over(&high) {
+			continue
+		}
+		first := over(&low)
+		a, b := low, high
+		for range 60 {
+			m := low
+			for i := range m.Figures {
+				m.Figures[i] = a.Figures[i] + (b.Figures[i]-a.Figures[i])/2
+			}
+			if over(&m) == first {
+				a = m
+			} else {
+				b = m
+			}
+		}
+		yield(&a)
+		yield(&b)
+	}
+}
+
+// lineEnds calls the function with the points beside a corner at which a figure of
+// a retractable has an end: its line comes to its end on the way from the nearest
+// to the farthest offset, where the free fall is greatest; or anchor and D-ring
+// are at one height.
+func (g *siting) lineEnds(corner *Case, yield func(*Case)) {
+	p := g.plan
 	lo, hi := &g.lo.Figures, &g.hi.Figures
 	level := *corner
 	z := min(max(lo[p.DRing], lo[p.AnchorHeight]), hi[p.AnchorHeight])

@@ -54,7 +54,9 @@ func (ev *evaluation) laidOut(i int, e *Estimate) {
 		n := &ev.spans.layouts[k]
 		floor = floor || e.Evidence == Given && n.givenFloor || e.Evidence == Modelled && n.modelFloor
 		if e.Evidence == Modelled && (e.Quantity == ClearanceNeeded || e.Quantity == ClearanceLeft || e.Quantity == TotalFallDistance) {
-			e.Travel = max(e.Travel, n.travel)
+			if n.travel > e.Travel { // NaN where no run told it
+				e.Travel = n.travel
+			}
 		}
 	}
 	if e.Quantity == FreeFall {
@@ -78,6 +80,11 @@ func (ev *evaluation) laidOut(i int, e *Estimate) {
 		e.Low = 0
 	case floor && e.Quantity == ClearanceNeeded:
 		e.Bound = AtLeast
+	case e.Quantity == TotalFallDistance && e.Evidence == Given && ev.swingsToo():
+		e.Bound = AtLeast
+		if ev.straightToo() {
+			e.Low = min(e.Low, ev.spans.of[indexOf(FreeFall, Given)].low.value)
+		}
 	case e.Quantity == ClearanceLeft && !floor && ev.leftOpen(e.Evidence):
 		e.Bound, e.High, e.Value = AtLeast, nan, nan
 	case floor && e.Quantity == ClearanceLeft:
@@ -90,6 +97,17 @@ func (ev *evaluation) laidOut(i int, e *Estimate) {
 func (ev *evaluation) straightToo() bool {
 	for k := range ev.spans.layouts {
 		if n := &ev.spans.layouts[k]; 0 < n.straight && n.straight < n.known {
+			return true
+		}
+	}
+	return false
+}
+
+// swingsToo reports whether the body swings from some position, for some of the
+// entries: the way down to rest is then not known there without a path.
+func (ev *evaluation) swingsToo() bool {
+	for k := range ev.spans.layouts {
+		if n := &ev.spans.layouts[k]; n.straight < n.known {
 			return true
 		}
 	}
@@ -143,13 +161,25 @@ func (ev *evaluation) unstretched(e *Estimate) {
 			e.High = greater(e.High, ev.spans.layouts[k].fastest)
 		}
 	case e.Low < e.High && math.IsNaN(e.Value):
-		// The least speed is not monotone in the offset: each of its terms at
-		// its least is a bound.
-		least := func(q Quantity) float64 { return ev.spans.of[indexOf(q, Given)].low.value }
+		e.Low = min(e.Low, ev.leastSwing())
+	}
+}
+
+// leastSwing bounds the least speed of the fastest swing without stretch from
+// below. It is not monotone in the offset: each of its terms at its least is a
+// bound, position by position.
+func (ev *evaluation) leastSwing() float64 {
+	parts, most := ev.spans.parts, 0.0
+	if len(parts) == 0 {
+		parts = []*spans{ev.spans}
+	}
+	for _, part := range parts {
+		least := func(q Quantity) float64 { return part.of[indexOf(q, Given)].low.value }
 		sin := math.Sin(least(SwingAngle))
 		v2 := float64(ev.lo.InitialSpeed*ev.lo.InitialSpeed) + float64(2*ev.lo.Gravity*least(FreeFall))
-		e.Low = min(e.Low, math.Sqrt(float64(v2*sin*sin)+float64(2*ev.lo.Gravity*least(SwingDrop))))
+		most = greater(most, math.Sqrt(float64(v2*sin*sin)+float64(2*ev.lo.Gravity*least(SwingDrop))))
 	}
+	return most
 }
 
 // leftOpen reports whether what is left is that to a box which is in the way
@@ -185,7 +215,7 @@ func (ev *evaluation) doubt(e *Estimate) {
 		n := &ev.spans.layouts[k]
 		e.Edge = e.Edge || n.edge > 0
 		e.Strikes = e.Strikes || n.struck()
-		e.Unreached = e.Unreached || 0 < n.restrained && n.restrained < n.tried || n.unflat > 0
+		e.Unreached = e.Unreached || 0 < n.restrained && n.restrained < n.tried || n.unflat > 0 || ev.goneOver(n)
 	}
 }
 
@@ -215,10 +245,13 @@ func (ev *evaluation) layout() {
 			place.Corner, place.Case = AtHigh, at.base
 			if fall.known() {
 				place.Case = at.caseAt(fall.high)
+			} else {
+				place.Corner, place.Case = AtReach, ev.farthestFrom(k)
 			}
 		}
 		place.Case.Position = k
 		place.Run = *LayoutAt(&place.Case)
+		place.Farthest = ev.farthest(k)
 		res.Places = append(res.Places, place)
 		if fall.known() && !(fall.high.value <= most) {
 			res.Worst, most = k, fall.high.value
@@ -226,6 +259,40 @@ func (ev *evaluation) layout() {
 	}
 	res.Tightest = ev.tightest()
 	ev.res.Layout = res
+}
+
+// farthest returns the reach against the edge at the point where it goes farthest
+// from the position k.
+func (ev *evaluation) farthest(k int) rig.Restraint {
+	c := ev.farthestFrom(k)
+	c.Path = nil
+	return LayoutAt(&c).Restraint
+}
+
+// farthestFrom returns the point of the bands where the connector is longest, the
+// anchor nearest to the edge and at the height of a D-ring that is carried, and
+// the position k straight before the anchor, as far as the bands go.
+func (ev *evaluation) farthestFrom(k int) Case {
+	plan, c := ev.job.Point.Layout, ev.lo
+	c.Position = k
+	nearest := func(figure int, x float64) {
+		c.Figures[figure] = max(ev.lo.Figures[figure], min(x, ev.hi.Figures[figure]))
+	}
+	for _, figure := range [...]int{plan.Length, plan.Slack, plan.DRing} {
+		if figure != NoFigure {
+			c.Figures[figure] = ev.hi.Figures[figure]
+		}
+	}
+	nearest(plan.AnchorHeight, 0)
+	nearest(plan.Positions[k].Along, 0)
+	return c
+}
+
+// goneOver reports whether from a position at which the connector holds the
+// upright body back, over all of the entries, the edge can be gone over all the
+// same somewhere in them: with the D-ring lower, bent or kneeling.
+func (ev *evaluation) goneOver(n *layoutNotes) bool {
+	return n.restrained == n.tried && ev.farthest(n.position).Margin[n.position] <= 0
 }
 
 // tightest returns the point that leaves the least room, or needs the most.
@@ -286,6 +353,11 @@ func (ev *evaluation) warnStrikes(plan *LayoutPlan, n *layoutNotes) {
 			ev.tell(LayoutStrikeForce, Text(o.Name), length(over.High), Figure(quantity.Force, s.force, quantity.Down))
 		}
 	}
+	for i, left := range n.left {
+		if left < 0 {
+			ev.tell(LayoutShort, name, Text(plan.Obstacles[i].Name), Figure(quantity.Length, -left, quantity.Up))
+		}
+	}
 }
 
 // figureBand returns the band of the input that writes a figure.
@@ -308,6 +380,9 @@ func (ev *evaluation) figureBand(figure int) quantity.Band {
 func (ev *evaluation) warnPosition(plan *LayoutPlan, n *layoutNotes) {
 	name := Text(plan.Positions[n.position].Name)
 	switch {
+	case ev.goneOver(n):
+		r := ev.farthest(n.position)
+		ev.tell(LayoutGoneOver, name, length(r.Reach), length(r.EdgeDistance[n.position]))
 	case n.restrained == n.tried:
 		ev.tell(LayoutRestrained, name)
 	case n.restrained > 0:
@@ -398,7 +473,7 @@ func (ev *evaluation) warnSums(plan *LayoutPlan) {
 			ev.tell(LayoutItemsMissing, Text(string(x.evidence)), Text(itemNames(sum.Missing)), Figure(quantity.Length, sum.Present, quantity.Down))
 		}
 		if apart := ev.datumsApart(plan); math.Abs(apart) > datumSlack && !math.IsNaN(x.room.Clearance.Apart(t.Run.Layout.Anchor.Z)) {
-			ev.tell(LayoutDatumsApart, Text(string(x.evidence)), length(apart))
+			ev.tell(LayoutDatumsApart, Text(string(x.evidence)), Figure(quantity.Length, math.Abs(apart), quantity.Down))
 		}
 	}
 }
@@ -432,7 +507,7 @@ func (ev *evaluation) warnSwing() {
 		}
 	}
 	if later > peak {
-		ev.tell(LayoutLaterSwing, Figure(quantity.Force, peak, quantity.Nearest), Figure(quantity.Force, later, quantity.Nearest))
+		ev.tell(LayoutLaterSwing, Figure(quantity.Force, peak, quantity.Nearest), Figure(quantity.Force, later, quantity.Up))
 	}
 	if ev.spans.of[indexOf(SwingSpeed, Shape)].known() {
 		ev.tell(LayoutInextensible)

@@ -26,15 +26,16 @@ type layoutNotes struct {
 	edge       int
 	unrated    int
 	face       int
-	strikes    []strike // by obstacle; high is NaN where the body never comes to it
-	straight   int      // the points without an offset
-	touched    int      // the points at which a swing without stretch comes to an obstacle
-	fastest    float64  // greatest speed of such a swing, m/s
-	passed     int      // the points at which the swing in time comes to an obstacle
-	short      bool     // a room left is below zero
-	fall       float64  // greatest free fall, m
-	travel     float64  // greatest travel of the path in a room, m
-	peak       float64  // greatest peak of a swing, N, and that of any later one
+	strikes    []strike  // by obstacle; high is NaN where the body never comes to it
+	straight   int       // the points without an offset
+	touched    int       // the points at which a swing without stretch comes to an obstacle
+	fastest    float64   // greatest speed of such a swing, m/s
+	passed     int       // the points at which the swing in time comes to an obstacle
+	short      bool      // a room left is below zero
+	left       []float64 // by obstacle: the least that is left to it, m; NaN where it is nowhere in the way
+	fall       float64   // greatest free fall, m
+	travel     float64   // greatest travel of the path in a room, m
+	peak       float64   // greatest peak of a swing, N, and that of any later one
 	later      float64
 	givenFloor bool // an item is missing
 	modelFloor bool
@@ -55,7 +56,10 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 		for i := range n.strikes {
 			n.strikes[i] = strike{c.Position, false, nan, nan, nan}
 		}
-		n.aside = make([]int, len(n.strikes))
+		n.aside, n.left = make([]int, len(n.strikes)), make([]float64, len(n.strikes))
+		for i := range n.left {
+			n.left[i] = nan
+		}
 		n.need = [...]float64{nan, nan}
 		n.plan = rectangle{math.Inf(1), math.Inf(-1), math.Inf(1), math.Inf(-1)}
 	}
@@ -81,7 +85,6 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 	n.fastest = greater(n.fastest, r.Swing.LowestHigh)
 	n.givenFloor = n.givenFloor || r.Given.Floor
 	n.modelFloor = n.modelFloor || r.Modelled.Floor
-	n.short = n.short || r.Given.Known && r.Given.Left < 0 || r.Modelled.Known && r.Modelled.Left < 0
 	if c.Path != nil {
 		count(&n.passed, !math.IsNaN(r.swungPass()))
 		n.travel = greater(n.travel, p.Model.travel(r))
@@ -115,8 +118,19 @@ func (n *layoutNotes) places(r *LayoutRun) {
 	for k, room := range [...]*Room{&r.Given, &r.Modelled} {
 		if room.Known {
 			n.need[k] = greater(n.need[k], room.Counts)
+			for _, l := range room.Lefts.List[:room.Lefts.Count] {
+				n.leaves(l.Obstacle, l.Left)
+			}
 		}
 	}
+}
+
+// leaves notes what is left to an obstacle.
+func (n *layoutNotes) leaves(obstacle int, left float64) {
+	if left < n.left[obstacle] || math.IsNaN(n.left[obstacle]) {
+		n.left[obstacle] = left
+	}
+	n.short = n.short || left < 0
 }
 
 // greater returns the greater of two figures of which the first may be NaN.
@@ -398,17 +412,17 @@ func (s *spans) boxes(j *Job) {
 	lo, hi := ends(j)
 	for i := range j.Point.Layout.Obstacles {
 		o := &j.Point.Layout.Obstacles[i]
-		if o.level() || o.Moving || n.aside[i] == 0 || !n.plan.meets(o, &lo, &hi, j.Point.Layout.HalfWidth) {
+		if o.level() || o.Moving || n.aside[i] == 0 || !n.shifts(j.Point.Layout, o, &lo, &hi) || !n.plan.meets(o, &lo, &hi, j.Point.Layout.HalfWidth) {
 			continue
 		}
 		room := lo.Figures[o.Below]
 		for k, e := range [...]Evidence{Given, Modelled} {
 			of := indexOf(ClearanceLeft, e)
-			left := room - n.need[k]
+			left := rig.Remains(room, n.need[k])
 			if math.IsNaN(left) {
 				continue
 			}
-			n.short = n.short || left < 0
+			n.leaves(i, left)
 			switch span := &s.of[of]; {
 			case !span.known():
 				where := s.of[indexOf(ClearanceNeeded, e)].high.where
@@ -419,6 +433,20 @@ func (s *spans) boxes(j *Job) {
 			}
 		}
 	}
+}
+
+// shifts reports whether anything that a box is in the way by has two ends.
+func (n *layoutNotes) shifts(plan *LayoutPlan, o *PlannedObstacle, lo, hi *Case) bool {
+	pos := &plan.Positions[n.position]
+	for _, f := range [...]int{
+		pos.Along, pos.Out, plan.BehindEdge, plan.HalfWidth, plan.DRing,
+		o.Below, o.Height, o.AlongFrom, o.AlongTo, o.OutFrom, o.OutTo,
+	} {
+		if f != NoFigure && lo.Figures[f] < hi.Figures[f] {
+			return true
+		}
+	}
+	return plan.Edge != rig.NoEdge && n.tried > 1 // whether the connector is over it
 }
 
 func span2(x float64, where int) span { return span{extreme{x, where}, extreme{x, where}} }

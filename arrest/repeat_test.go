@@ -107,3 +107,15 @@ func BenchmarkRepeat(b *testing.B) {
 		repeat.Evaluate()
 	}
 }
+
+// A layout in which nobody can stand, for a part of the bands, is refused in a
+// repeat too: 2 m of connector do not get to a D-ring 1.5 m below and 1.4 m
+// beside the anchor, sqrt(1.5^2 + 1.4^2) = 2.05 m away.
+func TestRepeatRefusesALayoutOutOfReach(t *testing.T) {
+	for along, want := range map[string]bool{"1.2 m": false, "1.2 m ± 0.2 m": true, "1.4 m": true, "3 m": true} {
+		j := laidOutJob(t, overhead(along))
+		if got, repeated := Refused(j), NewRepeat(j).Refused(); got != want || repeated != want {
+			t.Errorf("%s: %v and, repeated, %v", along, got, repeated)
+		}
+	}
+}

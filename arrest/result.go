@@ -1,6 +1,9 @@
 package arrest
 
-import "arrestcheck/arrest/quantity"
+import (
+	"arrestcheck/arrest/quantity"
+	"arrestcheck/arrest/rig"
+)
 
 // An Arg is one figure or text that a sentence about a result needs. The
 // mechanics hold no sentences: they give ids and arguments.
@@ -36,10 +39,11 @@ type Term struct {
 type Corner string
 
 const (
-	AtWritten Corner = "as written"   // the middle figures, where all are written
-	AtLow     Corner = "low end"      // the least result the entries allow
-	AtHigh    Corner = "high end"     // the greatest
-	AtLongest Corner = "longest stop" // of a ModelRun: the greatest stopping distance
+	AtWritten Corner = "as written"     // the middle figures, where all are written
+	AtLow     Corner = "low end"        // the least result the entries allow
+	AtHigh    Corner = "high end"       // the greatest
+	AtLongest Corner = "longest stop"   // of a ModelRun: the greatest stopping distance
+	AtReach   Corner = "farthest reach" // of a LayoutPlace that no fall follows from: the connector reaches farthest
 )
 
 // A WorkingLine is one formula with the figures put in and its result. The
@@ -93,7 +97,11 @@ type LayoutResult struct {
 // A LayoutPlace is one position at one point.
 type LayoutPlace struct {
 	Index  int    // of the position
-	Corner Corner // AtWritten where all of the layout has middle figures, else AtHigh, the point of the greatest free fall from there
+	Corner Corner // AtWritten where all of the layout has middle figures, else AtHigh, the point of the greatest free fall from there, or, without a fall, AtReach
 	Case   Case
 	Run    LayoutRun
+
+	// Farthest is the reach against the edge at the point of the entries where the
+	// connector reaches farthest towards it and beyond, whatever the Corner.
+	Farthest rig.Restraint
 }

@@ -39,6 +39,7 @@ const (
 	LedgersClose             WarningID = "ledgers_close"               // momentum left over momentum, energy left over energy (ratios): arithmetic only
 	LayoutRestrained         WarningID = "layout_restrained"           // position: over all of the entries the connector ends before the edge
 	LayoutRestrainedInPart   WarningID = "layout_restrained_in_part"   // position: over part of the entries only
+	LayoutGoneOver           WarningID = "layout_gone_over"            // position, reach in plan (length), way to the edge (length): upright the connector ends before the edge, but it can be gone over there
 	LayoutEdge               WarningID = "layout_edge"                 // position, document that rates a part for the edge: the connector comes to the edge
 	LayoutEdgeUnrated        WarningID = "layout_edge_unrated"         // position: it comes to an edge that no part is rated for
 	LayoutAnchorLow          WarningID = "layout_anchor_low"           // greatest free fall (length), least connector length (length): the anchor is below the D-ring, the fall longer than the connector
@@ -46,6 +47,7 @@ const (
 	LayoutIntoFace           WarningID = "layout_into_face"            // position: the swing goes into the structure below the edge
 	LayoutStrikes            WarningID = "layout_strikes"              // position, obstacle, least speed, greatest speed: the body comes to it
 	LayoutStrikesFalling     WarningID = "layout_strikes_falling"      // position, obstacle, greatest speed: it comes to it before the first pull
+	LayoutShort              WarningID = "layout_short"                // position, obstacle, length: by so much the room down to it is less than the room needed
 	LayoutStrikeForce        WarningID = "layout_strike_force"         // obstacle, distance stated, mean force of the hit not less than
 	LayoutNothingBelow       WarningID = "layout_nothing_below"        // none: no obstacle was entered, so nothing is left to anything
 	LayoutNoClearance        WarningID = "layout_no_clearance"         // none: no [clearance] was entered
@@ -94,6 +96,7 @@ var warningIDs = [...]WarningID{
 	LedgersClose,
 	LayoutRestrained,
 	LayoutRestrainedInPart,
+	LayoutGoneOver,
 	LayoutEdge,
 	LayoutEdgeUnrated,
 	LayoutAnchorLow,
@@ -101,6 +104,7 @@ var warningIDs = [...]WarningID{
 	LayoutIntoFace,
 	LayoutStrikes,
 	LayoutStrikesFalling,
+	LayoutShort,
 	LayoutStrikeForce,
 	LayoutNothingBelow,
 	LayoutNoClearance,

@@ -235,7 +235,7 @@ func newPosition(plan *arrest.LayoutPlan, p *arrest.LayoutPlace) jsonPosition {
 }
 
 func newRestraint(plan *arrest.LayoutPlan, p *arrest.LayoutPlace) jsonRestraint {
-	r := &p.Run.Restraint
+	r := &p.Farthest
 	j := jsonRestraint{Reach: figure(r.Reach), StandingReach: figure(r.StandingReach)}
 	j.EdgeDistance, j.Left, j.EdgeNearest = figure(math.NaN()), figure(math.NaN()), figure(math.NaN())
 	if plan.Edge != rig.NoEdge {

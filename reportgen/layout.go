@@ -251,7 +251,7 @@ func (b *builder) restraintBlocks(l *arrest.LayoutResult) []Block {
 	t := &Table{Header: restraintHead, Widths: []int{24, 17, 17, 16}}
 	for i := range l.Places {
 		p := &l.Places[i]
-		r := &p.Run.Restraint
+		r := &p.Farthest
 		left, gone := b.marginText(r.Margin[p.Index])
 		t.Rows = append(t.Rows, Row{Loud: gone, Cells: []string{
 			quote(l.Plan.Positions[p.Index].Name), b.known(quantity.Length, r.Reach), b.known(quantity.Length, r.EdgeDistance[p.Index]), left,
@@ -274,7 +274,7 @@ func (b *builder) marginText(margin float64) (text string, gone bool) {
 // restraintSays says whether the edge can be gone over anywhere.
 func (b *builder) restraintSays(l *arrest.LayoutResult) string {
 	for i := range l.Places {
-		if r := &l.Places[i].Run.Restraint; r.Passed {
+		if r := &l.Places[i].Farthest; r.Passed {
 			return b.say(restraintOver, b.known(quantity.Length, r.Nearest))
 		}
 	}

@@ -24,6 +24,8 @@ func TestStatementsOfTheLayout(t *testing.T) {
 	}{
 		{"S-56", arrest.LayoutRestrained, []arrest.Arg{text("north end")}, "before the edge, over all of the entries; no fall"},
 		{"S-56", arrest.LayoutRestrainedInPart, []arrest.Arg{text("north end")}, "before the edge, over part of the entries only; for the rest"},
+		{"S-87", arrest.LayoutGoneOver, []arrest.Arg{text("north end"), length(2), length(1.8)}, "only while the body is upright. Bent or kneeling, its point of attachment gets 2.00 m (6.56 ft) from the anchor in plan, and the edge is 1.80 m (5.91 ft) away"},
+		{"S-86", arrest.LayoutShort, []arrest.Arg{text("north end"), text("truck"), length(1.3)}, `down to "truck" falls short of the room needed, margin counted in, by up to 1.30 m (4.27 ft)`},
 		{"S-57", arrest.LayoutEdge, []arrest.Arg{text("north end"), text("edge sheet 3")}, `rated for it by "edge sheet 3"`},
 		{"S-58", arrest.LayoutEdgeUnrated, []arrest.Arg{text("north end")}, "no part is rated for"},
 		{"S-59", arrest.LayoutAnchorLow, []arrest.Arg{length(3.3), length(1.8)}, "goes up to 3.30 m (10.8 ft), more than the length of the connector, 1.80 m (5.91 ft)"},

@@ -49,7 +49,7 @@ var closedSets = map[reflect.Type][]string{
 	reflect.TypeFor[limits.Outcome]():  wordsOf(limits.Outcomes()...),
 	reflect.TypeFor[limits.Sense]():    wordsOf(limits.AtMost, limits.AtLeast),
 	reflect.TypeFor[arrest.Evidence](): wordsOf(arrest.Given, arrest.Shape, arrest.Rated, arrest.Modelled, arrest.Measured),
-	reflect.TypeFor[arrest.Corner]():   wordsOf(arrest.AtWritten, arrest.AtLow, arrest.AtHigh, arrest.AtLongest),
+	reflect.TypeFor[arrest.Corner]():   wordsOf(arrest.AtWritten, arrest.AtLow, arrest.AtHigh, arrest.AtLongest, arrest.AtReach),
 }
 
 func wordsOf[T ~string](list ...T) []string {

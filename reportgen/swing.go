@@ -79,7 +79,7 @@ func (w *swinging) lowest(p *arrest.LayoutPlace) {
 	w.add(false, speedSideways, w.speed(s.Tangential), notOfThisModel)
 	w.add(false, speedAtLowest, w.between(quantity.Speed, s.LowestLow, s.LowestHigh), w.speed(m.Lowest.Speed))
 	w.add(false, straightFall, w.between(quantity.Length, fall(s.LowestLow), s.Height), w.length(m.Lowest.Height))
-	w.add(false, timeToLowest, atMostWord+" "+w.known(quantity.Time, s.Time), w.three(quantity.Time, m.Lowest.Time-m.FirstPull))
+	w.add(false, timeToLowest, atMostWord+" "+w.ceiling(quantity.Time, s.Time), w.three(quantity.Time, m.Lowest.Time-m.FirstPull))
 	w.add(false, dropToLowest, w.known(quantity.Length, p.Run.Place.FreeFall+p.Run.Place.SwingDrop), w.length(m.Lowest.Drop))
 }
 
@@ -87,8 +87,8 @@ func (w *swinging) lowest(p *arrest.LayoutPlace) {
 func (w *swinging) arrest(m *rig.Planar) {
 	w.add(m.Status == rig.Endless || m.Status == rig.Rigid, endsWord, notOfThisModel, plannedStatus[m.Status])
 	w.add(false, swungPeak, notOfThisModel, w.force3(m.Peak))
-	w.add(false, laterPeak, notOfThisModel, w.known(quantity.Force, m.PeakBound))
-	w.add(false, laterDrop, notOfThisModel, w.known(quantity.Length, m.DropBound))
+	w.add(false, laterPeak, notOfThisModel, w.ceiling(quantity.Force, m.PeakBound))
+	w.add(false, laterDrop, notOfThisModel, w.ceiling(quantity.Length, m.DropBound))
 }
 
 // obstacle is the first touch of one obstacle.
@@ -184,6 +184,14 @@ func (w *swinging) floor(si float64) string {
 	return w.d.figure(quantity.Force, si, pageDigits, quantity.Down)
 }
 
+// ceiling returns a figure that is not more than what is printed.
+func (w *swinging) ceiling(d quantity.Dimension, si float64) string {
+	if math.IsNaN(si) || math.IsInf(si, 1) {
+		return w.known(d, si)
+	}
+	return w.d.figure(d, si, pageDigits, quantity.Up)
+}
+
 // between returns what lies between two figures; the upper one where only with
 // more than the lower one the body comes there.
 func (w *swinging) between(d quantity.Dimension, low, high float64) string {
@@ -191,7 +199,7 @@ func (w *swinging) between(d quantity.Dimension, low, high float64) string {
 	case math.IsNaN(high):
 		return notKnown
 	case math.IsNaN(low):
-		return w.say(openBelow, w.d.figure(d, high, pageDigits, quantity.Nearest))
+		return w.say(openBelow, w.ceiling(d, high))
 	}
 	return w.d.span(d, quantity.Unit{}, low, high, pageDigits)
 }

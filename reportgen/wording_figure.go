@@ -36,6 +36,7 @@ var drawnAt = map[arrest.Corner]string{
 	arrest.AtLow:     "at the low end of the entries",
 	arrest.AtHigh:    "at the greatest free fall over the entries",
 	arrest.AtLongest: "at the longest stop over the entries",
+	arrest.AtReach:   "where the connector reaches farthest over the entries",
 }
 
 const (

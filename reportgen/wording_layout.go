@@ -17,6 +17,8 @@ var layoutEntered = statement{"S-54", quiet, phrase{nil,
 var (
 	layoutRestrained = statement{"S-56", loud, phrase{[]string{"position", "extent"},
 		"At \"{position}\" the connector ends before the edge, {extent}. It holds a body back there only while anchor, length and the place along the edge stay as entered: a part that stretches, a stumble or a step to the side reach farther."}}
+	layoutGoneOver = statement{"S-87", loud, phrase{[]string{"position", "reach", "way"},
+		"At \"{position}\" the connector ends before the edge only while the body is upright. Bent or kneeling, its point of attachment gets {reach} from the anchor in plan, and the edge is {way} away: it can be gone over there. No fall was worked out from there, and no row that rests on the layout is within."}}
 	layoutEdge = statement{"S-57", loud, phrase{[]string{"position", "document"},
 		"At \"{position}\" the connector comes to the edge. A part is rated for it by \"{document}\": read there for which edge, which fall, how far to the side and with which anchor. The wear on the edge, and what the edge does to the forces, were not worked out."}}
 	layoutEdgeUnrated = statement{"S-58", loud, phrase{[]string{"position"},
@@ -31,6 +33,8 @@ var (
 		"From \"{position}\" the body comes to \"{obstacle}\" after the first pull, with {least .. greatest}. What the sheet says of this fall holds only up to there, and no row that rests on it is within. A blow from the side hurts as one from below does."}}
 	layoutStrikesFalling = statement{"S-63", loud, phrase{[]string{"position", "obstacle", "greatest"},
 		"From \"{position}\" the body comes to \"{obstacle}\" before the first pull, with up to {greatest}: the connector does not arrest this fall, and no row that rests on it is within."}}
+	layoutShort = statement{"S-86", loud, phrase{[]string{"position", "obstacle", "short"},
+		"From \"{position}\" the room down to \"{obstacle}\" falls short of the room needed, margin counted in, by up to {short} as entered; an item that is missing, or the error of a model, comes on top. No row that rests on this fall is within: look for an anchor higher up, a shorter system, or take away what is below."}}
 	layoutStrikeForce = statement{"S-64", loud, phrase{[]string{"obstacle", "distance", "force"},
 		"If \"{obstacle}\" stops the body over {distance}, as entered, the mean force of the blow is not less than {force}, and its peak is higher. Nobody has measured this blow."}}
 	roomUnknown = statement{"S-65", loud, phrase{[]string{"room"},
@@ -69,7 +73,7 @@ const (
 	layoutHeading = "The layout: swing and the room below"
 
 	positionsHeading = "The layout, position by position"
-	placesText       = "Heights count from the walking surface, upwards. A position with several figures entered as bands stands at the point of them that gives it the greatest free fall; page 1 has what each figure lies between."
+	placesText       = "Heights count from the walking surface, upwards. A position with several figures entered as bands stands at the point of them that gives it the greatest free fall, or, where no fall follows, lets the connector reach farthest; page 1 has what each figure lies between."
 	worstPlacesText  = "The worst of the positions, and for what; page 1 has the figures:"
 	followsWord      = "what follows"
 	offsetInPlan     = "offset from the anchor in plan"
@@ -89,7 +93,7 @@ const (
 	noFall           = "no fall"
 
 	restraintHeading = "Does the connector end before the edge?"
-	restraintText    = "How far from the anchor the D-ring can get in plan, at whatever height it is carried, against the way to the edge from there. What parts stretch under a stumble, and what of the body is beyond its D-ring, is not counted in."
+	restraintText    = "How far from the anchor the D-ring can get in plan, at whatever height it is carried, against the way to the edge from there, at the point of the entries that lets it get farthest. What parts stretch under a stumble, and what of the body is beyond its D-ring, is not counted in."
 	edgeCrossed      = "none: it can be gone over there"
 	restraintHolds   = "As entered the connector ends before the edge everywhere along it."
 )
@@ -99,7 +103,7 @@ var (
 	restraintOver = phrase{[]string{"nearest"}, "As entered the edge can be gone over, at one of the positions or at its point nearest to the anchor, {nearest} away: it is a fall that has to be arrested."}
 
 	// placeCorners says at which of the entries a position stands.
-	placeCorners = map[arrest.Corner]string{arrest.AtWritten: "as written", arrest.AtHigh: "at the greatest free fall"}
+	placeCorners = map[arrest.Corner]string{arrest.AtWritten: "as written", arrest.AtHigh: "at the greatest free fall", arrest.AtReach: "at the farthest reach"}
 
 	placeStatus = map[rig.Status]string{
 		rig.Known:       "a free fall",
@@ -209,7 +213,7 @@ var (
 var (
 	edgeContact  = phrase{nil, "somewhere in the entries the connector comes to an edge"}
 	bodyStrikes  = phrase{nil, "somewhere in the entries the body comes to an obstacle or to the structure"}
-	placeUnknown = phrase{nil, "for part of the entries the connector ends before the edge, or the swing is in no plane"}
+	placeUnknown = phrase{nil, "for part of the entries, or only for an upright body, the connector ends before the edge, or the swing is in no plane"}
 )
 
 const layoutTakesLonger = "Not worked out on this sheet: for each figure the worst of the positions is looked for anew. Call: arrestcheck sensitivity JOB."

@@ -138,7 +138,7 @@ var warningArguments = map[arrest.WarningID]int{
 	arrest.PathExhausted: 3, arrest.PathRigid: 0, arrest.PathBeyondCurve: 1, arrest.StaticStretchOnly: 1,
 	arrest.SeveralAbsorbers: 1, arrest.AbsorberOnRetractable: 1, arrest.NothingAbsorbs: 1, arrest.NoAllowanceEntered: 0,
 	arrest.RatedAgainstModel: 4, arrest.LedgersClose: 2, arrest.NoMiddle: 1, arrest.PathExhaustedInAllowance: 3,
-	arrest.LayoutRestrained: 1, arrest.LayoutRestrainedInPart: 1, arrest.LayoutEdge: 2,
+	arrest.LayoutRestrained: 1, arrest.LayoutRestrainedInPart: 1, arrest.LayoutGoneOver: 3, arrest.LayoutShort: 3, arrest.LayoutEdge: 2,
 	arrest.LayoutEdgeUnrated: 1, arrest.LayoutAnchorLow: 2, arrest.LayoutOutOfPlane: 1, arrest.LayoutIntoFace: 1,
 	arrest.LayoutStrikes: 4, arrest.LayoutStrikesFalling: 3, arrest.LayoutStrikeForce: 3, arrest.LayoutNothingBelow: 0,
 	arrest.LayoutNoClearance: 0, arrest.LayoutItemsMissing: 3, arrest.LayoutDatumsApart: 2, arrest.LayoutFeetStanding: 0,

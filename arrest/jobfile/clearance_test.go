@@ -58,7 +58,7 @@ func TestItemsCountedOnce(t *testing.T) {
 
 // A connector that ends before the edge needs no room, so nothing is counted.
 func TestNothingCountedInRestraint(t *testing.T) {
-	text := layoutJob("anchor_height = \"0.4 m\"", "edge = \"round\"\nanchor_behind_edge = \"4 m\"", "out = \"-1 m\"", "[clearance]\ndatum = \"feet\"\nmargin = \"1 m\"")
+	text := layoutJob("anchor_height = \"0.4 m\"", "edge = \"round\"\nanchor_behind_edge = \"4 m\"", "out = \"-3 m\"", "[clearance]\ndatum = \"feet\"\nmargin = \"1 m\"")
 	f, err := jobfile.Read("job", []byte(text), nil)
 	if err != nil {
 		t.Fatal(err)

@@ -117,7 +117,7 @@ func (t *table) bands(j *arrest.Job, e *inputs) {
 	}
 	e.refused = true
 	t.page.fault(in.Key, in.Key, in.Band.Text, fmt.Sprintf("this is the %dth figure with a band; %severy combination of the ends of %d bands is worked out, and of more it is not", most+1, why, most),
-		"write: one figure in place of a band where the band is narrowest, here or further up")
+		"write: one figure, with ± 0 where it is settled, in place of a band where the band is narrowest, here or further up")
 }
 
 // wide returns the input whose band is the first beyond so many, nil where the

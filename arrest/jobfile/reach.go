@@ -1,6 +1,7 @@
 package jobfile
 
 import (
+	"math"
 	"strconv"
 
 	"arrestcheck/arrest"
@@ -66,6 +67,27 @@ func (in *inputs) nearest(i int) arrest.Case {
 		c.Figures[pos.Out] = min(0, out.Low)
 	}
 	return c
+}
+
+// farthest returns how far, m, the D-ring at the position i can be from the anchor
+// over all of the bands, and how far the connector reaches at its shortest.
+func (in *inputs) farthest(i int) (far, reach float64) {
+	p := &in.layout.plan
+	pos := &p.Positions[i]
+	off := func(a, b quantity.Band) float64 { return max(math.Abs(a.High-b.Low), math.Abs(a.Low-b.High)) }
+	var anchor quantity.Band
+	out := in.figures[pos.Out]
+	if p.Edge != rig.NoEdge { // who stands behind the edge is taken to go over it
+		out.Low, out.High = max(0, out.Low), max(0, out.High)
+		behind := in.figures[p.BehindEdge]
+		anchor.Low, anchor.High = -behind.High, -behind.Low
+	}
+	plan := math.Hypot(off(in.figures[pos.Along], quantity.Band{}), off(out, anchor))
+	reach = in.figures[p.Length].Low
+	if p.Slack != arrest.NoFigure {
+		reach += in.figures[p.Slack].Low
+	}
+	return math.Hypot(plan, off(in.figures[p.AnchorHeight], in.figures[p.DRing])), reach
 }
 
 // clamp returns the figure of a band that is nearest to x.
@@ -136,7 +158,11 @@ func (in *inputs) standsEverywhere(j *arrest.Job) {
 	case rig.OutOfReach:
 		in.refused = true
 		s := in.layout.positions[i]
-		s.page.fault(s.path, s.path, "", "for a part of the bands out of reach: there the D-ring at "+strconv.Quote(in.layout.plan.Positions[i].Name)+" is farther from the anchor than the connector reaches",
+		far, reach := in.farthest(i)
+		unit := in.layout.table.unitOf(in.figures[in.layout.plan.AnchorHeight])
+		figure := func(x float64) string { return quantity.Format(x, unit, 5, quantity.Nearest) }
+		s.page.fault(s.path, s.path, "", "for a part of the bands out of reach: from the anchor to the D-ring at "+strconv.Quote(in.layout.plan.Positions[i].Name)+" it is up to "+
+			figure(far)+", and the connector may reach no farther than "+figure(reach),
 			"measure: anchor, D-ring, position and connector again, to a tolerance with which the worker can stand there throughout")
 	case rig.InStructure:
 		in.inStructure("for a part of the bands ")

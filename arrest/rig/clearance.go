@@ -183,12 +183,22 @@ func (l *Layout) Left(p *Place, needed float64) Lefts {
 			r.Aside |= 1 << i
 			continue
 		}
-		r.List[r.Count] = Left{i, -o.High.Z, -o.High.Z - needed}
+		r.List[r.Count] = Left{i, -o.High.Z, Remains(-o.High.Z, needed)}
 		r.Count++
 	}
 	list := r.List[:r.Count]
 	slices.SortStableFunc(list, func(a, b Left) int { return compare(a.Left, b.Left) })
 	return r
+}
+
+// Remains returns the room less the room needed, in m: 0 where they are the same to
+// 12 digits, as two sums of decimals that come to the same seldom are the same bits.
+func Remains(room, needed float64) float64 {
+	left := room - needed
+	if math.Abs(left) <= 1e-12*max(math.Abs(room), math.Abs(needed)) {
+		return 0
+	}
+	return left
 }
 
 // compare puts NaN first.

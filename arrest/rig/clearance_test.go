@@ -200,3 +200,20 @@ func TestPublishedCasesOfTooLittleRoom(t *testing.T) {
 	// sqrt(1 + 1.5^2) + 0.6 of line from the start, 1 m of it up to the edge.
 	near(t, "its free fall", p.FreeFall, 1.5+math.Sqrt(3.25)+0.6-1, 1e-12)
 }
+
+// 1.61 + 0.1 + 1.1 m and 2.81 m are one length, not 4e-16 m apart.
+func TestNothingRemainsOfEqualSums(t *testing.T) {
+	sum, tenth, more := 1.61, 0.1, 1.1
+	sum = sum + tenth + more
+	if sum == 2.81 {
+		t.Fatal("the two sums are the same bits")
+	}
+	for _, c := range []struct{ room, needed, want float64 }{{2.81, sum, 0}, {sum, 2.81, 0}, {0, 0, 0}, {3, 2, 1}, {2, 3, -1}} {
+		if got := Remains(c.room, c.needed); got != c.want {
+			t.Errorf("%v less %v: %v, want %v", c.room, c.needed, got, c.want)
+		}
+	}
+	if got := Remains(2.81, 2.81+1e-9); math.Abs(got+1e-9) > 1e-15 {
+		t.Errorf("a nanometre too little: %v", got)
+	}
+}

@@ -45,7 +45,7 @@ var scriptsOf = map[string]int{
 	"solve":       2,
 	"stdin":       1,
 	"stream":      1,
-	"sweep":       4,
+	"sweep":       5,
 	"units":       1,
 	"usage":       1,
 	"version":     1,
