@@ -325,6 +325,10 @@ func TestSwingIsWorkedOutInTime(t *testing.T) {
 		if peak.Value != planar.Peak || given(t, &res, SwingSpeed, Modelled).Value != planar.Lowest.Speed || given(t, &res, TotalFallDistance, Modelled).Value-planar.Lowest.Drop > 1e-15 {
 			t.Errorf("peak %v, want %v", peak.Value, planar.Peak)
 		}
+		// What is held against a limit is the peak of any later swing too.
+		if peak.Low != planar.Peak || peak.High != math.Max(planar.Peak, planar.PeakBound) || !(peak.High > peak.Low) {
+			t.Errorf("peak from %v to %v, want %v to %v", peak.Low, peak.High, planar.Peak, planar.PeakBound)
+		}
 	}
 }
 

@@ -47,6 +47,7 @@ type siting struct {
 	pos    *PlannedPosition
 	lo, hi Case
 	axes   []axis
+	drawn  rig.Layout // memory to look at one point
 }
 
 func newSiting(j *Job) *siting {
@@ -277,35 +278,47 @@ func (g *siting) square(corner *Case, yield func(*Case)) {
 // from one corner to the next, the connector just comes to the edge: the swing
 // turns about another point there, and its figures leap.
 func (g *siting) grazing(corner *Case, yield func(*Case)) {
-	var l rig.Layout
 	over := func(c *Case) bool {
-		g.plan.fill(c, &l)
-		return l.At(c.Position).OverEdge
+		g.plan.fill(c, &g.drawn)
+		place := g.drawn.At(c.Position)
+		return place.OverEdge
 	}
 	for _, to := range g.axes {
 		low, high := *corner, *corner
-		to(&low, false)
-		to(&high, true)
-		if low != *corner || over(&low) == over(&high) {
+		if to(&low, false); low != *corner {
 			continue
 		}
+		to(&high, true)
 		first := over(&low)
-		a, b := low, high
-		for range 60 {
-			m := low
-			for i := range m.Figures {
+		if first == over(&high) {
+			continue
+		}
+		var moved []int
+		for i := range low.Figures {
+			if low.Figures[i] != high.Figures[i] {
+				moved = append(moved, i)
+			}
+		}
+		a, b, m := low, high, low
+		for range halvings {
+			for _, i := range moved {
 				m.Figures[i] = a.Figures[i] + (b.Figures[i]-a.Figures[i])/2
 			}
+			end := &b
 			if over(&m) == first {
-				a = m
-			} else {
-				b = m
+				end = &a
+			}
+			for _, i := range moved {
+				end.Figures[i] = m.Figures[i]
 			}
 		}
 		yield(&a)
 		yield(&b)
 	}
 }
+
+// halvings close in on a point of a band to about the last digit of a figure.
+const halvings = 52
 
 // lineEnds calls the function with the points beside a corner at which a figure of
 // a retractable has an end: its line comes to its end on the way from the nearest

@@ -13,8 +13,8 @@ import (
 func (ev *evaluation) value(i int) float64 {
 	o := &outputs[i]
 	of := func(p *Point) float64 {
-		x := o.of(p)
-		if x != o.low(p) {
+		x := o.low(p)
+		if o.evidence == Shape && x != o.of(p) {
 			return nan // two ends, even at one point
 		}
 		return x

@@ -76,11 +76,24 @@ func (m *PathRun) stopped(x float64) float64 {
 	return x
 }
 
-// peak returns the greatest force, N, of the stop or of the swing; +Inf where
-// nothing gives way or nothing stops the body.
+// peak returns the greatest force, N, of the stop, or the greatest that the swing
+// or any later one can have (see rig.Planar.PeakBound); +Inf where nothing gives
+// way or nothing stops the body.
 func (m *PathRun) peak(p *Point) float64 {
 	if !m.Swings || m.Failed != nil || m.NoFall {
 		return m.stopped(m.Run.Peak)
+	}
+	peak := p.Layout.swungPeak()
+	if bound := p.Layout.Planar.PeakBound; bound > peak {
+		return bound
+	}
+	return peak
+}
+
+// swungPeak returns the greatest force, N, of the swing that was worked out.
+func (m *PathRun) swungPeak(p *Point) float64 {
+	if m.Failed != nil || m.NoFall {
+		return nan
 	}
 	return p.Layout.swungPeak()
 }

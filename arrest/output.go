@@ -57,8 +57,17 @@ type output struct {
 }
 
 // low returns the least of an output at one point, where a point has two ends:
-// the speeds of a swing without stretch.
+// the speeds of a swing without stretch, and the peak of a swing, which a later
+// swing may exceed up to a bound.
 func (o *output) low(p *Point) float64 {
+	if o.evidence == Modelled && p.Model != nil && p.Model.Swings {
+		switch o.quantity {
+		case PeakForce, AnchorForce:
+			return p.Model.swungPeak(p)
+		case ForceOverWeight:
+			return p.Model.swungPeak(p) / p.Weight
+		}
+	}
 	if o.evidence == Shape && o.quantity == SwingSpeed && p.Layout != nil && p.Layout.Place.Plane.Offset > 0 {
 		return p.Layout.Swing.LowestLow
 	}

@@ -130,7 +130,7 @@ func (s *spans) take(p *Point, where int, list []int) {
 			continue
 		}
 		s.of[i].take(outputs[i].of(p), where)
-		if p.Layout != nil && outputs[i].evidence == Shape {
+		if p.Layout != nil {
 			s.of[i].take(outputs[i].low(p), where)
 		}
 	}

@@ -46,7 +46,7 @@ var (
 	bodySizeUnknown = statement{"S-68", quiet, phrase{[]string{"size"},
 		"How far the body reaches from its D-ring was not entered in full: {size}."}}
 	layoutLaterSwing = statement{"S-69", loud, phrase{[]string{"peak", "bound"},
-		"A later swing can pull harder than the one worked out: the model comes to a peak of {peak}, and no swing on this path, this one or a later one, goes above {bound}."}}
+		"A later swing can pull harder than the one worked out: the model comes to a peak of {peak}, and no swing on this path, this one or a later one, goes above {bound}. Limits are held against the greater of the two."}}
 	layoutInextensible = statement{"S-79", quiet, phrase{nil,
 		"The speeds of the swing and what follows from them are marked \"if the connector did not stretch\". With one that stretches, the body goes deeper and can be faster, so that neither end bounds anything. They decide no limit."}}
 )
