@@ -62,9 +62,23 @@ func layoutAt(c *Case, p *Point) float64 {
 	r := p.Layout
 	c.Layout.fill(c, &r.Layout)
 	r.Place = r.Layout.At(c.Position)
+	for _, x := range [...]*float64{&r.Place.FreeFall, &r.Place.HeldFreeFall, &r.Place.SwingDrop, &r.Place.Depth} {
+		*x = decimal(*x)
+	}
 	r.Restraint = r.Layout.Restrain()
 	r.Planar.Status = 0
 	return r.Place.FreeFall
+}
+
+// decimal returns x without what adding up lengths in binary has put behind its
+// last decimal, m: entries in metres, feet and inches are decimals of a few places,
+// and a sum of them that equals a limit has to equal it here too. Only what lies
+// within a few units of the last binary place of a whole nanometre is moved there.
+func decimal(x float64) float64 {
+	if y := math.Round(x*1e9) / 1e9; math.Abs(x-y) <= 4e-15*(1+math.Abs(x)) {
+		return y
+	}
+	return x
 }
 
 // swings reports whether the body goes sideways after the first pull.
@@ -143,9 +157,9 @@ func (room *Room) sum(plan *ClearancePlan, r *LayoutRun) {
 	if plan.Datum == rig.BelowAnchor {
 		s, below = &room.Anchor, r.Layout.Anchor.Z
 	}
-	room.Needed = s.Needed
+	room.Needed = decimal(s.Needed)
 	if s.Missing != 0 && s.Twice == 0 {
-		room.Floor, room.Needed = true, s.Present
+		room.Floor, room.Needed = true, decimal(s.Present)
 	}
 	room.Counts = room.Needed - below
 	for _, x := range [...]float64{room.Feet.Needed, room.Anchor.Needed - r.Layout.Anchor.Z} {
@@ -181,7 +195,7 @@ func (r *LayoutRun) totalFall(room *Room) float64 {
 	if !room.Known || r.swings() || !room.Clearance.Entries[rig.ItemDeceleration].Present {
 		return nan
 	}
-	return r.Place.FreeFall + room.Clearance.Entries[rig.ItemDeceleration].Value
+	return decimal(r.Place.FreeFall + room.Clearance.Entries[rig.ItemDeceleration].Value)
 }
 
 // swingSpeed is the greatest speed of a swing without stretch at its lowest

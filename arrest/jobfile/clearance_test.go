@@ -78,7 +78,7 @@ func TestClearanceFromAFile(t *testing.T) {
 	fall := 1.4 - (2.6 - 2.0)
 	near(t, "below the feet", run.Given.Feet.Needed, fall+1.2+0.05+1, 1e-12)
 	near(t, "below the anchor", run.Given.Anchor.Needed, 2.0+1.2+0.05+1+1.6, 1e-12)
-	near(t, "needed", run.Given.Needed, run.Given.Anchor.Needed, 0)
+	near(t, "needed", run.Given.Needed, run.Given.Anchor.Needed, 1e-15)
 	f = goodJob(t, "layout-feet.toml")
 	run = arrest.LayoutAt(&f.Job.Point)
 	near(t, "at the low ends", run.Given.Needed, 3.3+1.4+0+0.3+0+1, 1e-12)
