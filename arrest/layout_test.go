@@ -409,7 +409,9 @@ func TestLayoutSpansHoldEveryPoint(t *testing.T) {
 				low, high := o.low(&p), o.of(&p)
 				k := res.estimate(o.quantity, o.evidence)
 				if math.IsNaN(high) || k < 0 {
-					if !math.IsNaN(high) {
+					// A box beyond the height that the body comes from, which only a
+					// swing without any loss reaches, may be missed between the corners.
+					if !math.IsNaN(high) && !(o.quantity == SpeedAtObstacle && onlyWithoutLoss(p.Layout)) {
 						t.Fatalf("%d: no estimate of %s", n, o.quantity)
 					}
 					continue
@@ -419,8 +421,7 @@ func TestLayoutSpansHoldEveryPoint(t *testing.T) {
 				if e.Bound == AtLeast {
 					top = e.Reach
 				}
-				// A kink is closed in on to about 1e-5 of a band.
-				give := 2e-5 * (1 + math.Abs(high))
+				give := 1e-9 * (1 + math.Abs(high))
 				if e.Bound == AtMost {
 					low = math.Inf(1)
 				}
@@ -433,6 +434,17 @@ func TestLayoutSpansHoldEveryPoint(t *testing.T) {
 	if tried < 200 {
 		t.Errorf("only %d layouts were tried", tried)
 	}
+}
+
+// onlyWithoutLoss reports whether the swing comes to no obstacle but with more
+// speed than the least.
+func onlyWithoutLoss(r *LayoutRun) bool {
+	for i := range r.Layout.ObstacleCount {
+		if p := &r.Swing.Passes[i]; p.Reached && !math.IsNaN(p.Low) {
+			return false
+		}
+	}
+	return true
 }
 
 // Somebody stands out of reach in a part of the entries or in all: told before

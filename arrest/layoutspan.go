@@ -41,6 +41,9 @@ type layoutNotes struct {
 	modelFloor bool
 
 	plan  rectangle  // all places that the body swings over
+	start rectangle  // all places that it falls from
+	feet  float64    // the lowest that the feet come to, m; NaN where no point says
+	clear [2]float64 // greatest left to levels and to what moves, m: given, modelled; NaN where there are none
 	aside []int      // by obstacle: the points at which it is not in the way
 	need  [2]float64 // greatest room needed below the feet, m: given, modelled
 	open  [2]bool    // what is left comes from a box that is at no point tried in the way
@@ -60,7 +63,8 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 		for i := range n.left {
 			n.left[i] = nan
 		}
-		n.need = [...]float64{nan, nan}
+		n.need, n.clear, n.feet = [...]float64{nan, nan}, [...]float64{nan, nan}, nan
+		n.start = rectangle{math.Inf(1), math.Inf(-1), math.Inf(1), math.Inf(-1)}
 		n.plan = rectangle{math.Inf(1), math.Inf(-1), math.Inf(1), math.Inf(-1)}
 	}
 	n.tried++
@@ -93,6 +97,9 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 		}
 	}
 	n.places(r)
+	if z := lowestFeet(p); !(n.feet <= z) {
+		n.feet = z
+	}
 	for i := range n.strikes {
 		n.strike(c, p, i)
 	}
@@ -102,6 +109,7 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 func (n *layoutNotes) places(r *LayoutRun) {
 	pl := &r.Place.Plane
 	n.plan.take(r.Place.Start.X, r.Place.Start.Y)
+	n.start.take(r.Place.Start.X, r.Place.Start.Y)
 	if pl.Flat {
 		n.plan.take(pl.X-float64(pl.DX*pl.Offset), pl.Y-float64(pl.DY*pl.Offset))
 	}
@@ -118,11 +126,29 @@ func (n *layoutNotes) places(r *LayoutRun) {
 	for k, room := range [...]*Room{&r.Given, &r.Modelled} {
 		if room.Known {
 			n.need[k] = greater(n.need[k], room.Counts)
+			least := nan
 			for _, l := range room.Lefts.List[:room.Lefts.Count] {
 				n.leaves(l.Obstacle, l.Left)
+				if o := &r.Layout.Obstacles[l.Obstacle]; (o.Kind == rig.Level || o.Moving) && !(least <= l.Left) {
+					least = l.Left
+				}
 			}
+			n.clear[k] = greater(n.clear[k], least)
 		}
 	}
+}
+
+// lowestFeet returns the lowest height that the feet come to at one point, m:
+// hanging below the connector, and after its travel where a path gives it.
+func lowestFeet(p *Point) float64 {
+	r := p.Layout
+	z := r.Place.Lowest
+	if p.Model != nil && p.Model.Swings {
+		z = r.Planar.Lowest.Z
+	} else if p.Model != nil && !p.Model.NoFall && p.Model.Failed == nil {
+		z -= p.Model.Run.StoppingDistance
+	}
+	return z - r.Layout.Feet
 }
 
 // leaves notes what is left to an obstacle.
@@ -404,33 +430,70 @@ func (s *spans) overRuns(g *siting) {
 	searchPath(s)
 }
 
-// boxes lowers what is left by the boxes that may be in the way for some point
-// of the bands although they are not at every point tried: the plan of all
-// swings, as one rectangle, comes over them.
+// boxes puts right what boxes do over bands of their sides or of the place of the
+// body: the points tried may have one in the way, or beside it, that is not so at
+// some point between. The plan of all swings, as one rectangle, says which may be
+// in the way at all; the places that the body falls from, which surely are.
 func (s *spans) boxes(j *Job) {
-	n := &s.layouts[0]
+	n, plan := &s.layouts[0], j.Point.Layout
 	lo, hi := ends(j)
-	for i := range j.Point.Layout.Obstacles {
-		o := &j.Point.Layout.Obstacles[i]
-		if o.level() || o.Moving || n.aside[i] == 0 || !n.shifts(j.Point.Layout, o, &lo, &hi) || !n.plan.meets(o, &lo, &hi, j.Point.Layout.HalfWidth) {
+	for i := range plan.Obstacles {
+		o := &plan.Obstacles[i]
+		if o.level() || o.Moving || !n.shifts(plan, o, &lo, &hi) {
 			continue
 		}
-		room := lo.Figures[o.Below]
-		for k, e := range [...]Evidence{Given, Modelled} {
-			of := indexOf(ClearanceLeft, e)
-			left := rig.Remains(room, n.need[k])
-			if math.IsNaN(left) {
-				continue
-			}
-			n.leaves(i, left)
-			switch span := &s.of[of]; {
-			case !span.known():
-				where := s.of[indexOf(ClearanceNeeded, e)].high.where
-				*span = span2(left, where)
-				n.open[k] = true
-			case left < span.low.value:
-				span.low = extreme{left, s.of[indexOf(ClearanceNeeded, e)].high.where}
-			}
+		if n.plan.meets(o, &lo, &hi, plan.HalfWidth) {
+			s.mayBeInTheWay(i, lo.Figures[o.Below])
+		}
+		if !n.start.within(o, &lo, &hi, plan.HalfWidth) {
+			s.mayBeAside()
+		}
+	}
+}
+
+// mayBeInTheWay lowers what is left to a box at the depth room, m, that is beside
+// the fall at some of the points tried, and has the body come to it where it goes
+// so deep.
+func (s *spans) mayBeInTheWay(i int, room float64) {
+	n := &s.layouts[0]
+	if k := &n.strikes[i]; math.IsNaN(k.high) && n.feet <= -room && !math.IsNaN(n.fastest) {
+		k.low, k.high = 0, n.fastest
+		if of := &s.of[indexOf(SpeedAtObstacle, Shape)]; !of.known() {
+			*of = span2(n.fastest, s.of[indexOf(FreeFall, Given)].high.where)
+		}
+	}
+	if n.aside[i] == 0 {
+		return
+	}
+	for k, e := range [...]Evidence{Given, Modelled} {
+		left := rig.Remains(room, n.need[k])
+		if math.IsNaN(left) {
+			continue
+		}
+		n.leaves(i, left)
+		where := s.of[indexOf(ClearanceNeeded, e)].high.where
+		switch of := &s.of[indexOf(ClearanceLeft, e)]; {
+		case !of.known():
+			*of = span2(left, where)
+			n.open[k] = true
+		case left < of.low.value:
+			of.low = extreme{left, where}
+		}
+	}
+}
+
+// mayBeAside raises the favourable end of what is left to what it is without any
+// box; where nothing else lies below, that end is open.
+func (s *spans) mayBeAside() {
+	n := &s.layouts[0]
+	for k, e := range [...]Evidence{Given, Modelled} {
+		of := &s.of[indexOf(ClearanceLeft, e)]
+		switch {
+		case !of.known():
+		case math.IsNaN(n.clear[k]):
+			n.open[k] = true
+		case n.clear[k] > of.high.value:
+			of.high = extreme{n.clear[k], of.high.where}
 		}
 	}
 }
@@ -470,4 +533,26 @@ func (r *rectangle) meets(o *PlannedObstacle, lo, hi *Case, halfWidth int) bool 
 	x0, x1 := order(min(lo.Figures[o.AlongFrom], lo.Figures[o.AlongTo]), max(hi.Figures[o.AlongFrom], hi.Figures[o.AlongTo]))
 	y0, y1 := order(min(lo.Figures[o.OutFrom], lo.Figures[o.OutTo]), max(hi.Figures[o.OutFrom], hi.Figures[o.OutTo]))
 	return x0-w <= r.x1 && x1+w >= r.x0 && y0-w <= r.y1 && y1+w >= r.y0
+}
+
+// within reports whether the rectangle lies in the plan of a box as small as its
+// bands allow, to either side of which the body reaches. One with an underside may
+// be above the body: of it nothing is sure.
+func (r *rectangle) within(o *PlannedObstacle, lo, hi *Case, halfWidth int) bool {
+	if halfWidth == NoFigure {
+		return true // counted as in the way at every point
+	}
+	if o.Height != NoFigure {
+		return false
+	}
+	inner := func(from, to int) (a, b float64) {
+		a, b = hi.Figures[from], lo.Figures[to]
+		if lo.Figures[from] > hi.Figures[to] { // written the other way round
+			a, b = hi.Figures[to], lo.Figures[from]
+		}
+		return a - lo.Figures[halfWidth], b + lo.Figures[halfWidth]
+	}
+	x0, x1 := inner(o.AlongFrom, o.AlongTo)
+	y0, y1 := inner(o.OutFrom, o.OutTo)
+	return x0 <= r.x0 && r.x1 <= x1 && y0 <= r.y0 && r.y1 <= y1
 }
