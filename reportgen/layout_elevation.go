@@ -382,7 +382,7 @@ func (e *elevation) feet() {
 // across dimensions how far the start is from the anchor, at the top.
 func (e *elevation) across() {
 	anchor, start := e.spot(e.layout().Anchor), e.spot(e.start())
-	if math.Abs(start.X-anchor.X) < 0.5 {
+	if math.Abs(start.X-anchor.X) < 0.499 { // half a millimetre is drawn, whatever its last bit
 		return
 	}
 	c := drawing.Chain{Level: true, Far: true, At: 11, Datum: anchor.X, Low: 0, High: e.scene.Width}

@@ -202,7 +202,8 @@ func isNegativeInf(x float64) bool { return math.IsInf(x, -1) }
 // name; it reports whether any of it does.
 func outlined(s *drawing.Scene, b, within drawing.Box, pen drawing.Pen, name string) bool {
 	in := drawing.Box{Left: max(b.Left, within.Left), Right: min(b.Right, within.Right), Top: max(b.Top, within.Top), Bottom: min(b.Bottom, within.Bottom)}
-	if in.Left >= in.Right || in.Top >= in.Bottom {
+	const onBorder = 1e-6 // mm: a side on the border of the drawing is in it, whatever its last bit
+	if in.Left >= in.Right-onBorder || in.Top >= in.Bottom-onBorder {
 		return false
 	}
 	p := func(x, y float64) drawing.Point { return drawing.Point{X: x, Y: y} }
@@ -210,10 +211,10 @@ func outlined(s *drawing.Scene, b, within drawing.Box, pen drawing.Pen, name str
 		there bool
 		a, b  drawing.Point
 	}{
-		{b.Top >= within.Top, p(in.Left, in.Top), p(in.Right, in.Top)},
-		{b.Right <= within.Right, p(in.Right, in.Top), p(in.Right, in.Bottom)},
-		{b.Bottom <= within.Bottom, p(in.Right, in.Bottom), p(in.Left, in.Bottom)},
-		{b.Left >= within.Left, p(in.Left, in.Bottom), p(in.Left, in.Top)},
+		{b.Top >= within.Top-onBorder, p(in.Left, in.Top), p(in.Right, in.Top)},
+		{b.Right <= within.Right+onBorder, p(in.Right, in.Top), p(in.Right, in.Bottom)},
+		{b.Bottom <= within.Bottom+onBorder, p(in.Right, in.Bottom), p(in.Left, in.Bottom)},
+		{b.Left >= within.Left-onBorder, p(in.Left, in.Bottom), p(in.Left, in.Top)},
 	} {
 		if side.there {
 			s.Line(side.a, side.b, pen)
