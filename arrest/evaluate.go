@@ -164,8 +164,8 @@ func (ev *evaluation) closedForms() {
 		if o.evidence == Shape {
 			e.From = ev.job.Point.Pulse.String()
 		}
-		if ev.job.Point.Layout != nil {
-			ev.laidOut(i, &e)
+		if ev.job.Point.Layout != nil && !ev.laidOut(i, &e) {
+			continue
 		}
 		if e.Bound == AtLeast {
 			e.Reach, e.High = e.High, nan

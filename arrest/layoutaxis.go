@@ -48,11 +48,14 @@ type siting struct {
 	lo, hi Case
 	axes   []axis
 	drawn  rig.Layout // memory to look at one point
+
+	near, far Case // anchor and position nearest to each other in plan, and farthest apart
 }
 
 func newSiting(j *Job) *siting {
 	g := &siting{plan: j.Point.Layout, pos: &j.Point.Layout.Positions[j.Point.Position]}
 	g.lo, g.hi = ends(j)
+	g.near, g.far = g.offsets()
 	return g
 }
 
@@ -143,13 +146,12 @@ func (g *siting) geometry(alone func(figure int) bool) {
 // apart adds an axis from the least to the greatest offset in plan by the figures;
 // none where all have one end.
 func (g *siting) apart(figures ...int) {
-	near, far := g.offsets()
 	for _, n := range figures {
 		if g.free(n) {
 			g.axes = append(g.axes, func(c *Case, high bool) {
-				from := &near
+				from := &g.near
 				if high {
-					from = &far
+					from = &g.far
 				}
 				for _, n := range figures {
 					c.Figures[n] = from.Figures[n]
@@ -255,11 +257,10 @@ func (g *siting) kinks(corner *Case, yield func(*Case)) {
 // end, and an anchor straight above it may be the nearest.
 func (g *siting) square(corner *Case, yield func(*Case)) {
 	out, behind := g.pos.Out, g.plan.BehindEdge
-	near, _ := g.offsets()
 	is := func(c *Case) bool {
 		return corner.Figures[out] == c.Figures[out] && corner.Figures[behind] == c.Figures[behind]
 	}
-	if !g.free(behind) || !is(&near) {
+	if !g.free(behind) || !is(&g.near) {
 		return
 	}
 	c := *corner
@@ -333,7 +334,7 @@ func (g *siting) lineEnds(corner *Case, yield func(*Case)) {
 	if level != *corner {
 		yield(&level)
 	}
-	near, far := g.offsets()
+	near, far := &g.near, &g.far
 	from := func(t float64) Case {
 		c := *corner
 		for _, n := range [...]int{g.pos.Along, g.pos.Out, p.BehindEdge} {
@@ -343,18 +344,17 @@ func (g *siting) lineEnds(corner *Case, yield func(*Case)) {
 		}
 		return c
 	}
-	var l rig.Layout
 	left := func(t float64) float64 {
 		c := from(t)
-		p.fill(&c, &l)
-		place := l.At(c.Position)
-		return l.Length - l.Locking - place.Distance
+		p.fill(&c, &g.drawn)
+		place := g.drawn.At(c.Position)
+		return g.drawn.Length - g.drawn.Locking - place.Distance
 	}
 	if !(left(0) > 0 && left(1) < 0) {
 		return
 	}
 	a, b := 0.0, 1.0
-	for range 60 {
+	for range halvings {
 		if m := (a + b) / 2; left(m) > 0 {
 			a = m
 		} else {

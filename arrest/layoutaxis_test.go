@@ -47,6 +47,26 @@ func TestRetractableRoomWithBothHeightsLow(t *testing.T) {
 	near(t, "least left", given(t, &r, ClearanceLeft, Given).Low, 10-needed, 1e-12)
 }
 
+// An item is missing, and for a part of the entries the connector ends before the
+// edge: the room needed stays a floor, down to nothing, and what is left has no
+// bound at all.
+func TestFloorStaysAFloorInRestraint(t *testing.T) {
+	tl := testLayout{anchor: "0 m", behind: "1 m .. 3 m", edge: rig.RoundEdge, dring: "1.5 m", length: "2 m", slack: "0 m",
+		positions: [][2]string{{"0 m", "-0.9 m"}}, obstacles: []testObstacle{{below: "4 m"}}, datum: rig.BelowFeet,
+		items: map[rig.Item]string{rig.ItemDeceleration: "1 m", rig.ItemHarness: "0.3 m", rig.ItemLineStretch: "0 m", rig.ItemAnchor: "0 m"}}
+	res := Evaluate(laidOutJob(t, tl))
+	if !tells(&res, LayoutRestrainedInPart) || !tells(&res, LayoutItemsMissing) {
+		t.Fatal("the layout is not restrained in part with an item missing")
+	}
+	if e := given(t, &res, ClearanceNeeded, Given); e.Bound != AtLeast || !math.IsNaN(e.High) || e.Low != 0 {
+		t.Errorf("needed: %s, %v to %v", e.Bound, e.Low, e.High)
+	}
+	// Less than the sum may be left, and more where nobody falls: nothing bounds it.
+	if i := res.estimate(ClearanceLeft, Given); i >= 0 {
+		t.Errorf("left: %+v", res.Estimates[i])
+	}
+}
+
 // A body that swings comes to rest nobody knows where without a path, so that the
 // total fall of one that does not is a floor for both together.
 func TestTotalFallBesideASwingIsAFloor(t *testing.T) {

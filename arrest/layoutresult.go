@@ -39,11 +39,11 @@ func (ev *evaluation) value(i int) float64 {
 
 // laidOut adds to an estimate what belongs to the layout: which position it is
 // of, what keeps it from clearing anything, and the bound of a sum that lacks
-// an item.
-func (ev *evaluation) laidOut(i int, e *Estimate) {
+// an item. It reports whether anything is left to say.
+func (ev *evaluation) laidOut(i int, e *Estimate) bool {
 	o, l := &outputs[i], ev.job.Point.Layout
 	if o.rests&(onFall|onLayout) == 0 {
-		return
+		return true
 	}
 	if len(l.Positions) > 1 {
 		e.Place = l.Positions[ev.spans.at[i]].Name
@@ -65,11 +65,16 @@ func (ev *evaluation) laidOut(i int, e *Estimate) {
 	if o.rests&ofLayout != 0 && e.Evidence == Shape {
 		e.From = Inextensible
 	}
-	if ev.restrainedInPart() && e.Quantity != RestraintReach && e.Quantity != OffsetAngle {
-		e.open()
-		return
+	open := ev.restrainedInPart() && e.Quantity != RestraintReach && e.Quantity != OffsetAngle
+	if e.Quantity == ClearanceLeft && floor && (open || ev.leftOpen(e.Evidence)) {
+		return false // an item is missing below, and nothing bounds it above
 	}
+	swung := e.Quantity == TotalFallDistance && e.Evidence == Given && ev.swingsToo()
 	switch {
+	case open:
+		if e.open(); floor && e.Quantity == ClearanceNeeded || swung {
+			e.Bound = AtLeast
+		}
 	case e.Evidence == Modelled && ev.anySwing() && e.Method == "M-15":
 		e.Method = "M-24"
 	case o.rests&ofLayout != 0 && e.Evidence == Shape:
@@ -80,16 +85,17 @@ func (ev *evaluation) laidOut(i int, e *Estimate) {
 		e.Low = 0
 	case floor && e.Quantity == ClearanceNeeded:
 		e.Bound = AtLeast
-	case e.Quantity == TotalFallDistance && e.Evidence == Given && ev.swingsToo():
+	case swung:
 		e.Bound = AtLeast
 		if ev.straightToo() {
 			e.Low = min(e.Low, ev.spans.of[indexOf(FreeFall, Given)].low.value)
 		}
-	case e.Quantity == ClearanceLeft && !floor && ev.leftOpen(e.Evidence):
+	case e.Quantity == ClearanceLeft && ev.leftOpen(e.Evidence):
 		e.Bound, e.High, e.Value = AtLeast, nan, nan
 	case floor && e.Quantity == ClearanceLeft:
 		e.Bound, e.Low, e.Value = AtMost, nan, nan
 	}
+	return true
 }
 
 // straightToo reports whether from some position the body swings for a part of

@@ -7,9 +7,8 @@ import (
 )
 
 // A strike is what comes of one obstacle over the bands: the speeds with which
-// the body comes to it, m/s, and the position where the greatest is.
+// the body comes to it, m/s.
 type strike struct {
-	position  int
 	falling   bool // before the first pull
 	low, high float64
 	force     float64 // least mean force of the hit where its stop is stated, N; NaN else
@@ -33,7 +32,6 @@ type layoutNotes struct {
 	passed     int       // the points at which the swing in time comes to an obstacle
 	short      bool      // a room left is below zero
 	left       []float64 // by obstacle: the least that is left to it, m; NaN where it is nowhere in the way
-	fall       float64   // greatest free fall, m
 	travel     float64   // greatest travel of the path in a room, m
 	peak       float64   // greatest peak of a swing, N, and that of any later one
 	later      float64
@@ -54,10 +52,10 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 	r := p.Layout
 	n.position = c.Position
 	if n.tried == 0 {
-		n.fall, n.travel, n.peak, n.later, n.fastest = nan, nan, nan, nan, nan
+		n.travel, n.peak, n.later, n.fastest = nan, nan, nan, nan
 		n.strikes = make([]strike, r.Layout.ObstacleCount)
 		for i := range n.strikes {
-			n.strikes[i] = strike{c.Position, false, nan, nan, nan}
+			n.strikes[i] = strike{false, nan, nan, nan}
 		}
 		n.aside, n.left = make([]int, len(n.strikes)), make([]float64, len(n.strikes))
 		for i := range n.left {
@@ -84,7 +82,6 @@ func (n *layoutNotes) note(c *Case, p *Point) {
 	count(&n.edge, r.Place.OverEdge || r.Place.EdgeLater)
 	count(&n.unrated, r.Place.Unrated)
 	count(&n.face, r.Place.Plane.IntoFace && r.swings())
-	n.fall = greater(n.fall, r.Place.FreeFall)
 	count(&n.touched, !math.IsNaN(r.fastestPass()))
 	n.fastest = greater(n.fastest, r.Swing.LowestHigh)
 	n.givenFloor = n.givenFloor || r.Given.Floor
@@ -397,7 +394,7 @@ func (s *spans) overFalls(g *siting) (partImpossible bool) {
 func (s *spans) fallAt(c *Case) float64 {
 	var l rig.Layout
 	c.Layout.fill(c, &l)
-	return l.At(c.Position).FreeFall
+	return decimal(l.At(c.Position).FreeFall)
 }
 
 // figures lists the figures of the layout that a position has.
