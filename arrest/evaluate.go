@@ -40,13 +40,19 @@ func Evaluate(j *Job) Result {
 func estimate(j *Job, known *spans, inPart bool) (ev *evaluation, partImpossible bool) {
 	ev, partImpossible = begin(j, known, inPart)
 	ev.res.Estimates = make([]Estimate, 0, len(outputs)+4*(1+len(j.Ratings)))
+	ev.estimates()
+	return ev, partImpossible
+}
+
+// estimates makes estimates of the spans, the entries and the ratings, and
+// compares them with each other.
+func (ev *evaluation) estimates() {
 	ev.closedForms()
 	ev.entered()
-	for i := range j.Ratings {
+	for i := range ev.job.Ratings {
 		ev.rating(i)
 	}
 	ev.contradictions()
-	return ev, partImpossible
 }
 
 // ShowWorking adds to r, the result of j, the working line by line.

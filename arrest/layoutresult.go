@@ -429,8 +429,8 @@ var itemWords = [rig.ItemCount]string{
 // ItemWord returns the plain name of an item of a clearance.
 func ItemWord(it rig.Item) string { return itemWords[it] }
 
-// itemNames lists the items of a set.
-func itemNames(set rig.Items) string {
+// ItemNames lists the items of a set by their plain names.
+func ItemNames(set rig.Items) string {
 	var names []string
 	for it := range rig.ItemCount {
 		if set.Has(it) {
@@ -476,7 +476,7 @@ func (ev *evaluation) warnSums(plan *LayoutPlan) {
 			sum = &x.room.Anchor
 		}
 		if sum.Missing != 0 {
-			ev.tell(LayoutItemsMissing, Text(string(x.evidence)), Text(itemNames(sum.Missing)), Figure(quantity.Length, sum.Present, quantity.Down))
+			ev.tell(LayoutItemsMissing, Text(string(x.evidence)), Text(ItemNames(sum.Missing)), Figure(quantity.Length, sum.Present, quantity.Down))
 		}
 		if apart := ev.datumsApart(plan); math.Abs(apart) > datumSlack && !math.IsNaN(x.room.Clearance.Apart(t.Run.Layout.Anchor.Z)) {
 			ev.tell(LayoutDatumsApart, Text(string(x.evidence)), Figure(quantity.Length, math.Abs(apart), quantity.Down))

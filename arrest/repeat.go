@@ -77,12 +77,7 @@ func (r *Repeat) Evaluate() *Result {
 	At(&r.Job.Point, &ev.written)
 	r.overCorners()
 	ev.assumedShape()
-	ev.closedForms()
-	ev.entered()
-	for i := range r.Job.Ratings {
-		ev.rating(i)
-	}
-	ev.contradictions()
+	ev.estimates()
 	ev.res.Warnings = ev.res.Warnings[:0]
 	return &ev.res
 }
@@ -131,13 +126,5 @@ func (r *Repeat) overCorners() {
 		}
 		in.Set(&r.corner, end)
 	}
-	if partImpossible {
-		overEdge(&r.Job, s)
-	}
-	if r.Job.Moving() {
-		throughZero(&r.Job, s)
-		widenMagnitudes(s)
-	} else if bothGiven(&r.Job) && s.of[indexOf(PeakForce, Given)].known() {
-		lowerFloor(&r.Job, s)
-	}
+	s.overTurns(&r.Job, partImpossible)
 }

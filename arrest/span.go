@@ -181,19 +181,25 @@ func overBox(j *Job) (s *spans, partImpossible bool) {
 	} else {
 		partImpossible = s.overAll()
 	}
-	if partImpossible {
-		overEdge(j, s)
-	}
 	if j.Point.Path != nil && j.Point.Layout == nil {
 		searchPath(s)
+	}
+	s.overTurns(j, partImpossible)
+	return s, partImpossible
+}
+
+// overTurns widens the spans by the points beside the corners at which a closed
+// form has an end, and by the edge of what can happen.
+func (s *spans) overTurns(j *Job, partImpossible bool) {
+	if partImpossible {
+		overEdge(j, s)
 	}
 	if j.Moving() {
 		throughZero(j, s)
 		widenMagnitudes(s)
-	} else if s.of[indexOf(PeakForce, Given)].known() {
+	} else if bothGiven(j) && s.of[indexOf(PeakForce, Given)].known() {
 		lowerFloor(j, s)
 	}
-	return s, partImpossible
 }
 
 // overAll fills the spans from all corners.
@@ -301,9 +307,6 @@ func ends(j *Job) (lo, hi Case) {
 // M-06. Only needed where both distance and time are given: else corners do.
 func lowerFloor(j *Job, s *spans) {
 	lo, hi := ends(j)
-	if lo.Distance <= 0 || lo.Time <= 0 {
-		return
-	}
 	var a, b Point
 	At(&lo, &a)
 	At(&hi, &b)

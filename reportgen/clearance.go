@@ -117,17 +117,6 @@ func holders(room *arrest.Room, of rig.Item) []string {
 	return list
 }
 
-// itemNames names the items of a set.
-func itemNames(set rig.Items) string {
-	var list []string
-	for it := range rig.ItemCount {
-		if set.Has(it) {
-			list = append(list, arrest.ItemWord(it))
-		}
-	}
-	return strings.Join(list, ", ")
-}
-
 // itemFrom says where the figure of an item comes from, and what else it holds.
 func (b *builder) itemFrom(c *clearing, it rig.Item) string {
 	e := &c.room.Clearance.Entries[it]
@@ -139,7 +128,7 @@ func (b *builder) itemFrom(c *clearing, it rig.Item) string {
 	}
 	from := b.itemSource(c, it)
 	if e.Includes != 0 {
-		from += "\n" + b.say(itemsIncluded, itemNames(e.Includes))
+		from += "\n" + b.say(itemsIncluded, arrest.ItemNames(e.Includes))
 	}
 	return from
 }
@@ -235,9 +224,9 @@ func (b *builder) apart(x float64) string {
 func (b *builder) sum(s *rig.Sum) string {
 	switch {
 	case s.Twice != 0:
-		return b.say(sumTwice, itemNames(s.Twice))
+		return b.say(sumTwice, arrest.ItemNames(s.Twice))
 	case s.Missing != 0:
-		return b.say(sumFloor, b.room(s.Present, quantity.Down), itemNames(s.Missing))
+		return b.say(sumFloor, b.room(s.Present, quantity.Down), arrest.ItemNames(s.Missing))
 	}
 	return b.say(sumNeeded, b.room(s.Needed, quantity.Up))
 }

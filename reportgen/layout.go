@@ -358,5 +358,5 @@ func (b *builder) layoutWay(q arrest.Quantity) (way string, ok bool) {
 	if missing == 0 {
 		return "", false
 	}
-	return b.say(missingWay, itemNames(missing)), true
+	return b.say(missingWay, arrest.ItemNames(missing)), true
 }

@@ -2,8 +2,8 @@ package reportgen
 
 import (
 	"math"
-	"strings"
 
+	"arrestcheck/arrest"
 	"arrestcheck/arrest/rig"
 	drawing "arrestcheck/reportgen/figure"
 )
@@ -72,7 +72,7 @@ func (f *drawnFall) dimensions() chain {
 	}
 	f.left(&c)
 	if f.room.Floor {
-		c.notes = append(c.notes, f.say(missingNote, f.missing(sum.Missing)))
+		c.notes = append(c.notes, f.say(missingNote, arrest.ItemNames(sum.Missing)))
 	}
 	return c
 }
@@ -85,17 +85,10 @@ func (f *drawnFall) itemWord(it rig.Item) string {
 	case it == rig.ItemFeet:
 		return feetWords[f.sub]
 	}
-	return drawnItems[it]
-}
-
-func (f *drawnFall) missing(set rig.Items) string {
-	var words []string
-	for _, it := range itemOrder {
-		if set.Has(it) {
-			words = append(words, drawnItems[it])
-		}
+	if word, own := drawnItems[it]; own {
+		return word
 	}
-	return strings.Join(words, ", ")
+	return arrest.ItemWord(it)
 }
 
 // left adds what is left to the nearest obstacle.
@@ -136,7 +129,7 @@ func (f *drawnFall) wayDown(note string) chain {
 		c.add(f, swingDropPart, p.SwingDrop, true)
 	}
 	if isNumber(f.travel) {
-		word := drawnItems[rig.ItemDeceleration]
+		word := arrest.ItemWord(rig.ItemDeceleration)
 		if f.path {
 			word = modelPart
 		}

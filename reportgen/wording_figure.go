@@ -78,17 +78,11 @@ const (
 
 var edgeKinds = map[rig.Edge]string{rig.RoundEdge: "round edge", rig.SharpEdge: "sharp edge"}
 
-// drawnItems name the items of a clearance in a chain of dimensions.
+// drawnItems name the items of a clearance that a chain of dimensions calls
+// otherwise than the tables do.
 var drawnItems = map[rig.Item]string{
-	rig.ItemFreeFall:     freeFallPart,
-	rig.ItemConnector:    "connector, taut",
-	rig.ItemDeceleration: "deceleration distance",
-	rig.ItemLineStretch:  "line stretch",
-	rig.ItemHarness:      "harness stretch",
-	rig.ItemFeet:         "D-ring to feet",
-	rig.ItemAnchor:       "give of the anchor",
-	rig.ItemSwingDrop:    swingDropPart,
-	rig.ItemMargin:       "margin",
+	rig.ItemConnector: "connector, taut",
+	rig.ItemSwingDrop: swingDropPart,
 }
 
 // otherDatumPart is what the sum from the other datum has more, which counts.
