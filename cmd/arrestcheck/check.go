@@ -23,7 +23,7 @@ faults told before anything is printed; one refused file refuses the run.
 report says so, and the figure is open: it has lost its source. --explain
 prints, in place of the report, what keeps one row from being settled and what
 would settle it. --series writes the modelled arrest of a job with a connector
-path as CSV: time, force, speed and travel.
+path as CSV: time, force, speed and travel of a stop straight down.
 
 --figure draws one job: elevation and plan of a layout to scale, force-time and
 force-travel of a modelled arrest. With =FILE behind the kind it is a new SVG

@@ -21,6 +21,10 @@ const seriesHeader = "t (s),F (N),v (m/s),x (m)\n"
 // downwards.
 func series(s *reportgen.Sheet) (data []byte, remark string, err error) {
 	run, at := seriesRun(s.Result)
+	if run == nil && s.File.Job.Point.Path != nil {
+		return nil, "", &usageError{fmt.Sprintf("--series: the body of %q swings, or does not fall at all: a series is that of a stop straight down", s.File.Name),
+			"draw the force of a swing with --figure force-time=FILE, or leave --series out"}
+	}
 	if run == nil {
 		return nil, "", &usageError{fmt.Sprintf("--series: %q has no connector path: nothing is worked out in time", s.File.Name),
 			"describe the parts between anchor and body, [[connector]], or leave --series out"}
